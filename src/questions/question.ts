@@ -1,0 +1,140 @@
+import type { Day } from '../terms/day.ts';
+import type { Level } from '../terms/level.ts';
+import type { Position } from '../terms/problem.ts';
+import type { ReturnType } from '../terms/returns.ts';
+
+/** Which returns a question is about, before the feed has been looked at. */
+export type Window =
+  | { readonly kind: 'returns'; readonly count: number }
+  | { readonly kind: 'span'; readonly amount: number; readonly unit: 'week' | 'month' | 'year' }
+  | { readonly kind: 'yearToDate' }
+  | { readonly kind: 'all' }
+  | { readonly kind: 'since'; readonly day: Day }
+  | { readonly kind: 'between'; readonly from: Day; readonly to: Day };
+
+export type Side = 'both' | 'above' | 'below';
+
+/** A size as a decimal fraction per day or per year: 20bp is 0.002. */
+export type Size = { readonly fraction: number; readonly per: 'day' | 'year' };
+
+export const tailModels = ['historical', 'normal', 'student', 'filtered', 'peaks'] as const;
+export type TailModel = (typeof tailModels)[number];
+
+/** What a loss is reckoned on: an amount of money (currency null: the ticker's own) or a number of shares; negative is short. */
+export type Exposure =
+  | { readonly kind: 'money'; readonly amount: number; readonly currency: string | null }
+  | { readonly kind: 'shares'; readonly shares: number };
+
+/** What every statistical question has. `windowAsked` is false where the default window was taken. */
+export type Sample = {
+  readonly window: Window;
+  readonly windowAsked: boolean;
+  readonly returnType: ReturnType;
+};
+
+export type IntervalQuestion = Sample & {
+  readonly verb: 'interval';
+  readonly of: 'mean' | 'vol' | 'ratio';
+  readonly ticker: string;
+  readonly level: Level;
+  readonly side: Side;
+  /** The dependence-proof interval comes first. */
+  readonly robust: boolean;
+  /** Annual figures lead. */
+  readonly annual: boolean;
+};
+
+export type ClaimQuestion = Sample & {
+  readonly verb: 'claim';
+  readonly of: 'mean' | 'ratio';
+  readonly ticker: string;
+  /** The claimed mean as a decimal fraction per day or year, or the claimed ratio of mean to standard deviation. */
+  readonly claimed: Size;
+  readonly level: Level;
+  readonly side: Side;
+  readonly robust: boolean;
+};
+
+export type NeedQuestion = Sample & {
+  readonly verb: 'need';
+  readonly ticker: string;
+  /** Half-width wanted, and the difference to be detected: the same size serves for both. */
+  readonly size: Size;
+  readonly level: Level;
+  /** The power as a level: 80% unless said. */
+  readonly power: Level;
+};
+
+export type CompareQuestion = Sample & {
+  readonly verb: 'compare';
+  readonly level: Level;
+} & (
+    | { readonly between: 'tickers'; readonly tickers: readonly string[] }
+    /** Returns before the day against returns from that day on, within the window (default: the whole history). */
+    | { readonly between: 'periods'; readonly ticker: string; readonly splitDay: Day }
+  );
+
+export type TailQuestion = Sample & {
+  readonly verb: 'tail';
+  readonly ticker: string;
+  readonly tailLevel: Level;
+  /** Level of the tail figure's own interval. */
+  readonly confidence: Level;
+  readonly horizonDays: number;
+  readonly exposure: Exposure | null;
+  /** null: all five. */
+  readonly model: TailModel | null;
+  /** A daily loss whose rarity is asked, as a positive decimal fraction; null for VaR and ES. */
+  readonly beyond: number | null;
+};
+
+export type ShapeQuestion = Sample & {
+  readonly verb: 'shape';
+  readonly ticker: string;
+  readonly confidence: Level;
+};
+
+export type BacktestQuestion = {
+  readonly verb: 'backtest';
+  readonly ticker: string;
+  readonly tailLevel: Level;
+  /** Estimation window in returns (`on window 500d`; 250 unless said). */
+  readonly estimationReturns: number;
+  /** The days that are judged: the last 500 unless said. */
+  readonly window: Window;
+  readonly windowAsked: boolean;
+  readonly returnType: ReturnType;
+  readonly model: TailModel | null;
+};
+
+export type HelpQuestion = { readonly verb: 'help'; readonly topic: string | null };
+export type FeedQuestion = { readonly verb: 'feed'; readonly ticker: string | null };
+
+export type StatisticalQuestion =
+  | IntervalQuestion
+  | ClaimQuestion
+  | NeedQuestion
+  | CompareQuestion
+  | TailQuestion
+  | ShapeQuestion
+  | BacktestQuestion;
+
+export type Question = StatisticalQuestion | HelpQuestion | FeedQuestion;
+
+export type Verb = Question['verb'];
+
+/** How the answer is wanted beside its words. */
+export type Wish = 'picture' | 'json';
+
+/**
+ * A question that was read. `canonical` writes it out in full in one fixed form: the same question always has the same
+ * canonical text, whatever the order and spelling it was typed in. `assumed` says in words what was not typed.
+ */
+export type ReadQuestion = {
+  readonly question: Question;
+  readonly canonical: string;
+  readonly assumed: readonly string[];
+  readonly wishes: readonly Wish[];
+  /** Where in the text this question stood. */
+  readonly position: Position;
+};
