@@ -2,15 +2,7 @@ import type { Day } from '../terms/day.ts';
 import type { Level } from '../terms/level.ts';
 import type { Position } from '../terms/problem.ts';
 import type { ReturnType } from '../terms/returns.ts';
-
-/** Which returns a question is about, before the feed has been looked at. */
-export type Window =
-  | { readonly kind: 'returns'; readonly count: number }
-  | { readonly kind: 'span'; readonly amount: number; readonly unit: 'week' | 'month' | 'year' }
-  | { readonly kind: 'yearToDate' }
-  | { readonly kind: 'all' }
-  | { readonly kind: 'since'; readonly day: Day }
-  | { readonly kind: 'between'; readonly from: Day; readonly to: Day };
+import type { Window } from '../terms/window.ts';
 
 export type Side = 'both' | 'above' | 'below';
 

@@ -1,0 +1,34 @@
+import { type DigitOptions, decimalsOfThree, digits } from './digits.ts';
+import { type Bounded, decimalsOfBounds, type WrittenBounds, writeBounds } from './estimate.ts';
+
+/** Decimal fractions become percent here and nowhere else. */
+export const inPercent = (fraction: number): number => fraction * 100;
+
+const scaled = (bounds: Bounded): Bounded => ({
+  estimate: inPercent(bounds.estimate),
+  lower: bounds.lower === null ? null : inPercent(bounds.lower),
+  upper: bounds.upper === null ? null : inPercent(bounds.upper),
+});
+
+/** The decimals that percent figures of these decimal-fraction bounds take; landmarks are decimal fractions too. */
+export const percentDecimals = (bounds: Bounded, landmarks: readonly number[] = [0]): number =>
+  decimalsOfBounds(scaled(bounds), landmarks.map(inPercent));
+
+/** Bounds given as decimal fractions, written as percent digits without the sign %. */
+export const percentBounds = (
+  bounds: Bounded,
+  decimals: number = percentDecimals(bounds),
+  options: Pick<DigitOptions, 'plus'> = { plus: true },
+): WrittenBounds => writeBounds(scaled(bounds), decimals, options);
+
+/** `+0.06%`. Without decimals given: three significant digits. */
+export const percent = (fraction: number, decimals?: number, options: DigitOptions = {}): string => {
+  const value = inPercent(fraction);
+  return `${digits(value, decimals ?? decimalsOfThree(value), options)}%`;
+};
+
+/** Basis points with three significant digits: `20bp`. */
+export const basisPoints = (fraction: number): string => {
+  const value = fraction * 10_000;
+  return `${digits(value, Number.isInteger(Math.round(value * 1e9) / 1e9) ? 0 : decimalsOfThree(value))}bp`;
+};
