@@ -1,0 +1,98 @@
+import type { Button, Reply, Table } from './reply.ts';
+import { furtherWarnings, inWords, shownWarnings } from './words.ts';
+
+/** The platform's plain text object: nothing in it is ever read as markup, a link, a mention or an emoji. */
+export type PlainText = { readonly type: 'plain_text'; readonly text: string; readonly emoji: false };
+
+export type Block =
+  | { readonly type: 'section'; readonly text: PlainText }
+  | { readonly type: 'context'; readonly elements: readonly PlainText[] }
+  | {
+      readonly type: 'table';
+      readonly rows: readonly (readonly { readonly type: 'raw_text'; readonly text: string }[])[];
+      readonly column_settings: readonly { readonly align: 'left' | 'right'; readonly is_wrapped: boolean }[];
+    }
+  | {
+      readonly type: 'actions';
+      readonly elements: readonly {
+        readonly type: 'button';
+        readonly action_id: string;
+        readonly text: PlainText;
+        readonly value: string;
+        readonly accessibility_label: string;
+      }[];
+    };
+
+export type BlockMessage = { readonly text: string; readonly blocks: readonly Block[] };
+
+/** The platform's figures for a message, from its published block reference. */
+const longest = {
+  sectionText: 3000,
+  contextText: 2000,
+  fallbackText: 4000,
+  buttonText: 75,
+  buttonValue: 2000,
+};
+
+const emptyCell = '–';
+const zeroWidthJoiner = '\u200d';
+
+/** Cut at a word, with an ellipsis, so that the platform takes it. */
+const clipped = (text: string, room: number): string =>
+  text.length <= room ? text : `${text.slice(0, room - 1).replace(/\s+\S*$/, '')}…`;
+
+const plain = (text: string, room: number): PlainText => ({
+  type: 'plain_text',
+  text: clipped(text === '' ? emptyCell : text, room),
+  emoji: false,
+});
+
+const section = (text: string): Block => ({ type: 'section', text: plain(text, longest.sectionText) });
+
+const context = (texts: readonly string[]): Block => ({
+  type: 'context',
+  elements: texts.map((text) => plain(text, longest.contextText)),
+});
+
+const cell = (text: string) => ({ type: 'raw_text' as const, text: text === '' ? emptyCell : text });
+
+const tableBlock = ({ columns, rows }: Table): Block => ({
+  type: 'table',
+  rows: [
+    columns.map(({ head }) => cell(head)),
+    ...rows.map((row) => columns.map((_, index) => cell(row[index] ?? ''))),
+  ],
+  column_settings: columns.map(({ align }) => ({ align, is_wrapped: true })),
+});
+
+const buttonElement = ({ action, label, answerId, question }: Button) => ({
+  type: 'button' as const,
+  action_id: action,
+  text: plain(label, longest.buttonText),
+  value: clipped(JSON.stringify({ id: answerId, question }), longest.buttonValue),
+  accessibility_label: clipped(`${label} of answer ${answerId}`, longest.buttonText),
+});
+
+/** The top-level text is read as markup by the platform, so whatever could be markup in it is made harmless. */
+export const escapeFallback = (text: string): string =>
+  text
+    .replace(/&/g, '&amp;')
+    .replace(/</g, '&lt;')
+    .replace(/>/g, '&gt;')
+    .replace(/[@#]/g, (mark) => `${mark}${zeroWidthJoiner}`)
+    .replace(/:\/\//g, `:${zeroWidthJoiner}//`);
+
+/** The reply as a message of the workspace: blocks for the eye, and one text for notifications and screen readers. */
+export const toBlocks = (reply: Reply): BlockMessage => {
+  const further = furtherWarnings(reply);
+  const blocks: Block[] = [section(reply.sentence)];
+  if (reply.table !== null) blocks.push(tableBlock(reply.table));
+  for (const { head, lines } of reply.passages)
+    blocks.push(section([...(head === null ? [] : [head]), ...lines].join('\n')));
+  const warnings = shownWarnings(reply).map((warning) => `Caution: ${warning}`);
+  if (warnings.length > 0) blocks.push(context(further === null ? warnings : [...warnings, further]));
+  if (reply.quietLine !== null) blocks.push(context([reply.quietLine]));
+  if (reply.caution !== null) blocks.push(context([reply.caution]));
+  if (reply.buttons.length > 0) blocks.push({ type: 'actions', elements: reply.buttons.map(buttonElement) });
+  return { text: clipped(escapeFallback(inWords(reply)), longest.fallbackText), blocks };
+};
