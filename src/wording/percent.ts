@@ -32,3 +32,9 @@ export const basisPoints = (fraction: number): string => {
   const value = fraction * 10_000;
   return `${digits(value, Number.isInteger(Math.round(value * 1e9) / 1e9) ? 0 : decimalsOfThree(value))}bp`;
 };
+
+/** A level with just the digits it was asked with: `95%`, `97.5%`, `99.9%`. */
+export const levelInWords = (level: number): string => {
+  const text = String(Math.round(inPercent(level) * 1e8) / 1e8);
+  return `${text}%`;
+};
