@@ -1,0 +1,250 @@
+/**
+ * A smooth function to be maximised. Fills the gradient and the row-major second derivatives at `point` and returns
+ * the value; −Infinity where the function does not exist, in which case the derivatives are not read.
+ */
+export type SmoothObjective = (point: Float64Array, gradient: Float64Array, hessian: Float64Array) => number;
+
+/** `lower` and `upper` bound each parameter; −Infinity and Infinity leave it free. */
+export type NewtonSettings = {
+  readonly lower: Float64Array;
+  readonly upper: Float64Array;
+  /** Finished when every free parameter has |gradient|·standard error at or below this. */
+  readonly tolerance: number;
+  readonly maxSteps: number;
+};
+
+export type NewtonMaximum = {
+  readonly converged: boolean;
+  readonly value: number;
+  readonly point: Float64Array;
+  /** −1 on the lower bound, 1 on the upper, 0 free; a parameter on a bound has a gradient that points outward. */
+  readonly side: Int8Array;
+  /** From the inverse of the negative second derivatives over the free parameters; 0 for a parameter on its bound. */
+  readonly standardErrors: Float64Array;
+  readonly steps: number;
+};
+
+type Workspace = {
+  readonly size: number;
+  readonly point: Float64Array;
+  readonly gradient: Float64Array;
+  readonly hessian: Float64Array;
+  readonly trial: Float64Array;
+  readonly trialGradient: Float64Array;
+  readonly trialHessian: Float64Array;
+  readonly factor: Float64Array;
+  readonly step: Float64Array;
+  readonly side: Int8Array;
+  readonly errors: Float64Array;
+};
+
+const createWorkspace = (start: Float64Array): Workspace => {
+  const size = start.length;
+  const vector = () => new Float64Array(size);
+  const matrix = () => new Float64Array(size * size);
+  return {
+    size,
+    point: start.slice(),
+    gradient: vector(),
+    hessian: matrix(),
+    trial: vector(),
+    trialGradient: vector(),
+    trialHessian: matrix(),
+    factor: matrix(),
+    step: vector(),
+    side: new Int8Array(size),
+    errors: vector(),
+  };
+};
+
+/** A parameter on a bound stays there while its gradient points outward. */
+const holdBounds = (work: Workspace, settings: NewtonSettings): void => {
+  for (let i = 0; i < work.size; i += 1) {
+    const at = work.point[i] as number;
+    const slope = work.gradient[i] as number;
+    const onLower = at <= (settings.lower[i] as number) && slope <= 0;
+    const onUpper = at >= (settings.upper[i] as number) && slope >= 0;
+    work.side[i] = onLower ? -1 : onUpper ? 1 : 0;
+  }
+};
+
+/**
+ * Cholesky factor of −hessian + ridge·|diagonal| over the free parameters; a held one gets a unit row.
+ * False where the matrix is not positive definite.
+ */
+const factorise = (work: Workspace, ridge: number): boolean => {
+  const { size, hessian, factor, side } = work;
+  for (let row = 0; row < size; row += 1) {
+    for (let column = 0; column <= row; column += 1) {
+      const held = side[row] !== 0 || side[column] !== 0;
+      const own = row === column;
+      const entry = hessian[row * size + column] as number;
+      let sum = held ? (own ? 1 : 0) : -entry + (own ? ridge * Math.max(Math.abs(entry), 1e-8) : 0);
+      for (let k = 0; k < column; k += 1)
+        sum -= (factor[row * size + k] as number) * (factor[column * size + k] as number);
+      if (own) {
+        if (!(sum > 0)) return false;
+        factor[row * size + row] = Math.sqrt(sum);
+      } else factor[row * size + column] = sum / (factor[column * size + column] as number);
+    }
+  }
+  return true;
+};
+
+/** Solves factor·factorᵀ·result = right in place. */
+const substitute = (size: number, factor: Float64Array, right: Float64Array): void => {
+  for (let row = 0; row < size; row += 1) {
+    let sum = right[row] as number;
+    for (let k = 0; k < row; k += 1) sum -= (factor[row * size + k] as number) * (right[k] as number);
+    right[row] = sum / (factor[row * size + row] as number);
+  }
+  for (let row = size - 1; row >= 0; row -= 1) {
+    let sum = right[row] as number;
+    for (let k = row + 1; k < size; k += 1) sum -= (factor[k * size + row] as number) * (right[k] as number);
+    right[row] = sum / (factor[row * size + row] as number);
+  }
+};
+
+const fillErrors = (work: Workspace): void => {
+  const unit = new Float64Array(work.size);
+  for (let i = 0; i < work.size; i += 1) {
+    if (work.side[i] !== 0) {
+      work.errors[i] = 0;
+      continue;
+    }
+    unit.fill(0);
+    unit[i] = 1;
+    substitute(work.size, work.factor, unit);
+    work.errors[i] = Math.sqrt(unit[i] as number);
+  }
+};
+
+const isFinished = (work: Workspace, tolerance: number): boolean => {
+  for (let i = 0; i < work.size; i += 1) {
+    if (work.side[i] !== 0) continue;
+    if (!(Math.abs(work.gradient[i] as number) * (work.errors[i] as number) <= tolerance)) return false;
+  }
+  return true;
+};
+
+const firstRidge = 1e-3;
+const ridgeGrowth = 10;
+const mostRidges = 30;
+
+/** Newton's step where the second derivatives allow it, else the smallest ridge that makes it a step uphill. */
+const chooseStep = (work: Workspace): boolean => {
+  let ridge = 0;
+  for (let attempt = 0; attempt < mostRidges; attempt += 1) {
+    if (factorise(work, ridge)) {
+      for (let i = 0; i < work.size; i += 1)
+        work.step[i] = work.side[i] === 0 ? (work.gradient[i] as number) : 0;
+      substitute(work.size, work.factor, work.step);
+      return true;
+    }
+    ridge = ridge === 0 ? firstRidge : ridge * ridgeGrowth;
+  }
+  return false;
+};
+
+/** A parameter on a bound whose step leaves the box is held too; true where one was found. */
+const holdLeaving = (work: Workspace, settings: NewtonSettings): boolean => {
+  let found = false;
+  for (let i = 0; i < work.size; i += 1) {
+    if (work.side[i] !== 0) continue;
+    const at = work.point[i] as number;
+    const step = work.step[i] as number;
+    const leavesLower = at <= (settings.lower[i] as number) && step < 0;
+    const leavesUpper = at >= (settings.upper[i] as number) && step > 0;
+    if (leavesLower || leavesUpper) {
+      work.side[i] = leavesLower ? -1 : 1;
+      found = true;
+    }
+  }
+  return found;
+};
+
+/** Puts point + fraction·step, kept inside the bounds, into trial; returns the first-order gain. */
+const placeTrial = (work: Workspace, settings: NewtonSettings, fraction: number): number => {
+  let gain = 0;
+  for (let i = 0; i < work.size; i += 1) {
+    const at = work.point[i] as number;
+    const wanted = at + fraction * (work.step[i] as number);
+    const placed = Math.min(Math.max(wanted, settings.lower[i] as number), settings.upper[i] as number);
+    work.trial[i] = placed;
+    gain += (work.gradient[i] as number) * (placed - at);
+  }
+  return gain;
+};
+
+const leastShareOfGain = 1e-4;
+const mostHalvings = 50;
+/** Relative rounding error granted to a function value: below it two values cannot be told apart. */
+const valueNoise = 1e-11;
+
+/** Walks along the step until the value rises enough; the new value, or null where it never does. */
+const climb = (
+  objective: SmoothObjective,
+  work: Workspace,
+  settings: NewtonSettings,
+  value: number,
+): number | null => {
+  const noise = valueNoise * Math.max(1, Math.abs(value));
+  let fraction = 1;
+  for (let halving = 0; halving < mostHalvings; halving += 1) {
+    const gain = placeTrial(work, settings, fraction);
+    const reached = objective(work.trial, work.trialGradient, work.trialHessian);
+    const wanted = value + leastShareOfGain * gain - (gain < 1e3 * noise ? noise : 0);
+    if (reached >= wanted && gain >= 0) {
+      work.point.set(work.trial);
+      work.gradient.set(work.trialGradient);
+      work.hessian.set(work.trialHessian);
+      return reached;
+    }
+    fraction /= 2;
+  }
+  return null;
+};
+
+const outcome = (work: Workspace, value: number, steps: number, converged: boolean): NewtonMaximum => ({
+  converged,
+  value,
+  point: work.point,
+  side: work.side,
+  standardErrors: work.errors,
+  steps,
+});
+
+/**
+ * Where is a smooth function of a few bounded parameters highest, near a starting point?
+ * Convention: Newton's method on the parameters that are free, with a ridge where the second derivatives do not curve
+ * downward, halved until the value rises; a parameter on a bound is held while its gradient points outward.
+ * Domain: a start inside the bounds at which the objective is finite.
+ * Units: the objective's own; the stopping rule |gradient|·standard error has none.
+ * Edges: `converged` is false after `maxSteps`, where no step uphill exists, or where the second derivatives over the
+ * free parameters are not negative definite at the end; the best point reached is still returned. Always ends.
+ * Source: Nocedal & Wright 2006, Numerical Optimization, sections 3.4 and 16.7 (projection on bounds).
+ * Example: an objective −(x − 2)² with bounds 0 and 1 ends at 1, side 1.
+ */
+export const maximiseByNewton = (
+  objective: SmoothObjective,
+  start: Float64Array,
+  settings: NewtonSettings,
+): NewtonMaximum => {
+  const work = createWorkspace(start);
+  let value = objective(work.point, work.gradient, work.hessian);
+  if (!Number.isFinite(value)) return outcome(work, value, 0, false);
+  for (let steps = 0; steps < settings.maxSteps; steps += 1) {
+    holdBounds(work, settings);
+    if (factorise(work, 0)) {
+      fillErrors(work);
+      if (isFinished(work, settings.tolerance)) return outcome(work, value, steps, true);
+    }
+    do {
+      if (!chooseStep(work)) return outcome(work, value, steps, false);
+    } while (holdLeaving(work, settings));
+    const reached = climb(objective, work, settings, value);
+    if (reached === null) return outcome(work, value, steps, false);
+    value = reached;
+  }
+  return outcome(work, value, settings.maxSteps, false);
+};
