@@ -144,18 +144,13 @@ const defaults = z.strictObject({
     .prefault({}),
 });
 
-const workspace = z.strictObject({
-  kind: described({
-    kind: z.enum(['auto', 'slack', 'terminal']),
-    says: 'where people ask; auto takes Slack when its tokens are set in the environment and the terminal when none is',
-    expects: 'auto, slack or terminal',
-  }).default('auto'),
+const slack = z.strictObject({
   connection: described({
     kind: z.enum(['socket', 'http']),
-    says: 'how Slack reaches the bot: socket needs no public address, http listens on workspace.port',
+    says: 'how Slack reaches the bot: socket needs no public address, http listens on slack.port',
     expects: 'socket or http',
   }).default('socket'),
-  port: wholeNumber(1, 65535, 'port that is listened on when workspace.connection is http', '', 3000),
+  port: wholeNumber(1, 65535, 'port that is listened on when slack.connection is http', '', 3000),
   listenInThreads: described({
     kind: z.boolean(),
     says: 'answer follow-ups without a mention in threads where the bot has just answered',
@@ -184,7 +179,12 @@ export const settingsSchema = z.strictObject({
     expects: 'a size such as 5bp or 0.05%, above zero and at most 10%',
   }).prefault('5bp'),
   defaults: defaults.prefault({}),
-  workspace: workspace.prefault({}),
+  workspace: described({
+    kind: z.enum(['auto', 'slack', 'terminal']),
+    says: 'where people ask; auto takes Slack when its tokens are set in the environment and the terminal when none is',
+    expects: 'auto, slack or terminal',
+  }).default('auto'),
+  slack: slack.prefault({}),
 });
 
 /** Settings as a person writes them: most keys may be left out. */

@@ -40,7 +40,7 @@ const missing = (names: readonly TokenName[], connection: string) =>
     problem(
       'tokenMissing',
       `Slack over ${connection} needs ${names.join(' and ')}, which ${names.length === 1 ? 'is' : 'are'} not set in the environment. ` +
-        `Set ${names.length === 1 ? 'it' : 'them'}, or set workspace.kind to terminal to ask in the terminal.`,
+        `Set ${names.length === 1 ? 'it' : 'them'}, or set workspace to terminal to ask in the terminal.`,
     ),
   );
 
@@ -50,9 +50,10 @@ const missing = (names: readonly TokenName[], connection: string) =>
  */
 export const readTokens = (
   env: Environment,
-  settings: Pick<Settings, 'workspace'>,
+  settings: Pick<Settings, 'workspace' | 'slack'>,
 ): Result<WorkspaceToStart> => {
-  const { kind, connection, port } = settings.workspace;
+  const { workspace: kind } = settings;
+  const { connection, port } = settings.slack;
   const noneSet = tokenNames.every((name) => present(env, name) === null);
   if (kind === 'terminal' || (kind === 'auto' && noneSet)) return succeed({ kind: 'terminal' });
   const second: TokenName = connection === 'socket' ? 'SLACK_APP_TOKEN' : 'SLACK_SIGNING_SECRET';

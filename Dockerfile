@@ -1,0 +1,19 @@
+# syntax=docker/dockerfile:1
+
+FROM node:20-bookworm-slim AS build
+WORKDIR /app
+COPY package.json package-lock.json tsconfig.json ./
+COPY src ./src
+RUN npm ci && npm prune --omit=dev --ignore-scripts
+
+FROM node:20-bookworm-slim
+ENV NODE_ENV=production
+WORKDIR /app
+COPY --from=build --chown=node:node /app/package.json ./
+COPY --from=build --chown=node:node /app/node_modules ./node_modules
+COPY --from=build --chown=node:node /app/dist ./dist
+COPY --chown=node:node config ./config
+USER node
+HEALTHCHECK --interval=30s --timeout=5s --start-period=10s CMD ["node", "dist/start/health.js"]
+# In an image nobody sits at a terminal: without the workspace's tokens this refuses to start and names them.
+CMD ["node", "dist/start/serve.js", "--workspace", "slack"]

@@ -1,0 +1,138 @@
+import type { Answer } from '../answers/answer.ts';
+import type { AnswerJob } from '../answers/answerQuestion.ts';
+import { answerReply, workingReply } from '../present/answerReply.ts';
+import { type FeedState, feedReply, type TickerState, tickerReply } from '../present/compose/feed.ts';
+import { type HelpPage, helpReply } from '../present/compose/help.ts';
+import { refusalReply } from '../present/compose/refusal.ts';
+import { type Button, type Reply, reply } from '../present/reply.ts';
+import type { Question, ReadQuestion, StatisticalQuestion } from '../questions/question.ts';
+import { type ReadContext, readMessage } from '../questions/read.ts';
+import type { PriceSeries, PriceSnapshot } from '../terms/prices.ts';
+import { problem } from '../terms/problem.ts';
+import { type Result, refuse, succeed } from '../terms/result.ts';
+import { recentAnswers } from './recentAnswers.ts';
+
+/** A message that was addressed to the bot. `progress` is told, in words, how far a long answer has come. */
+export type Asking = {
+  readonly text: string;
+  readonly place: 'channel' | 'direct' | 'command' | 'terminal';
+  readonly progress?: (words: string) => void;
+};
+
+/** What the bot says to one question, and the outcome behind it where it was a statistical one. */
+export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answer> | null };
+
+export type Converse = {
+  readonly ask: (asking: Asking) => Promise<readonly Spoken[]>;
+  readonly press: (button: Pick<Button, 'action' | 'answerId' | 'question'>) => Promise<readonly Reply[]>;
+};
+
+/** What a conversation needs of the rest of the house. */
+export type Desk = {
+  /** The live snapshot of the feed, or why there is none. Each question takes it once and ends on it. */
+  readonly snapshot: () => Result<PriceSnapshot>;
+  readonly contextFor: (snapshot: PriceSnapshot | null) => ReadContext;
+  readonly compute: (
+    job: Pick<AnswerJob, 'read' | 'series'>,
+    progress?: (words: string) => void,
+  ) => Promise<Result<Answer>>;
+  readonly feedState: (snapshot: PriceSnapshot) => FeedState;
+  readonly tickerState: (snapshot: PriceSnapshot, ticker: string) => Result<TickerState>;
+  readonly helpPage: (topic: string | null) => HelpPage;
+};
+
+const said = (spokenReply: Reply): Spoken => ({ reply: spokenReply, outcome: null });
+
+const refused = (outcome: Result<never> & { ok: false }): Spoken => ({
+  reply: refusalReply(outcome.problem),
+  outcome,
+});
+
+/** The tickers a question is about, in its own order. */
+const subjectOf = (question: StatisticalQuestion): readonly string[] =>
+  question.verb === 'compare' && question.between === 'tickers' ? question.tickers : [question.ticker];
+
+const isStatistical = (question: Question): question is StatisticalQuestion =>
+  question.verb !== 'help' && question.verb !== 'feed';
+
+const seriesOf = (snapshot: PriceSnapshot, tickers: readonly string[]): Result<readonly PriceSeries[]> => {
+  const found: PriceSeries[] = [];
+  for (const ticker of tickers) {
+    const series = snapshot.series(ticker);
+    if (series === null)
+      return refuse(
+        problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`),
+      );
+    found.push(series);
+  }
+  return succeed(found);
+};
+
+/** One conversation for every workspace: text in, replies out. */
+export const createConverse = (desk: Desk): Converse => {
+  const recent = recentAnswers();
+
+  const answerStatistical = async (
+    read: ReadQuestion,
+    question: StatisticalQuestion,
+    snapshot: PriceSnapshot,
+    progress?: (words: string) => void,
+  ): Promise<Spoken> => {
+    const series = seriesOf(snapshot, subjectOf(question));
+    if (!series.ok) return refused(series);
+    const outcome = await desk.compute({ read, series: series.value }, progress);
+    if (!outcome.ok) return refused(outcome);
+    recent.keep(outcome.value);
+    return { reply: answerReply(outcome.value), outcome };
+  };
+
+  const answerOne = async (
+    read: ReadQuestion,
+    live: Result<PriceSnapshot>,
+    progress?: (words: string) => void,
+  ): Promise<Spoken> => {
+    const { question } = read;
+    if (question.verb === 'help') return said(helpReply(desk.helpPage(question.topic)));
+    if (!live.ok) return refused(live);
+    if (isStatistical(question)) return answerStatistical(read, question, live.value, progress);
+    if (question.ticker === null) return said(feedReply(desk.feedState(live.value)));
+    const state = desk.tickerState(live.value, question.ticker);
+    return state.ok ? said(tickerReply(state.value)) : refused(state);
+  };
+
+  const ask = async ({ text, progress }: Asking): Promise<readonly Spoken[]> => {
+    const live = desk.snapshot();
+    const outcomes = readMessage(text, desk.contextFor(live.ok ? live.value : null));
+    const spoken: Spoken[] = [];
+    for (const outcome of outcomes)
+      spoken.push(outcome.ok ? await answerOne(outcome.value, live, progress) : refused(outcome));
+    return spoken;
+  };
+
+  const press: Converse['press'] = async ({ answerId, question }) => {
+    const kept = recent.find(answerId);
+    if (kept !== null) return [workingReply(kept)];
+    const replies: Reply[] = [];
+    for (const { outcome } of await ask({ text: question, place: 'terminal' })) {
+      if (outcome?.ok !== true) continue;
+      if (outcome.value.id !== answerId)
+        replies.push(
+          reply(
+            'refusal',
+            `The prices have changed since ${answerId} was given; this is the working of the same question today, ${outcome.value.id}.`,
+          ),
+        );
+      replies.push(workingReply(outcome.value));
+    }
+    return replies.length > 0
+      ? replies
+      : [
+          reply(
+            'refusal',
+            `${answerId} cannot be worked out again on the prices of today. Ask the question anew.`,
+          ),
+        ];
+  };
+
+  return { ask, press };
+};

@@ -1,0 +1,42 @@
+import type { Button } from '../../present/reply.ts';
+
+/** Where the person at the terminal stands and what can be pressed: the whole memory of a terminal workspace. */
+export type Room = {
+  readonly channel: string;
+  /** The number of the message whose thread is being written in; null at the top of the channel. */
+  readonly thread: number | null;
+  readonly messageCount: number;
+  readonly buttons: readonly Button[];
+};
+
+export const emptyRoom: Room = { channel: '#desk', thread: null, messageCount: 0, buttons: [] };
+
+/** What a typed line asks the terminal itself to do. */
+export type Line =
+  | { readonly kind: 'nothing' }
+  | { readonly kind: 'leave' }
+  | { readonly kind: 'channel'; readonly name: string }
+  | { readonly kind: 'thread'; readonly number: number | null }
+  | { readonly kind: 'press'; readonly number: number }
+  | { readonly kind: 'message'; readonly text: string };
+
+const channelPattern = /^([#@][\p{L}\p{N}_-]{1,80})$/u;
+const threadPattern = /^thread (\d{1,6})$/i;
+const pressPattern = /^press (\d{1,6})$/i;
+
+/** Reads one typed line. Whatever is not one of the terminal's own few words is a message to the bot. */
+export const readLine = (line: string): Line => {
+  const text = line.trim();
+  if (text === '') return { kind: 'nothing' };
+  if (/^(leave|quit|exit)$/i.test(text)) return { kind: 'leave' };
+  if (/^top$/i.test(text)) return { kind: 'thread', number: null };
+  const channel = channelPattern.exec(text)?.[1];
+  if (channel !== undefined) return { kind: 'channel', name: channel };
+  const thread = threadPattern.exec(text)?.[1];
+  if (thread !== undefined) return { kind: 'thread', number: Number(thread) };
+  const pressed = pressPattern.exec(text)?.[1];
+  return pressed === undefined ? { kind: 'message', text } : { kind: 'press', number: Number(pressed) };
+};
+
+export const promptOf = ({ channel, thread }: Room): string =>
+  thread === null ? `${channel}> ` : `${channel} thread ${thread}> `;

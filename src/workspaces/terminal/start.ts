@@ -1,0 +1,105 @@
+import type { Reply } from '../../present/reply.ts';
+import { toText } from '../../present/text.ts';
+import type { Converse } from '../converse.ts';
+import { emptyRoom, promptOf, type Room, readLine } from './room.ts';
+
+/** What the terminal workspace needs of the machine. */
+export type Terminal = {
+  /** Typed lines, one at a time, until the input closes. */
+  readonly lines: AsyncIterable<string>;
+  readonly write: (text: string) => void;
+  readonly width: () => number;
+  /** A person is typing: prompts and the welcome are shown. */
+  readonly interactive: boolean;
+};
+
+const welcome = [
+  'This is a workspace of your own in the terminal. Type a question, such as',
+  '  interval KELP 60d',
+  'or help. Other words here: #name goes to a channel, @leadsman to direct messages, thread 1 into a thread,',
+  'top out of it, press 1 presses a button, leave ends.',
+].join('\n');
+
+/** Asked one after the other where nobody types and nothing is piped in. */
+export const demonstrationQuestions = ['interval KELP 60d', 'interval vol TARN 3m', 'feed'] as const;
+
+const indented = (text: string): string =>
+  text
+    .split('\n')
+    .map((line) => (line === '' ? '' : `  ${line}`))
+    .join('\n');
+
+const show = (terminal: Terminal, room: Room, replies: readonly Reply[]): Room => {
+  let { buttons } = room;
+  for (const reply of replies) {
+    const text = toText(reply, { width: terminal.width() - 2, firstButton: buttons.length + 1 });
+    terminal.write(`${indented(text)}\n\n`);
+    buttons = [...buttons, ...reply.buttons];
+  }
+  return { ...room, buttons };
+};
+
+const say = (terminal: Terminal, text: string): void => terminal.write(`${text}\n`);
+
+const ask = async (terminal: Terminal, converse: Converse, room: Room, text: string): Promise<Room> => {
+  const number = room.messageCount + 1;
+  const place = room.channel.startsWith('@') ? 'direct' : 'channel';
+  const where = room.thread === null ? '' : `, in thread ${room.thread}`;
+  if (terminal.interactive) say(terminal, `  message ${number} in ${room.channel}${where}`);
+  else say(terminal, `${promptOf(room)}${text}`);
+  const spoken = await converse.ask({ text, place });
+  return show(
+    terminal,
+    { ...room, messageCount: number },
+    spoken.map(({ reply }) => reply),
+  );
+};
+
+const press = async (terminal: Terminal, converse: Converse, room: Room, number: number): Promise<Room> => {
+  const button = room.buttons[number - 1];
+  if (button === undefined) {
+    const count = room.buttons.length;
+    say(
+      terminal,
+      count === 0 ? 'There is no button yet.' : `There is no button ${number}: press 1 to ${count}.`,
+    );
+    return room;
+  }
+  return show(terminal, room, await converse.press(button));
+};
+
+const enterThread = (terminal: Terminal, room: Room, number: number | null): Room => {
+  if (number === null || (number >= 1 && number <= room.messageCount)) return { ...room, thread: number };
+  const count = room.messageCount;
+  say(
+    terminal,
+    count === 0
+      ? 'There is no message yet.'
+      : `There is no message ${number}: 1 to ${count} can be answered.`,
+  );
+  return room;
+};
+
+/** Runs the terminal workspace until the input closes or the person leaves. Resolves to the number of messages answered. */
+export const startTerminal = async (terminal: Terminal, converse: Converse): Promise<number> => {
+  let room = emptyRoom;
+  let linesRead = 0;
+  const prompt = () => {
+    if (terminal.interactive) terminal.write(promptOf(room));
+  };
+  if (terminal.interactive) say(terminal, welcome);
+  prompt();
+  for await (const typed of terminal.lines) {
+    linesRead += 1;
+    const line = readLine(typed);
+    if (line.kind === 'leave') return room.messageCount;
+    if (line.kind === 'channel') room = { ...room, channel: line.name, thread: null };
+    else if (line.kind === 'thread') room = enterThread(terminal, room, line.number);
+    else if (line.kind === 'press') room = await press(terminal, converse, room, line.number);
+    else if (line.kind === 'message') room = await ask(terminal, converse, room, line.text);
+    prompt();
+  }
+  if (linesRead === 0 && !terminal.interactive)
+    for (const question of demonstrationQuestions) room = await ask(terminal, converse, room, question);
+  return room.messageCount;
+};
