@@ -30,6 +30,7 @@ export const problemCodes = {
   notEnoughTail: 'too few returns beyond the level to carry a tail figure',
   likelihoodUnbounded: 'repeated returns make the likelihood unbounded',
   fitNotConverged: 'a fit that did not reach its stopping rule',
+  resamplesUnusable: 'resamples that do not surround the estimate, so that no interval can be read from them',
   meanNotFinite: 'a tail so heavy that its mean does not exist',
   shapeOutside: 'a tail shape outside the range in which its estimator works',
   varianceNotStationary: 'a volatility process without a finite long-run variance',
