@@ -205,6 +205,14 @@ const climb = (
   return null;
 };
 
+/** One step more once the rule is met: it squares the distance that is left, at the price of one evaluation. */
+const lastStep = (
+  objective: SmoothObjective,
+  work: Workspace,
+  settings: NewtonSettings,
+  value: number,
+): number => (chooseStep(work) ? (climb(objective, work, settings, value) ?? value) : value);
+
 const outcome = (work: Workspace, value: number, steps: number, converged: boolean): NewtonMaximum => ({
   converged,
   value,
@@ -237,7 +245,8 @@ export const maximiseByNewton = (
     holdBounds(work, settings);
     if (factorise(work, 0)) {
       fillErrors(work);
-      if (isFinished(work, settings.tolerance)) return outcome(work, value, steps, true);
+      if (isFinished(work, settings.tolerance))
+        return outcome(work, lastStep(objective, work, settings, value), steps, true);
     }
     do {
       if (!chooseStep(work)) return outcome(work, value, steps, false);
