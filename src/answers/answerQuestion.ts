@@ -1,0 +1,34 @@
+import type { ReadQuestion } from '../questions/question.ts';
+import type { PriceSeries } from '../terms/prices.ts';
+import { problem } from '../terms/problem.ts';
+import { type Result, refuse } from '../terms/result.ts';
+import type { Answer } from './answer.ts';
+import { answerInterval } from './interval/answerInterval.ts';
+import type { AnswerPolicy } from './policy.ts';
+
+/** A question with the prices it is about, in the order of its tickers. Plain data: it can be handed to another thread. */
+export type AnswerJob = {
+  readonly read: ReadQuestion;
+  readonly series: readonly PriceSeries[];
+  readonly policy: AnswerPolicy;
+};
+
+/** The verbs that this version answers with figures. */
+export const answeredVerbs = ['interval'] as const;
+
+/** Answers a question. Pure: the same job gives the same answer to the last bit on one major version of the engine. */
+export const answerQuestion = ({ read, series, policy }: AnswerJob): Result<Answer> => {
+  const [first] = series;
+  if (first === undefined)
+    return refuse(problem('noTicker', 'The question names no ticker. Add one, such as KELP.'));
+  switch (read.question.verb) {
+    case 'interval':
+      return answerInterval(read, read.question, first, policy);
+    default:
+      return refuse(
+        problem('verbNotBuilt', `${read.question.verb} cannot be asked yet. Ask help for what can.`, {
+          suggestion: 'help',
+        }),
+      );
+  }
+};

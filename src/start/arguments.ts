@@ -1,0 +1,35 @@
+import { parseArgs } from 'node:util';
+
+/** What may be said to every command on its command line. */
+export type Arguments = {
+  readonly config: string | null;
+  readonly feed: string | null;
+  readonly workspace: string | null;
+  readonly json: boolean;
+  readonly words: readonly string[];
+};
+
+/** Reads the command line, or says what is wrong with it. */
+export const readArguments = (argv: readonly string[]): Arguments | { readonly wrong: string } => {
+  try {
+    const { values, positionals } = parseArgs({
+      args: [...argv],
+      allowPositionals: true,
+      options: {
+        config: { type: 'string' },
+        feed: { type: 'string' },
+        workspace: { type: 'string' },
+        json: { type: 'boolean', default: false },
+      },
+    });
+    return {
+      config: values.config ?? null,
+      feed: values.feed ?? null,
+      workspace: values.workspace ?? null,
+      json: values.json ?? false,
+      words: positionals,
+    };
+  } catch (error) {
+    return { wrong: error instanceof Error ? error.message : String(error) };
+  }
+};
