@@ -12,7 +12,3 @@ export const endsOnSide = (lower: number, upper: number, side: Side): Ends => ({
 /** centre ± halfWidth, on the side asked. */
 export const endsAround = (centre: number, halfWidth: number, side: Side): Ends =>
   endsOnSide(centre - halfWidth, centre + halfWidth, side);
-
-/** Are two ends at least as far apart as two others? One-sided ends are compared by their distance from `centre`. */
-export const halfWidthOf = (ends: Ends, centre: number): number =>
-  Math.max(ends.upper === null ? 0 : ends.upper - centre, ends.lower === null ? 0 : centre - ends.lower);

@@ -1,10 +1,10 @@
 import type { Level } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import type { Side } from '../../terms/side.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { criticalNormal, criticalT } from './criticalValues.ts';
 import { type Ends, endsAround } from './ends.ts';
-import { summariseMean } from './summary.ts';
 
 export type MeanInterval = Ends & {
   readonly mean: number;
@@ -30,7 +30,7 @@ export type MeanInterval = Ends & {
  * Example: meanInterval([0.01, 0.02, 0.03], 95%, 'both') is 0.02 ± 4.303·0.01/√3.
  */
 export const meanInterval = (returns: ArrayLike<number>, level: Level, side: Side): Result<MeanInterval> => {
-  const summary = summariseMean(returns, leastCounts.variance, 'An interval for the mean');
+  const summary = summariseReturns(returns, leastCounts.variance, 'An interval for the mean');
   if (!summary.ok) return summary;
   const { mean, sampleStandardDeviation, standardError, degreesOfFreedom } = summary.value;
   const critical = criticalT(level, side, degreesOfFreedom);

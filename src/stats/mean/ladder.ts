@@ -1,10 +1,10 @@
 import type { Level } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import type { Side } from '../../terms/side.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { criticalT } from './criticalValues.ts';
 import { type Ends, endsAround } from './ends.ts';
-import { summariseMean } from './summary.ts';
 
 export type LadderStep = Ends & { readonly level: Level };
 
@@ -26,7 +26,7 @@ export const ladderLevels: readonly Level[] = [
  * Example: meanLadder(returns, 'both')[1] is the interval at 95%.
  */
 export const meanLadder = (returns: ArrayLike<number>, side: Side): Result<readonly LadderStep[]> => {
-  const summary = summariseMean(returns, leastCounts.variance, 'An interval for the mean');
+  const summary = summariseReturns(returns, leastCounts.variance, 'An interval for the mean');
   if (!summary.ok) return summary;
   const { mean, standardError, degreesOfFreedom } = summary.value;
   return succeed(

@@ -2,10 +2,10 @@ import type { Level } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import type { Side } from '../../terms/side.ts';
 import { neweyWest } from '../dependence/neweyWest.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { criticalT } from './criticalValues.ts';
 import { type Ends, endsAround } from './ends.ts';
-import { summariseMean } from './summary.ts';
 
 export type NeweyWestInterval = Ends & {
   readonly mean: number;
@@ -29,7 +29,7 @@ export const neweyWestInterval = (
   level: Level,
   side: Side,
 ): Result<NeweyWestInterval> => {
-  const summary = summariseMean(
+  const summary = summariseReturns(
     returns,
     leastCounts.neweyWest,
     'An interval that allows for autocorrelation',

@@ -2,11 +2,11 @@ import { halfTailFraction, type Level, levelFraction, tailFraction } from '../..
 import { type Result, succeed } from '../../terms/result.ts';
 import type { Side } from '../../terms/side.ts';
 import { excessKurtosis, remarkableKurtosis } from '../moments/shape.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { ascending, quantileType7 } from '../numerics/quantile.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { criticalT } from './criticalValues.ts';
 import { type Ends, endsAround, endsOnSide } from './ends.ts';
-import { summariseMean } from './summary.ts';
 
 export type PredictionInterval = Ends & {
   /** The window's own quantiles (type 7) at the same probabilities. */
@@ -43,7 +43,7 @@ export const predictionInterval = (
   level: Level,
   side: Side,
 ): Result<PredictionInterval> => {
-  const summary = summariseMean(returns, leastCounts.variance, 'A prediction for one further return');
+  const summary = summariseReturns(returns, leastCounts.variance, 'A prediction for one further return');
   if (!summary.ok) return summary;
   const { mean, sampleStandardDeviation, degreesOfFreedom, count } = summary.value;
   const halfWidth =

@@ -4,11 +4,11 @@ import { stationaryDraw } from '../bootstrap/draws.ts';
 import { endRanks } from '../bootstrap/ranks.ts';
 import { defaultReplicates, type ResampledStatistic, sortedReplicates } from '../bootstrap/replicates.ts';
 import { writeResampledMoments } from '../bootstrap/resampledMoments.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { orderStatistic } from '../numerics/quantile.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import type { MeanBootstrapQuestion } from './bootstrapQuestion.ts';
 import { type Ends, endsOnSide } from './ends.ts';
-import { summariseMean } from './summary.ts';
 
 export type StationaryInterval = Ends & {
   readonly method: 'stationary';
@@ -36,7 +36,7 @@ const meanDeviation = (deviations: Float64Array): ResampledStatistic => {
  */
 export const stationaryBootstrapInterval = (question: MeanBootstrapQuestion): Result<StationaryInterval> => {
   const { returns, level, side, streams, replicates = defaultReplicates } = question;
-  const summary = summariseMean(returns, leastCounts.bootstrap, 'A bootstrap interval for the mean');
+  const summary = summariseReturns(returns, leastCounts.bootstrap, 'A bootstrap interval for the mean');
   if (!summary.ok) return summary;
   const ranks = endRanks(level, side, replicates);
   if (!ranks.ok) return ranks;

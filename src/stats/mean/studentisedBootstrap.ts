@@ -3,16 +3,20 @@ import { independentDraw } from '../bootstrap/draws.ts';
 import { endRanks } from '../bootstrap/ranks.ts';
 import { defaultReplicates, type ResampledStatistic, sortedReplicates } from '../bootstrap/replicates.ts';
 import { writeResampledMoments } from '../bootstrap/resampledMoments.ts';
+import { type ReturnSummary, summariseReturns } from '../moments/summary.ts';
 import { orderStatistic } from '../numerics/quantile.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import type { MeanBootstrapQuestion } from './bootstrapQuestion.ts';
 import { type Ends, endsOnSide } from './ends.ts';
-import { type MeanSummary, summariseMean } from './summary.ts';
 
 export type StudentisedInterval = Ends & { readonly method: 'studentised' };
 
 /** t* = mean*·√n/s* of values that were centred and scaled; not finite, and so drawn again, where s* is 0. */
-const studentisedMean = ({ deviations, sampleStandardDeviation, count }: MeanSummary): ResampledStatistic => {
+const studentisedMean = ({
+  deviations,
+  sampleStandardDeviation,
+  count,
+}: ReturnSummary): ResampledStatistic => {
   const scaled = deviations.map((deviation) => deviation / sampleStandardDeviation);
   const moments = new Float64Array(2);
   const root = Math.sqrt(count);
@@ -39,7 +43,7 @@ export const studentisedBootstrapInterval = (
   question: MeanBootstrapQuestion,
 ): Result<StudentisedInterval> => {
   const { returns, level, side, streams, replicates = defaultReplicates } = question;
-  const summary = summariseMean(returns, leastCounts.bootstrap, 'A bootstrap interval for the mean');
+  const summary = summariseReturns(returns, leastCounts.bootstrap, 'A bootstrap interval for the mean');
   if (!summary.ok) return summary;
   const ranks = endRanks(level, side, replicates);
   if (!ranks.ok) return ranks;

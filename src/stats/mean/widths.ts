@@ -1,9 +1,9 @@
 import type { Level } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import type { Side } from '../../terms/side.ts';
+import { summariseReturns } from '../moments/summary.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { criticalT } from './criticalValues.ts';
-import { summariseMean } from './summary.ts';
 
 export type MeanWidth = { readonly returnCount: number; readonly halfWidth: number };
 
@@ -24,7 +24,7 @@ export const meanWidths = (
   level: Level,
   side: Side,
 ): Result<readonly MeanWidth[]> => {
-  const summary = summariseMean(returns, leastCounts.variance, 'An interval for the mean');
+  const summary = summariseReturns(returns, leastCounts.variance, 'An interval for the mean');
   if (!summary.ok) return summary;
   const { count, sampleStandardDeviation } = summary.value;
   return succeed(

@@ -1,10 +1,10 @@
 import { type Result, succeed } from '../../terms/result.ts';
-import { centre } from '../moments/centre.ts';
-import { sampleVarianceOfDeviations } from '../moments/deviation.ts';
 import { refuseUnusable } from '../returns/leastCounts.ts';
+import { centre } from './centre.ts';
+import { sampleVarianceOfDeviations } from './deviation.ts';
 
-/** What every interval of a mean starts from. */
-export type MeanSummary = {
+/** What every interval of a mean, a standard deviation or their ratio starts from. */
+export type ReturnSummary = {
   readonly count: number;
   readonly mean: number;
   readonly deviations: Float64Array;
@@ -15,11 +15,11 @@ export type MeanSummary = {
 };
 
 /** Refused below `least` returns and for a price that does not move; `figure` begins the refusal. */
-export const summariseMean = (
+export const summariseReturns = (
   returns: ArrayLike<number>,
   least: number,
   figure: string,
-): Result<MeanSummary> => {
+): Result<ReturnSummary> => {
   const refusal = refuseUnusable(returns, least, figure);
   if (refusal !== null) return refusal;
   const { mean, deviations } = centre(returns);
