@@ -51,11 +51,18 @@ export const digits = (value: number, decimals: number, options: DigitOptions = 
   return options.plus === true && rounded > 0 ? `+${body}` : body;
 };
 
-/** Three significant digits: 0.0412, 3.21, 41.2, 41,200 (whole numbers keep their last digits as zeros). */
-export const threeDigits = (value: number, options: DigitOptions = {}): string => {
+/** `count` significant digits; whole numbers beyond them keep zeros: 0.0412, 3.21, 41,200 with three. */
+export const significant = (value: number, count: number, options: DigitOptions = {}): string => {
   if (value === 0) return '0';
-  const power = leadingPower(value, 3);
-  if (power <= 2) return digits(value, 2 - power, options);
-  const step = 10 ** (power - 2);
+  const power = leadingPower(value, count);
+  if (power < count) return digits(value, count - 1 - power, options);
+  const step = 10 ** (power - count + 1);
   return digits(Math.round(value / step) * step, 0, options);
 };
+
+/** Three significant digits, for figures without an interval. */
+export const threeDigits = (value: number, options: DigitOptions = {}): string =>
+  significant(value, 3, options);
+
+/** Six significant digits, for the steps of a working. */
+export const workingDigits = (value: number): string => significant(value, 6);
