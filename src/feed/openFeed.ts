@@ -61,6 +61,7 @@ export const openFeed = async (settings: FeedSettings): Promise<Result<OpenSnaps
     fingerprint: await fingerprintOf(sorted),
     meanings: sorted.tickers.map((ticker) => meaningOf(settings, ticker)),
     flags: sorted.tickers.map(() => []),
+    quarantined: new Map(),
     lastDay,
   });
   return succeed(snapshot);

@@ -14,6 +14,7 @@ export type SnapshotColumns = {
   readonly closes: Float64Array;
   readonly meanings: readonly PriceMeaning[];
   readonly flags: readonly (readonly PriceFlag[])[];
+  readonly quarantined: ReadonlyMap<string, string>;
   readonly lastDay: Day;
 };
 
@@ -48,5 +49,12 @@ export const snapshotFromColumns = (columns: SnapshotColumns): OpenSnapshot => {
       flags: flags[place] ?? [],
     };
   };
-  return { fingerprint: columns.fingerprint, tickers, lastDay: columns.lastDay, series, columns };
+  return {
+    fingerprint: columns.fingerprint,
+    tickers,
+    lastDay: columns.lastDay,
+    series,
+    quarantined: columns.quarantined,
+    columns,
+  };
 };

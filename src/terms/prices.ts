@@ -34,5 +34,11 @@ export type PriceSnapshot = {
   readonly fingerprint: string;
   readonly tickers: readonly string[];
   readonly lastDay: Day;
+  /** null for a ticker that the feed does not have and for one that is quarantined. */
   readonly series: (ticker: string) => PriceSeries | null;
+  /**
+   * Tickers of the feed that are not in `tickers` because their prices contradict themselves, each with the reason as
+   * one sentence. A question about one is refused with the code `quarantined` and that sentence.
+   */
+  readonly quarantined: ReadonlyMap<string, string>;
 };
