@@ -1,4 +1,5 @@
 import { robustAutocorrelation } from '../dependence/autocorrelation.ts';
+import { dependenceFoundBelow } from '../dependence/clustering.ts';
 import { neweyWest } from '../dependence/neweyWest.ts';
 import { studentTTwoSidedTail } from '../distributions/studentT.ts';
 import { sampleStandardDeviation } from '../moments/deviation.ts';
@@ -10,8 +11,6 @@ export type DieboldMariano = {
   readonly p: number;
   readonly variance: 'plain' | 'neweyWest';
 };
-
-const dependentBelow = 0.05;
 
 /**
  * Does one model's loss differ from another's by more than chance?
@@ -36,7 +35,7 @@ export const dieboldMariano = (first: Float64Array, second: Float64Array): Diebo
   if (days < 2) return null;
   const deviation = sampleStandardDeviation(differences);
   if (deviation === 0) return null;
-  const dependent = robustAutocorrelation(differences).p < dependentBelow;
+  const dependent = robustAutocorrelation(differences).p < dependenceFoundBelow;
   const standardError = dependent ? neweyWest(differences).standardError : deviation / Math.sqrt(days);
   const statistic = arithmeticMean(differences) / standardError;
   return {

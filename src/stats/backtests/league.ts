@@ -29,17 +29,6 @@ const indexOfLowest = (means: readonly (number | null)[]): number | null =>
     return lowest === null || mean < lowest ? index : best;
   }, null);
 
-/** Adjusts the p-values that are there and leaves the gaps where they are. */
-const holmAround = (pValues: readonly (number | null)[]): (number | null)[] => {
-  const adjusted = holmAdjusted(pValues.filter((p) => p !== null));
-  let next = 0;
-  return pValues.map((p) => {
-    if (p === null) return null;
-    next += 1;
-    return adjusted[next - 1] ?? null;
-  });
-};
-
 /**
  * Which model forecast the tail best, and could the order be chance?
  *
@@ -66,7 +55,7 @@ export const standings = (models: readonly JudgedDays[], tailLevel: Level): Stan
       ? (dieboldMariano(losses, bestLosses)?.p ?? null)
       : null,
   );
-  const adjusted = holmAround(pValues);
+  const adjusted = holmAdjusted(pValues);
   return models.map(({ losses, valuesAtRisk }, index) => ({
     meanQuantileLoss: arithmeticMean(
       losses.map((loss, day) => quantileLoss(loss, valuesAtRisk[day] as number, level)),

@@ -1,0 +1,78 @@
+import { describe, expect, test } from 'vitest';
+import { need } from '../../../src/stats/samples/need.ts';
+import { returnsForHalfWidth } from '../../../src/stats/samples/returnsForHalfWidth.ts';
+import { returnsForPower } from '../../../src/stats/samples/returnsForPower.ts';
+import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { relativeError } from '../../laws/relativeError.ts';
+import { indexReturns } from '../indexWindows.ts';
+import { level, level95 } from '../levels.ts';
+
+const power = level('0.8');
+
+describe('returns for a half-width', () => {
+  // SciPy 1.17.1: the smallest n with scipy.stats.t.ppf(1 - alpha/2, n - 1)/sqrt(n) <= h.
+  test.each([
+    [10, '0.95', 2],
+    [1, '0.95', 7],
+    [0.5, '0.95', 18],
+    [0.25, '0.95', 64],
+    [0.2, '0.95', 99],
+    [0.1, '0.95', 387],
+    [0.05, '0.95', 1540],
+    [0.2, '0.99', 170],
+  ])('%d deviations at %s', (width, text, count) => {
+    expect(returnsForHalfWidth(width, level(text))).toBe(count);
+  });
+
+  test('beyond a million by formula: 4 times as many for half the width', () => {
+    const count = returnsForHalfWidth(0.001, level95);
+    expect(relativeError(returnsForHalfWidth(0.0005, level95), 4 * count)).toBeLessThan(1e-5);
+  });
+});
+
+test('NIST/SEMATECH e-Handbook 7.2.2.2: one deviation, one-sided 5%, power 90%: 11', () => {
+  expect(returnsForPower(1, level('0.9'), { level: level95, side: 'above' })).toBe(11);
+});
+
+describe('need', () => {
+  const dax = indexReturns('DAX', '60');
+  const ask = (size: number, returns: ArrayLike<number> = dax) =>
+    need({ returns, size, level: level95, power, periodsPerYear: 252 });
+
+  test('DAX over 60 days, 20 bp', () => {
+    const answer = accepted(ask(0.002));
+    // s 1.3263%. SciPy 1.17.1: t.ppf(.975, n-1)*s/sqrt(n) <= 0.002 first at 172; power 0.8 (nct, both tails) first at 348.
+    expect(answer.forHalfWidth.returns).toBe(172);
+    expect(answer.forDetection.returns).toBe(348);
+    expect(answer.dependenceFactor).toBe(1);
+    expect(answer.detectionYears).toBe(348 / 252);
+    expect(answer.halfWidthYears).toBe(172 / 252);
+  });
+
+  test('at the ends of the deviation’s interval', () => {
+    const { deviationLower, deviationUpper, forDetection, forHalfWidth } = accepted(ask(0.002));
+    const test95 = { level: level95, side: 'both' } as const;
+    expect(forDetection.lower).toBe(returnsForPower(0.002 / deviationLower, power, test95));
+    expect(forDetection.upper).toBe(returnsForPower(0.002 / deviationUpper, power, test95));
+    expect(forHalfWidth.lower).toBeLessThan(forHalfWidth.returns);
+    expect(forHalfWidth.upper).toBeGreaterThan(forHalfWidth.returns);
+  });
+
+  test('positive autocorrelation asks for more', () => {
+    const runs = Float64Array.from({ length: 200 }, (_, day) => (day % 20 < 10 ? 1 : -1));
+    const answer = accepted(ask(0.1, runs));
+    expect(answer.dependenceFactor).toBeGreaterThan(2);
+    const free = returnsForPower(0.1 / answer.sampleStandardDeviation, power, {
+      level: level95,
+      side: 'both',
+    });
+    expect(answer.forDetection.returns).toBe(Math.ceil(answer.dependenceFactor * free));
+  });
+
+  test('refusals', () => {
+    expect(refusalCode(ask(0))).toBe('sizeOutside');
+    expect(refusalCode(ask(-0.1))).toBe('sizeOutside');
+    expect(refusalCode(ask(0.01, [0.01]))).toBe('tooFewReturns');
+    expect(refusalCode(ask(0.01, [0.01, 0.01]))).toBe('priceDoesNotMove');
+  });
+});
