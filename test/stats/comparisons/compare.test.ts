@@ -1,0 +1,111 @@
+import { describe, expect, test } from 'vitest';
+import { adjustedForSeveral, type CompareQuestion, compare } from '../../../src/stats/comparisons/compare.ts';
+import { deviationRatio } from '../../../src/stats/comparisons/deviationRatio.ts';
+import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { indexReturns } from '../indexWindows.ts';
+import { level95 } from '../levels.ts';
+import { testStreams } from '../testStreams.ts';
+
+const dax = indexReturns('DAX', '120');
+const smi = indexReturns('SMI', '120');
+
+const question = (more: Partial<CompareQuestion>): CompareQuestion => ({
+  first: dax.slice(60),
+  second: smi.slice(60),
+  paired: true,
+  level: level95,
+  streams: testStreams(5),
+  ...more,
+});
+
+describe('ratio of standard deviations, BCa', () => {
+  // SciPy 1.17.1: scipy.stats.bootstrap((a, b), log(std(a)/std(b)), paired=…, method='BCa', n_resamples=99999,
+  // random_state=1), exponentiated. The deviation of ln(s1/s2) is 0.13 at most; with 99,999 resamples on both sides an end
+  // has a Monte Carlo error of 0.0021 (the quantile's own 0.0011, and twice that of the bias correction, both times √2):
+  // 0.006 is three of them.
+  test('DAX against SMI, paired: 0.907 to 1.237', () => {
+    const ratio = accepted(deviationRatio(question({ replicates: 99_999 })));
+    expect(ratio.method).toBe('bca');
+    expect(ratio.ratio).toBeCloseTo(1.04381460869501, 13);
+    expect(Math.abs(ratio.lower - 0.90726628)).toBeLessThan(0.006);
+    expect(Math.abs(ratio.upper - 1.23652558)).toBeLessThan(0.006);
+  });
+
+  test('DAX, two periods: 0.731 to 1.205', () => {
+    const periods = question({
+      first: dax.slice(0, 60),
+      second: dax.slice(60),
+      paired: false,
+      replicates: 99_999,
+    });
+    const ratio = accepted(deviationRatio(periods));
+    expect(ratio.method).toBe('bca');
+    expect(ratio.ratio).toBeCloseTo(0.9354274116384244, 13);
+    expect(Math.abs(ratio.lower - 0.73132699)).toBeLessThan(0.006);
+    expect(Math.abs(ratio.upper - 1.2048249)).toBeLessThan(0.006);
+  });
+
+  test('the same streams give the same bits', () => {
+    expect(deviationRatio(question({ replicates: 199 }))).toEqual(
+      deviationRatio(question({ replicates: 199 })),
+    );
+  });
+
+  test('a series against itself scaled: the ratio is certain', () => {
+    const doubled = dax.map((value) => 2 * value);
+    const ratio = accepted(deviationRatio(question({ first: doubled, second: dax, replicates: 199 })));
+    expect(ratio.ratio).toBe(2);
+    expect([ratio.lower, ratio.upper]).toEqual([2, 2]);
+  });
+});
+
+test('clustered squares are drawn in blocks', () => {
+  const ratio = accepted(
+    deviationRatio(
+      question({ first: indexReturns('DAX', 'all'), second: indexReturns('SMI', 'all'), replicates: 199 }),
+    ),
+  );
+  expect(ratio.method).toBe('stationary');
+  expect(ratio.lower).toBeLessThan(ratio.ratio);
+  expect(ratio.upper).toBeGreaterThan(ratio.ratio);
+});
+
+describe('compare', () => {
+  test('two tickers are paired, two periods are not', () => {
+    const tickers = accepted(compare(question({ replicates: 199 })));
+    expect([tickers.kind, tickers.spreadTest]).toEqual(['paired', 'pairedAbsoluteDeviation']);
+    expect(tickers.ratio).not.toBeNull();
+    const periods = accepted(
+      compare(question({ first: dax.slice(0, 40), second: dax.slice(40), paired: false, replicates: 199 })),
+    );
+    expect([periods.kind, periods.spreadTest]).toEqual(['welch', 'brownForsythe']);
+    expect(periods.mean.degreesOfFreedom).toBeGreaterThan(39);
+    expect(periods.mean.degreesOfFreedom).toBeLessThan(118);
+  });
+
+  test('nine returns have no ratio, and the rest stands', () => {
+    const comparison = accepted(compare(question({ first: dax.slice(0, 9), second: smi.slice(0, 9) })));
+    expect(comparison.ratio).toBeNull();
+    expect(comparison.ratioProblem?.code).toBe('tooFewReturns');
+    expect(comparison.mean.degreesOfFreedom).toBe(8);
+  });
+
+  test('refusals', () => {
+    expect(refusalCode(compare(question({ second: dax.slice(60) })))).toBe('priceDoesNotMove');
+    expect(refusalCode(compare(question({ first: [0.1], second: [0.2] })))).toBe('tooFewReturns');
+    expect(refusalCode(compare(question({ first: [0.1, 0.1], paired: false })))).toBe('priceDoesNotMove');
+    expect(() => compare(question({ first: [1, 2, 4] }))).toThrow(RangeError);
+  });
+
+  test('several at once: means and spreads adjusted each among themselves', () => {
+    const one = accepted(compare(question({ replicates: 199 })));
+    const other = accepted(compare(question({ second: dax.slice(0, 60), replicates: 199 })));
+    const [first, second] = adjustedForSeveral([one, other]);
+    const [low, high] = [one.mean.p, other.mean.p].sort((a, b) => a - b);
+    expect(Math.min(first?.mean ?? 0, second?.mean ?? 0)).toBe(Math.min(1, 2 * (low ?? 0)));
+    expect(Math.max(first?.mean ?? 0, second?.mean ?? 0)).toBe(
+      Math.max(Math.min(1, 2 * (low ?? 0)), high ?? 0),
+    );
+    expect(first?.spread).toBeGreaterThanOrEqual(one.spread?.p ?? 2);
+  });
+});
