@@ -1,6 +1,9 @@
 import type { PriceAdjustment } from '../terms/prices.ts';
 import type { ReturnType } from '../terms/returns.ts';
+import type { ClaimFigures } from './claim/figures.ts';
+import type { CompareFigures } from './compare/figures.ts';
 import type { MeanFigures, RatioFigures, VolFigures } from './interval/figures.ts';
+import type { NeedFigures } from './need/figures.ts';
 
 /** Raised whenever a figure is computed differently than before, so that recorded answers can be told apart. */
 export const methodVersion = '1';
@@ -57,5 +60,11 @@ export type AnswerOf<Kind extends string, Verb extends string, Figures> = {
 export type MeanAnswer = AnswerOf<'interval mean', 'interval', MeanFigures>;
 export type VolAnswer = AnswerOf<'interval vol', 'interval', VolFigures>;
 export type RatioAnswer = AnswerOf<'interval ratio', 'interval', RatioFigures>;
+export type ClaimAnswer = AnswerOf<'claim', 'claim', ClaimFigures>;
+export type NeedAnswer = AnswerOf<'need', 'need', NeedFigures>;
+export type CompareAnswer = AnswerOf<'compare', 'compare', CompareFigures>;
 
-export type Answer = MeanAnswer | VolAnswer | RatioAnswer;
+export type Answer = MeanAnswer | VolAnswer | RatioAnswer | ClaimAnswer | NeedAnswer | CompareAnswer;
+
+/** What one question is answered with: one answer, or one for each pair where several tickers are compared. */
+export type Answers = readonly [Answer, ...Answer[]];

@@ -1,10 +1,13 @@
-import type { Answer } from '../answers/answer.ts';
+import type { Answer, Answers, CompareAnswer } from '../answers/answer.ts';
+import { claimReply } from './compose/claim.ts';
+import { compareManyReply, compareReply } from './compose/compare.ts';
 import { intervalMeanReply } from './compose/intervalMean.ts';
 import { intervalRatioReply } from './compose/intervalRatio.ts';
 import { intervalVolReply } from './compose/intervalVol.ts';
-import { type Reply, reply } from './reply.ts';
+import { needReply } from './compose/need.ts';
+import { type Reply, reply, warningsShown } from './reply.ts';
 
-/** The reply to an answer, whatever its verb. */
+/** The reply to one answer, whatever its verb. */
 export const answerReply = (answer: Answer): Reply => {
   switch (answer.kind) {
     case 'interval mean':
@@ -13,21 +16,35 @@ export const answerReply = (answer: Answer): Reply => {
       return intervalVolReply(answer);
     case 'interval ratio':
       return intervalRatioReply(answer);
+    case 'claim':
+      return claimReply(answer);
+    case 'need':
+      return needReply(answer);
+    case 'compare':
+      return compareReply(answer);
   }
 };
 
-/** The working of an answer, posted beneath it: the formula with this sample's numbers in it, step by step. */
-export const workingReply = (answer: Answer): Reply =>
+const isComparison = (answer: Answer): answer is CompareAnswer => answer.kind === 'compare';
+
+/** One reply to one question: several answers are the pairs of a comparison and share it. */
+export const answersReply = (answers: Answers): Reply => {
+  const [first, ...others] = answers;
+  const pairs = others.filter(isComparison);
+  return isComparison(first) && pairs.length > 0 ? compareManyReply([first, ...pairs]) : answerReply(first);
+};
+
+const workingReply = (answer: Answer): Reply =>
   reply('working', `The working of ${answer.id}: ${answer.question}.`, {
     passages: [
-      {
-        head: null,
-        lines: answer.working.map(({ step, text }, index) => `${index + 1}. ${step}: ${text}`),
-      },
-      ...(answer.warnings.length > 2
+      { head: null, lines: answer.working.map(({ step, text }, index) => `${index + 1}. ${step}: ${text}`) },
+      ...(answer.warnings.length > warningsShown
         ? [{ head: 'All cautions', lines: answer.warnings.map(({ text }) => text) }]
         : []),
       ...(answer.notes.length > 0 ? [{ head: 'Notes', lines: answer.notes.map(({ text }) => text) }] : []),
       { head: 'Sources', lines: answer.sources },
     ],
   });
+
+/** The working, posted beneath: the formula with this sample's numbers in it, step by step. */
+export const workingReplies = (answers: Answers): readonly Reply[] => answers.map(workingReply);

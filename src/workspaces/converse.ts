@@ -1,12 +1,12 @@
-import type { Answer } from '../answers/answer.ts';
+import type { Answers } from '../answers/answer.ts';
 import type { AnswerJob } from '../answers/answerQuestion.ts';
-import { answerReply, workingReply } from '../present/answerReply.ts';
+import { answersReply, workingReplies } from '../present/answerReply.ts';
 import { type FeedState, feedReply, type TickerState, tickerReply } from '../present/compose/feed.ts';
 import { type HelpPage, helpReply } from '../present/compose/help.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
 import { type Button, type Reply, reply } from '../present/reply.ts';
 import type { Question, ReadQuestion, StatisticalQuestion } from '../questions/question.ts';
-import { type ReadContext, readMessage } from '../questions/read.ts';
+import { type ReadContext, readMessage } from '../questions/readMessage.ts';
 import type { PriceSeries, PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
@@ -20,7 +20,7 @@ export type Asking = {
 };
 
 /** What the bot says to one question, and the outcome behind it where it was a statistical one. */
-export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answer> | null };
+export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answers> | null };
 
 export type Converse = {
   readonly ask: (asking: Asking) => Promise<readonly Spoken[]>;
@@ -35,7 +35,7 @@ export type Desk = {
   readonly compute: (
     job: Pick<AnswerJob, 'read' | 'series'>,
     progress?: (words: string) => void,
-  ) => Promise<Result<Answer>>;
+  ) => Promise<Result<Answers>>;
   readonly feedState: (snapshot: PriceSnapshot) => FeedState;
   readonly tickerState: (snapshot: PriceSnapshot, ticker: string) => Result<TickerState>;
   readonly helpPage: (topic: string | null) => HelpPage;
@@ -83,7 +83,7 @@ export const createConverse = (desk: Desk): Converse => {
     const outcome = await desk.compute({ read, series: series.value }, progress);
     if (!outcome.ok) return refused(outcome);
     recent.keep(outcome.value);
-    return { reply: answerReply(outcome.value), outcome };
+    return { reply: answersReply(outcome.value), outcome };
   };
 
   const answerOne = async (
@@ -111,18 +111,19 @@ export const createConverse = (desk: Desk): Converse => {
 
   const press: Converse['press'] = async ({ answerId, question }) => {
     const kept = recent.find(answerId);
-    if (kept !== null) return [workingReply(kept)];
+    if (kept !== null) return workingReplies(kept);
     const replies: Reply[] = [];
     for (const { outcome } of await ask({ text: question, place: 'terminal' })) {
       if (outcome?.ok !== true) continue;
-      if (outcome.value.id !== answerId)
+      const [{ id }] = outcome.value;
+      if (id !== answerId)
         replies.push(
           reply(
             'refusal',
-            `The prices have changed since ${answerId} was given; this is the working of the same question today, ${outcome.value.id}.`,
+            `The prices have changed since ${answerId} was given; this is the working of the same question today, ${id}.`,
           ),
         );
-      replies.push(workingReply(outcome.value));
+      replies.push(...workingReplies(outcome.value));
     }
     return replies.length > 0
       ? replies

@@ -2,9 +2,8 @@ import type { IntervalQuestion, ReadQuestion } from '../../questions/question.ts
 import type { PriceSeries } from '../../terms/prices.ts';
 import type { Result } from '../../terms/result.ts';
 import type { Answer } from '../answer.ts';
-import { identify } from '../identity.ts';
+import { askOne } from '../askOne.ts';
 import type { AnswerPolicy } from '../policy.ts';
-import { sampleReturns } from '../sample.ts';
 import { answerMean } from './mean.ts';
 import { answerRatio } from './ratio.ts';
 import { answerVol } from './vol.ts';
@@ -18,12 +17,6 @@ export const answerInterval = (
   series: PriceSeries,
   policy: AnswerPolicy,
 ): Result<Answer> => {
-  const sample = sampleReturns(series, question);
-  if (!sample.ok) return sample;
-  const { window, returnType } = question;
-  const identity = identify(read.canonical, [sample.value]);
-  return answers[question.of](
-    { read, window, returnType, sample: sample.value, meaning: series.meaning, identity, policy },
-    question,
-  );
+  const asked = askOne(read, question, series, policy);
+  return asked.ok ? answers[question.of](asked.value, question) : asked;
 };

@@ -1,6 +1,6 @@
 import { availableParallelism } from 'node:os';
 import { Piscina } from 'piscina';
-import type { Answer } from '../../answers/answer.ts';
+import type { Answers } from '../../answers/answer.ts';
 import { type AnswerJob, answerQuestion } from '../../answers/answerQuestion.ts';
 import { isHeavy } from '../../answers/weight.ts';
 import type { Result } from '../../terms/result.ts';
@@ -8,7 +8,7 @@ import type { Compute } from './compute.ts';
 
 /** Light answers at once on this thread; heavy ones in worker threads, so that the bot keeps answering others. */
 export const computeInPool = (): Compute => {
-  const pool = new Piscina<AnswerJob, Result<Answer>>({
+  const pool = new Piscina<AnswerJob, Result<Answers>>({
     filename: new URL('./worker.js', import.meta.url).href,
     minThreads: 1,
     maxThreads: Math.max(1, availableParallelism() - 1),

@@ -1,0 +1,26 @@
+export type CompareFigures = {
+  readonly kind: 'paired' | 'welch';
+  /** Differences are first − second, ratios first / second. */
+  readonly order: readonly [string, string];
+  readonly firstMean: number;
+  readonly secondMean: number;
+  readonly difference: number;
+  readonly lower: number;
+  readonly upper: number;
+  readonly t: number;
+  readonly p: number;
+  readonly degreesOfFreedom: number;
+  readonly confidenceLevel: number;
+  readonly spreadTest: 'brownForsythe' | 'pairedAbsoluteDeviation';
+  readonly spreadStatistic: number | null;
+  readonly spreadP: number | null;
+  readonly firstDeviation: number;
+  readonly secondDeviation: number;
+  readonly deviationRatio: number | null;
+  readonly ratioLower: number | null;
+  readonly ratioUpper: number | null;
+  readonly ratioMethod: 'bca' | 'stationary' | null;
+  /** Adjusted for all pairs of the question; null where there is only one. */
+  readonly holmP: number | null;
+  readonly holmSpreadP: number | null;
+};

@@ -1,0 +1,84 @@
+import type { ClaimAnswer } from '../../answers/answer.ts';
+import type { ClaimFigures } from '../../answers/claim/figures.ts';
+import { digits, threeDigits } from '../../wording/digits.ts';
+import { decimalsOfBounds, writeBounds } from '../../wording/estimate.ts';
+import { basisPoints, levelInWords, percent, percentBounds, percentDecimals } from '../../wording/percent.ts';
+import { counted, probabilityValue } from '../../wording/words.ts';
+import type { Reply, Table } from '../reply.ts';
+import { framed, placeInWords, windowInWords } from './parts.ts';
+
+/** How the figures of a claim are written: a mean in percent, a ratio as a plain number. */
+const writing = (figures: ClaimFigures) => {
+  const { of, estimate, lower, upper, claimed } = figures;
+  const bounds = { estimate, lower, upper };
+  return of === 'mean'
+    ? { bounds: percentBounds(bounds, percentDecimals(bounds, [0, claimed])), unit: '%' }
+    : { bounds: writeBounds(bounds, decimalsOfBounds(bounds, [0, claimed])), unit: '' };
+};
+
+const claimedInWords = ({ of, claimed, claimedPer }: ClaimFigures, periodsPerYear: number): string => {
+  if (of === 'ratio')
+    return claimedPer === 'day'
+      ? `a ratio of ${threeDigits(claimed)} a day`
+      : `a ratio of ${threeDigits(claimed * Math.sqrt(periodsPerYear))} a year`;
+  return claimedPer === 'day'
+    ? `a mean of ${basisPoints(claimed)} a day`
+    : `a mean of ${percent(claimed * periodsPerYear)} a year (${basisPoints(claimed)} a day)`;
+};
+
+const verdictSentence = (answer: ClaimAnswer): string => {
+  const { figures, subject, periodsPerYear } = answer;
+  const claim = claimedInWords(figures, periodsPerYear);
+  const name = subject[0] ?? '';
+  const window = windowInWords(answer);
+  if (figures.verdict === 'contradicted') return `${name}: ${claim} is contradicted ${window}`;
+  if (figures.verdict === 'consistent')
+    return `${name}: ${claim} is consistent with the data ${window}, which does not prove it`;
+  return figures.claimed === 0
+    ? `${name}: whether the mean is zero cannot be told ${window}`
+    : `${name}: the data cannot tell ${claim} from zero ${window}`;
+};
+
+const distance = ({ of, detectableAt80 }: ClaimFigures): string =>
+  of === 'mean' ? basisPoints(detectableAt80) : threeDigits(detectableAt80);
+
+const table = ({ figures }: ClaimAnswer): Table => {
+  const { bounds, unit } = writing(figures);
+  const needed = figures.returnsNeeded;
+  return {
+    columns: [
+      { head: figures.of === 'mean' ? 'Mean, % a day' : 'Mean / deviation, a day', align: 'left' },
+      { head: '', align: 'right' },
+    ],
+    rows: [
+      ['Estimate', bounds.estimate],
+      [
+        `At ${levelInWords(figures.confidenceLevel)}`,
+        `${bounds.lower ?? 'no bound'} to ${bounds.upper ?? 'no bound'}`,
+      ],
+      [
+        'Claimed',
+        figures.of === 'mean'
+          ? percent(figures.claimed, undefined, { plus: true }).replace('%', '')
+          : threeDigits(figures.claimed, { plus: true }),
+      ],
+      ['p of the claim', probabilityValue(figures.p)],
+      [`Found with 80% power, off by${unit === '%' ? '' : ' a ratio of'}`, distance(figures)],
+      ['Days to tell the claim from zero', needed === null ? 'none, it is zero' : digits(needed, 0)],
+    ],
+  };
+};
+
+export const claimReply = (answer: ClaimAnswer): Reply => {
+  const { figures } = answer;
+  const { bounds, unit } = writing(figures);
+  const what = figures.of === 'mean' ? 'mean' : 'ratio';
+  const sentence = `${verdictSentence(answer)}: at ${levelInWords(figures.confidenceLevel)} the true ${what} lies ${placeInWords(bounds, unit)}, and the estimate is ${bounds.estimate}${unit}.`;
+  const needed = figures.returnsNeeded;
+  const words = [
+    `p of the claim ${probabilityValue(figures.p)}`,
+    `a distance of ${distance(figures)} would be found with 80% power`,
+    ...(needed === null ? [] : [`telling the claim from zero takes ${counted(needed, 'day')}`]),
+  ];
+  return framed(answer, sentence, { table: table(answer), figuresInWords: words.join('; ') });
+};

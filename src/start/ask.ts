@@ -1,0 +1,86 @@
+import { openFeed } from '../feed/openFeed.ts';
+import { answersToJson, problemToJson } from '../present/json.ts';
+import { toText } from '../present/text.ts';
+import { inWords } from '../present/words.ts';
+import type { Problem } from '../terms/problem.ts';
+import { problem } from '../terms/problem.ts';
+import { createConverse, type Spoken } from '../workspaces/converse.ts';
+import { type Arguments, readArguments } from './arguments.ts';
+import { computeInline } from './compute/inline.ts';
+import { createDesk } from './desk.ts';
+import { exitCodes } from './exit.ts';
+import { settingsFor } from './settings.ts';
+
+const usage = 'npm run --silent ask -- [--config FILE] [--feed FILE] [--json] "QUESTION"';
+
+const print = (text: string): void => {
+  process.stdout.write(`${text}\n`);
+};
+
+const refuseWith = (found: readonly Problem[], json: boolean): number => {
+  for (const each of found) {
+    const hint = each.suggestion === null ? '' : `\nTry: ${each.suggestion}`;
+    process.stderr.write(`${json ? problemToJson(each) : `${each.message}${hint}`}\n`);
+  }
+  return exitCodes.refused;
+};
+
+/** Answers in text one below the other; as JSON in one document. */
+const show = (spoken: readonly Spoken[], json: boolean): void => {
+  const answers = spoken.flatMap(({ outcome }) => (outcome?.ok === true ? outcome.value : []));
+  if (json && answers.length > 0) print(answersToJson(answers));
+  else if (json)
+    print(JSON.stringify({ ok: true, text: spoken.map(({ reply }) => inWords(reply)).join('\n\n') }));
+  else
+    print(
+      spoken
+        .map(({ reply }) => toText({ ...reply, buttons: [] }, { width: process.stdout.columns ?? 100 }))
+        .join('\n\n'),
+    );
+};
+
+const ask = async (asked: Arguments): Promise<number> => {
+  const question = asked.words.join(' ').trim();
+  if (question === '')
+    return refuseWith(
+      [problem('noVerb', `No question was given. Write ${usage}, for example "interval KELP 60d".`)],
+      asked.json,
+    );
+  const reading = settingsFor(asked);
+  if (!reading.ok) return refuseWith(reading.problems, asked.json);
+  const feed = await openFeed(reading.settings.feed);
+  const desk = createDesk({
+    settings: reading.settings,
+    clock: { nowMs: Date.now },
+    snapshot: () => feed,
+    compute: computeInline(),
+  });
+  const spoken = await createConverse(desk).ask({ text: question, place: 'terminal' });
+  const problems = spoken.flatMap(({ outcome }) => (outcome?.ok === false ? [outcome.problem] : []));
+  if (problems.length > 0 || spoken.length === 0)
+    return refuseWith(
+      problems.length > 0
+        ? problems
+        : [problem('noVerb', 'No question was read. Ask for example "interval KELP 60d".')],
+      asked.json,
+    );
+  show(spoken, asked.json);
+  return exitCodes.answered;
+};
+
+const main = async (): Promise<number> => {
+  const asked = readArguments(process.argv.slice(2));
+  if ('wrong' in asked)
+    return refuseWith([problem('unreadableWords', `${asked.wrong}. Write ${usage}.`)], false);
+  return ask(asked);
+};
+
+main().then(
+  (code) => {
+    process.exitCode = code;
+  },
+  (error: unknown) => {
+    process.stderr.write(`${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+    process.exitCode = exitCodes.broken;
+  },
+);

@@ -1,0 +1,51 @@
+import { answeredVerbs } from '../answers/answerQuestion.ts';
+import type { Settings } from '../config/schema.ts';
+import { createVocabulary } from '../questions/vocabulary.ts';
+import type { Clock } from '../terms/clock.ts';
+import type { PriceSnapshot } from '../terms/prices.ts';
+import type { Result } from '../terms/result.ts';
+import type { Desk } from '../workspaces/converse.ts';
+import type { Compute } from './compute/compute.ts';
+import { feedStateOf, tickerStateOf } from './feedStates.ts';
+import { helpPageOf } from './helpPages.ts';
+import { dayAt } from './today.ts';
+
+export type DeskParts = {
+  readonly settings: Settings;
+  readonly clock: Clock;
+  readonly snapshot: () => Result<PriceSnapshot>;
+  readonly compute: Compute;
+};
+
+const noVocabulary = createVocabulary([]);
+
+/** A snapshot’s vocabulary is made once; snapshots are few and long-lived. */
+const vocabularies = () => {
+  const made = new WeakMap<PriceSnapshot, ReturnType<typeof createVocabulary>>();
+  return (snapshot: PriceSnapshot | null) => {
+    if (snapshot === null) return noVocabulary;
+    const known = made.get(snapshot) ?? createVocabulary(snapshot.tickers);
+    made.set(snapshot, known);
+    return known;
+  };
+};
+
+/** The desk as a conversation sees it, wired from settings, feed and machinery. */
+export const createDesk = ({ settings, clock, snapshot, compute }: DeskParts): Desk => {
+  const vocabularyOf = vocabularies();
+  const { periodsPerYear, smallestMeanThatMatters } = settings;
+  return {
+    snapshot,
+    contextFor: (live) => ({
+      vocabulary: vocabularyOf(live),
+      today: dayAt(clock.nowMs(), settings.deskTimeZone),
+      defaults: settings.defaults,
+      builtVerbs: ['help', 'feed', ...answeredVerbs],
+    }),
+    compute: (job, progress) =>
+      compute.answer({ ...job, policy: { periodsPerYear, smallestMeanThatMatters } }, progress),
+    feedState: feedStateOf,
+    tickerState: tickerStateOf,
+    helpPage: helpPageOf,
+  };
+};

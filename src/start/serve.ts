@@ -1,0 +1,73 @@
+import { randomUUID } from 'node:crypto';
+import { readTokens, type WorkspaceToStart } from '../config/tokens.ts';
+import { openFeed } from '../feed/openFeed.ts';
+import type { Problem } from '../terms/problem.ts';
+import { problem } from '../terms/problem.ts';
+import { type Converse, createConverse } from '../workspaces/converse.ts';
+import { startTerminal } from '../workspaces/terminal/start.ts';
+import { readArguments } from './arguments.ts';
+import { computeInPool } from './compute/pool.ts';
+import { createDesk } from './desk.ts';
+import { exitCodes } from './exit.ts';
+import { startHeartbeat } from './heartbeat.ts';
+import { operatorLog } from './log.ts';
+import { settingsFor } from './settings.ts';
+import { runSlack } from './slack.ts';
+import { thisTerminal } from './terminal.ts';
+
+const usage = 'npm start -- [--config FILE] [--feed FILE] [--workspace auto|slack|terminal]';
+
+const refuseWith = (problems: readonly Pick<Problem, 'message'>[]): number => {
+  for (const { message } of problems) process.stderr.write(`${message}\n`);
+  return exitCodes.refused;
+};
+
+type Serving = { readonly converse: Converse; readonly tickers: () => readonly string[] };
+
+const serveSlack = async (
+  workspace: WorkspaceToStart & { kind: 'slack' },
+  serving: Serving,
+): Promise<number> => {
+  const log = operatorLog();
+  const stopBeating = startHeartbeat(() => 'running', log.warn);
+  const problemFound = await runSlack(workspace, serving.converse, serving.tickers, log, randomUUID);
+  stopBeating();
+  return problemFound === null ? exitCodes.answered : refuseWith([problemFound]);
+};
+
+const serveTerminal = async ({ converse }: Serving): Promise<number> => {
+  await startTerminal(thisTerminal(), converse);
+  return exitCodes.answered;
+};
+
+const main = async (): Promise<number> => {
+  const asked = readArguments(process.argv.slice(2));
+  if ('wrong' in asked) return refuseWith([problem('unreadableWords', `${asked.wrong}. Write ${usage}.`)]);
+  const reading = settingsFor(asked);
+  if (!reading.ok) return refuseWith(reading.problems);
+  const { settings } = reading;
+  const workspace = readTokens(process.env, settings);
+  if (!workspace.ok) return refuseWith([workspace.problem]);
+  const feed = await openFeed(settings.feed);
+  if (!feed.ok) return refuseWith([feed.problem]);
+  const compute = computeInPool();
+  const desk = createDesk({ settings, clock: { nowMs: Date.now }, snapshot: () => feed, compute });
+  const serving = { converse: createConverse(desk), tickers: () => feed.value.tickers };
+  try {
+    return workspace.value.kind === 'slack'
+      ? await serveSlack(workspace.value, serving)
+      : await serveTerminal(serving);
+  } finally {
+    await compute.close();
+  }
+};
+
+main().then(
+  (code) => {
+    process.exitCode = code;
+  },
+  (error: unknown) => {
+    process.stderr.write(`${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+    process.exitCode = exitCodes.broken;
+  },
+);

@@ -1,0 +1,63 @@
+import type { WorkspaceToStart } from '../config/tokens.ts';
+import type { Problem } from '../terms/problem.ts';
+import type { Converse } from '../workspaces/converse.ts';
+import type { Logger, Time } from '../workspaces/slack/ports.ts';
+import { noInbox, seenInMemory } from '../workspaces/slack/seen.ts';
+import type { SlackSettings } from '../workspaces/slack/settings.ts';
+import { startSlack } from '../workspaces/slack/start.ts';
+import { slackConversation } from './slackConversation.ts';
+
+/** Two sockets, so that one can be opened anew while the other hears. */
+const sockets = 2;
+
+const settingsOf = (workspace: WorkspaceToStart & { kind: 'slack' }): SlackSettings => ({
+  botToken: workspace.botToken.reveal(),
+  apiUrl: workspace.apiUrl,
+  receiving:
+    workspace.connection === 'socket'
+      ? { mode: 'socket', appToken: workspace.appToken.reveal(), sockets }
+      : {
+          mode: 'http',
+          signingSecret: workspace.signingSecret.reveal(),
+          host: '0.0.0.0',
+          port: workspace.port,
+        },
+});
+
+const machineTime: Time = {
+  nowMs: Date.now,
+  after: (delayMs, run) => {
+    const timer = setTimeout(run, delayMs);
+    return () => clearTimeout(timer);
+  },
+};
+
+const untilTold = (): Promise<string> =>
+  new Promise((resolve) => {
+    for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => resolve(signal));
+  });
+
+/** Answers in Slack until the process is told to stop; the problem where it could not begin. */
+export const runSlack = async (
+  workspace: WorkspaceToStart & { kind: 'slack' },
+  converse: Converse,
+  tickers: () => readonly string[],
+  log: Logger,
+  newId: () => string,
+): Promise<Problem | null> => {
+  const started = await startSlack(settingsOf(workspace), {
+    conversation: slackConversation(converse, tickers),
+    log,
+    time: machineTime,
+    newId,
+    seen: seenInMemory(),
+    inbox: noInbox,
+  });
+  if (!started.ok) return started.problem;
+  const { port } = started.value;
+  log.info(port === null ? 'answering in Slack over sockets' : `answering in Slack on port ${port}`);
+  const signal = await untilTold();
+  log.info(`stopping on ${signal}: finishing what is under way`);
+  await started.value.stop();
+  return null;
+};
