@@ -2,9 +2,8 @@ import type { Day } from '../terms/day.ts';
 import type { Level } from '../terms/level.ts';
 import type { Position } from '../terms/problem.ts';
 import type { ReturnType } from '../terms/returns.ts';
+import type { Side } from '../terms/side.ts';
 import type { Window } from '../terms/window.ts';
-
-export type Side = 'both' | 'above' | 'below';
 
 /** A size as a decimal fraction per day or per year: 20bp is 0.002. */
 export type Size = { readonly fraction: number; readonly per: 'day' | 'year' };

@@ -1,0 +1,59 @@
+import { canonicalLine } from '../../canonicalText.ts';
+import type { ReadContext } from '../../context.ts';
+import { limits } from '../../limits.ts';
+import type { Fault, Repair } from '../faults/fault.ts';
+import type { Line } from '../recognisers/recogniser.ts';
+import { verbOfWord } from '../verbs/verbWords.ts';
+import { splitWords } from '../words/splitWords.ts';
+import type { Word } from '../words/word.ts';
+import { readLine, type WholeLine } from './readLine.ts';
+
+const repairedText = (words: readonly Word[], repair: Repair): string => {
+  const texts: string[] = [];
+  for (let at = 0; at <= words.length; at += 1) {
+    for (const edit of repair) if (edit.first === at) texts.push(edit.text);
+    const replaced = repair.some(({ first, wordCount }) => first <= at && at < first + wordCount);
+    const word = words[at];
+    if (word !== undefined && !replaced) texts.push(word.quoted ? `\`${word.text}\`` : word.text);
+  }
+  return texts.join(' ');
+};
+
+/** Written from the question that was read, so that nothing of the person's own text is in it. */
+const writtenOut = ({ questions, wishes }: WholeLine): string =>
+  [canonicalLine(questions), ...wishes.map((wish) => `as ${wish}`)].join(' ');
+
+/** A repaired line may have a fault of its own, which is repaired in turn, this often. */
+const mostRounds = 2;
+
+const readableForms = (line: Line, fault: Fault, rounds: number): readonly string[] => {
+  const forms = new Set<string>();
+  for (const repair of fault.repairs) {
+    if (forms.size >= limits.suggestionsPerProblem) break;
+    const { context } = line;
+    const words = splitWords(repairedText(line.words, repair), 0, context.vocabulary);
+    const attempt = readLine({ words, context });
+    if (attempt.ok) forms.add(writtenOut(attempt.value));
+    else if (rounds > 1)
+      for (const form of readableForms({ words, context }, attempt.fault, rounds - 1).slice(0, 1))
+        forms.add(form);
+  }
+  return [...forms];
+};
+
+const helpAbout = (line: Line): string => {
+  const verb = line.words
+    .map((word) => (word.quoted ? null : verbOfWord(word.lower)))
+    .find((found) => found !== null);
+  const asked = verb !== undefined && verb !== 'help' && line.context.builtVerbs.includes(verb);
+  return asked ? `help ${verb}` : 'help';
+};
+
+const canHelp = (context: ReadContext): boolean => context.builtVerbs.includes('help');
+
+/** Questions near the refused line that would work, ready to send, the nearest first; help about its verb where there is none. */
+export const suggestionsFor = (line: Line, fault: Fault): readonly string[] => {
+  const forms = readableForms(line, fault, mostRounds);
+  if (forms.length > 0 || !canHelp(line.context)) return forms;
+  return [helpAbout(line)];
+};

@@ -1,0 +1,19 @@
+import { backtest } from './backtest.ts';
+import { claim } from './claim.ts';
+import { compare } from './compare.ts';
+import { feed } from './feed.ts';
+import { help } from './help.ts';
+import { interval } from './interval.ts';
+import { need } from './need.ts';
+import { shape } from './shape.ts';
+import { tail } from './tail.ts';
+import type { VerbReader } from './verbReader.ts';
+
+/** The verbs that can be read whole. */
+const readers: readonly VerbReader[] = [interval, tail, shape, claim, need, compare, backtest, feed, help];
+
+const byVerb: ReadonlyMap<string, VerbReader> = new Map(readers.map((reader) => [reader.verb, reader]));
+
+export const readerOf = (verb: string): VerbReader | null => byVerb.get(verb) ?? null;
+
+export const readableVerbs: readonly string[] = readers.map(({ verb }) => verb);

@@ -1,0 +1,12 @@
+/** How much is read. What is longer is refused by name, never cut short silently. */
+export const limits = {
+  messageCharacters: 2000,
+  questionsPerMessage: 3,
+  tickersPerQuestion: 5,
+  /** A word of the person is repeated to them up to this length. */
+  shownCharacters: 40,
+  suggestionsPerProblem: 3,
+  windowReturns: 1_000_000,
+  /** A year of sessions: a simulated path beyond it says more about the model than about the price. */
+  horizonDays: 250,
+} as const;
