@@ -20,7 +20,7 @@ export type Interval = { readonly lower: number | null; readonly upper: number |
 export type IntervalMethod =
   | 'orderStatistics'
   | 'noncentralT'
-  | 'binomial'
+  | 'clopperPearson'
   | 'profileLikelihood'
   | 'parametricBootstrap'
   | 'percentileBootstrap'
@@ -47,6 +47,7 @@ export type TailFigureName =
 export const tailNoteCodes = {
   upperEndUnbounded: 'no rank bounds the figure from above at this count of returns',
   lowerEndUnbounded: 'no rank or parameter value bounds the figure from below',
+  levelBeyondResamples: 'a confidence level that the resamples are too few to reach',
   tooFewBeyond: 'too few returns beyond the level for an interval of the mean beyond it',
   meanNotFinite: 'the fitted tail is so heavy that the mean loss beyond the level does not exist',
   varianceMayNotBeFinite: 'degrees of freedom of 2 or less are not ruled out',

@@ -85,6 +85,7 @@ const figureEnds = (
   reach: number,
   multiplier: number,
   coordinates: (figure: number) => TailCoordinates,
+  boundedAbove = true,
 ): ProfileEnds => {
   const { location, logScale } = placeOf(maximum);
   const scale = Math.exp(logScale);
@@ -96,11 +97,12 @@ const figureEnds = (
       return reached === null ? null : { value: reached.value, slope: -(reached.gradient[0] as number) };
     };
   };
+  const estimate = scale * multiplier - location;
   return bothEnds(maximum, reach, {
     start,
-    estimate: scale * multiplier - location,
+    estimate,
     standardError: roughError(multiplier, scale, maximum.likelihood.count),
-    bounds: [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY],
+    bounds: [Number.NEGATIVE_INFINITY, boundedAbove ? Number.POSITIVE_INFINITY : estimate],
   });
 };
 
@@ -110,10 +112,22 @@ export const varEnds = (maximum: StudentMaximum, reach: number, tail: number): P
     varCoordinates(tail, figure),
   );
 
-/** Ends of ES in standard units, nu > 1; nu = 1 must lie outside its interval, for else nothing bounds ES from above. */
-export const esEnds = (maximum: StudentMaximum, reach: number, tail: number): ProfileEnds =>
-  figureEnds(maximum, reach, shortfallMultiplier(tail, maximum.fit.nu), (figure) =>
-    esCoordinates(tail, figure),
+/**
+ * Ends of ES in standard units, nu > 1. Where nu = 1 lies inside the interval of nu nothing bounds ES from above, which
+ * the caller says by `boundedAbove`; the upper end is then a bound.
+ */
+export const esEnds = (
+  maximum: StudentMaximum,
+  reach: number,
+  tail: number,
+  boundedAbove: boolean,
+): ProfileEnds =>
+  figureEnds(
+    maximum,
+    reach,
+    shortfallMultiplier(tail, maximum.fit.nu),
+    (figure) => esCoordinates(tail, figure),
+    boundedAbove,
   );
 
 /** Log-odds beyond these are 0 or 1 in a double. */

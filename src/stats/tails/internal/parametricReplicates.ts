@@ -1,0 +1,2 @@
+/** Samples of every parametric bootstrap here. */
+export const parametricReplicates = 999;
