@@ -49,12 +49,15 @@ export const expectedBeyond = (count: number, level: Level): number => {
   return (count * (scale - level.digits)) / scale;
 };
 
-/** The least count for which one return is expected beyond the level: ⌈1/(1 − level)⌉. */
-export const leastCountBeyond = (level: Level): number => {
+/** The least count for which `beyond` returns are expected beyond the level: ⌈beyond/(1 − level)⌉, for a whole `beyond`. */
+export const countWithBeyond = (level: Level, beyond: number): number => {
   const scale = 10n ** BigInt(level.places);
   const tail = scale - BigInt(level.digits);
-  return Number((scale + tail - 1n) / tail);
+  return Number((BigInt(beyond) * scale + tail - 1n) / tail);
 };
+
+/** The least count for which one return is expected beyond the level: ⌈1/(1 − level)⌉. */
+export const leastCountBeyond = (level: Level): number => countWithBeyond(level, 1);
 
 /** The level as people write it: `97.5%`. */
 export const levelText = (level: Level): string => {
