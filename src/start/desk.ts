@@ -17,6 +17,8 @@ export type DeskParts = {
   readonly compute: Compute;
 };
 
+const builtVerbs = ['help', 'feed', ...answeredVerbs];
+
 const noVocabulary = createVocabulary([]);
 
 /** A snapshot’s vocabulary is made once; snapshots are few and long-lived. */
@@ -40,12 +42,12 @@ export const createDesk = ({ settings, clock, snapshot, compute }: DeskParts): D
       vocabulary: vocabularyOf(live),
       today: dayAt(clock.nowMs(), settings.deskTimeZone),
       defaults: settings.defaults,
-      builtVerbs: ['help', 'feed', ...answeredVerbs],
+      builtVerbs,
     }),
     compute: (job, progress) =>
       compute.answer({ ...job, policy: { periodsPerYear, smallestMeanThatMatters } }, progress),
     feedState: feedStateOf,
     tickerState: tickerStateOf,
-    helpPage: helpPageOf,
+    helpPage: helpPageOf(builtVerbs),
   };
 };

@@ -102,9 +102,9 @@ export const createConverse = (desk: Desk): Converse => {
 
   const ask = async ({ text, progress }: Asking): Promise<readonly Spoken[]> => {
     const live = desk.snapshot();
-    const outcomes = readMessage(text, desk.contextFor(live.ok ? live.value : null));
+    const { questions } = readMessage(text, desk.contextFor(live.ok ? live.value : null));
     const spoken: Spoken[] = [];
-    for (const outcome of outcomes)
+    for (const outcome of questions)
       spoken.push(outcome.ok ? await answerOne(outcome.value, live, progress) : refused(outcome));
     return spoken;
   };

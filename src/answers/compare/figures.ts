@@ -20,6 +20,9 @@ export type CompareFigures = {
   readonly ratioLower: number | null;
   readonly ratioUpper: number | null;
   readonly ratioMethod: 'bca' | 'stationary' | null;
+  /** Whether the means, and the spreads, are told apart at the level, after adjusting for all pairs of the question. */
+  readonly meansDiffer: boolean;
+  readonly spreadsDiffer: boolean;
   /** Adjusted for all pairs of the question; null where there is only one. */
   readonly holmP: number | null;
   readonly holmSpreadP: number | null;

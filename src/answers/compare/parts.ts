@@ -1,7 +1,7 @@
 import type { AdjustedP, Comparison } from '../../stats/comparisons/compare.ts';
 import { sampleStandardDeviation } from '../../stats/moments/deviation.ts';
 import { arithmeticMean } from '../../stats/moments/mean.ts';
-import { type Level, levelFraction, levelText } from '../../terms/level.ts';
+import { type Level, levelFraction, levelText, tailFraction } from '../../terms/level.ts';
 import type { ReturnType } from '../../terms/returns.ts';
 import { workingDigits } from '../../wording/digits.ts';
 import { probabilityValue } from '../../wording/words.ts';
@@ -29,6 +29,9 @@ const sources = [
   'Several pairs: Holm (1979), Scandinavian Journal of Statistics 6',
 ] as const;
 
+const ratioExcludesOne = (ratio: Comparison['ratio']): boolean =>
+  ratio !== null && (ratio.lower > 1 || ratio.upper < 1);
+
 const figuresOf = ({ comparison, first, second, order, level, adjusted }: Compared): CompareFigures => {
   const { mean, spread, ratio } = comparison;
   return {
@@ -52,6 +55,8 @@ const figuresOf = ({ comparison, first, second, order, level, adjusted }: Compar
     ratioLower: ratio?.lower ?? null,
     ratioUpper: ratio?.upper ?? null,
     ratioMethod: ratio?.method ?? null,
+    meansDiffer: (adjusted?.mean ?? mean.p) < tailFraction(level),
+    spreadsDiffer: adjusted === null ? ratioExcludesOne(ratio) : (adjusted.spread ?? 1) < tailFraction(level),
     holmP: adjusted?.mean ?? null,
     holmSpreadP: adjusted?.spread ?? null,
   };

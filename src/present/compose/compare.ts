@@ -16,14 +16,10 @@ const ratioBounds = ({ deviationRatio, ratioLower, ratioUpper }: CompareFigures)
   return writeBounds(bounds, decimalsOfBounds(bounds, [1]), { plus: false });
 };
 
-const meansDiffer = ({ lower, upper }: CompareFigures): boolean => lower > 0 || upper < 0;
-
 const spreadWords = (figures: CompareFigures): string => {
   const bounds = ratioBounds(figures);
-  if (bounds === null || figures.ratioLower === null || figures.ratioUpper === null)
-    return 'volatility is not compared';
-  const differs = figures.ratioLower > 1 || figures.ratioUpper < 1;
-  return `volatility ${differs ? 'differs' : 'is not shown to differ'}, by a factor ${placeInWords(bounds, '')}`;
+  if (bounds === null) return 'volatility is not compared';
+  return `volatility ${figures.spreadsDiffer ? 'differs' : 'is not shown to differ'}, by a factor ${placeInWords(bounds, '')}`;
 };
 
 const subjectWords = (answer: CompareAnswer): string => {
@@ -69,7 +65,7 @@ export const compareReply = (answer: CompareAnswer): Reply => {
   const { figures } = answer;
   const bounds = meanBounds(figures);
   const sentence =
-    `${subjectWords(answer)} ${meansDiffer(figures) ? 'differ' : 'do not show a difference'} in mean daily return ${windowInWords(answer)}: ` +
+    `${subjectWords(answer)} ${figures.meansDiffer ? 'differ' : 'do not show a difference'} in mean daily return ${windowInWords(answer)}: ` +
     `at ${levelInWords(figures.confidenceLevel)} the true difference lies ${placeInWords(bounds, '%')}; ${spreadWords(figures)}.`;
   return framed(answer, sentence, {
     table: pairTable(answer),
@@ -89,18 +85,16 @@ const pairRow = ({ figures }: CompareAnswer): readonly string[] => {
   ];
 };
 
-const survives = (p: number | null, level: number): boolean => p !== null && p < 1 - level;
-
 /** Every pair of several tickers in one reply, with p-values that hold although all pairs are read at once. */
 export const compareManyReply = (answers: readonly [CompareAnswer, ...CompareAnswer[]]): Reply => {
   const [first] = answers;
   const level = first.figures.confidenceLevel;
   const names = [...new Set(answers.flatMap(({ subject }) => subject))];
   const apart = answers
-    .filter(({ figures }) => survives(figures.holmP, level))
+    .filter(({ figures }) => figures.meansDiffer)
     .map(({ figures }) => figures.order.join(' and '));
   const spreadApart = answers
-    .filter(({ figures }) => survives(figures.holmSpreadP, level))
+    .filter(({ figures }) => figures.spreadsDiffer)
     .map(({ figures }) => figures.order.join(' and '));
   const found = (pairs: readonly string[]) => (pairs.length === 0 ? 'no pair' : listed(pairs));
   const sentence =
