@@ -19,7 +19,6 @@ const varIntervalOf = (summary: ReturnSummary, score: number, beyond: number): I
   const upper = -noncentralTQuantile(beyond, degreesOfFreedom, -noncentrality);
   return { lower: -mean + standardError * lower, upper: -mean + standardError * upper };
 };
-};
 
 type EsInterval = { readonly interval: Interval | null; readonly notes: readonly TailNote[] };
 
