@@ -16,11 +16,31 @@ const upperTail = (t: number, nu: number, delta: number): number => {
   return t > 0 ? noncentralIntegral(t, nu, delta, true) : noncentralIntegral(-t, nu, -delta, false);
 };
 
+/**
+ * How likely is a noncentral t number above t: the power of a t test whose critical value is t?
+ *
+ * Convention: T = (Z + delta)/√(X/nu), Z standard normal, X chi-square with nu degrees of freedom; for the mean of n
+ * returns delta = √n·mean/s and nu = n − 1.
+ * Domain: nu > 0 (Infinity is the normal), finite t and delta; anything else throws. Measured for nu from 0.7 to 5000 and
+ * |delta| up to 100.
+ * Unit: t and delta in standard errors; probability as a fraction.
+ * Edges: delta = 0 is Student's t; 0 where the figure is below the smallest double. Relative error below 1e-12, tails
+ * included.
+ * Source: definition (Johnson & Welch 1940, Biometrika 31, 362-389), integrated as internal/noncentralIntegral.ts says.
+ * Example: `noncentralTUpperTail(2, 9, 3)` is 0.8318.
+ */
 export const noncentralTUpperTail = (t: number, nu: number, delta: number): number => {
   mustBeInDomain('noncentralTUpperTail', t, nu, delta);
   return upperTail(t, nu, delta);
 };
 
+/**
+ * How likely is a noncentral t number at or below t?
+ *
+ * Convention: the upper tail at −t for −delta, so the lower tail keeps its relative accuracy.
+ * Domain, unit, edges and source: as {@link noncentralTUpperTail}.
+ * Example: `noncentralTCdf(2, 9, 3)` is 0.1682.
+ */
 export const noncentralTCdf = (t: number, nu: number, delta: number): number => {
   mustBeInDomain('noncentralTCdf', t, nu, delta);
   return upperTail(-t, nu, -delta);
@@ -34,6 +54,16 @@ const normalScore = (t: number, nu: number, delta: number): number => {
   return upper <= 0 ? 40 : -normalQuantile(upper);
 };
 
+/**
+ * Below which point does a noncentral t number fall with probability p?
+ *
+ * Convention: p is the lower tail; for a small upper tail q take −noncentralTQuantile(q, nu, −delta).
+ * Domain: 0 < p < 1, nu > 0, finite delta; anything else throws.
+ * Unit: as {@link noncentralTUpperTail}.
+ * Edges: a point beyond the largest double throws. Relative error below 1e-12, near 0 absolute.
+ * Source: Chandrupatla's root of the normal score of the distribution function.
+ * Example: `noncentralTQuantile(0.9, 5, 2)` is 4.3013.
+ */
 export const noncentralTQuantile = (p: number, nu: number, delta: number): number => {
   if (!(p > 0 && p < 1)) throw new RangeError(`noncentralTQuantile: p = ${p} does not lie inside (0, 1)`);
   mustBeInDomain('noncentralTQuantile', 0, nu, delta);
@@ -41,6 +71,17 @@ export const noncentralTQuantile = (p: number, nu: number, delta: number): numbe
   return solved('noncentralTQuantile', (t) => normalScore(t, nu, delta) - score, delta + score);
 };
 
+/**
+ * Which delta makes P(T ≤ t) equal to p: the end of the interval for mean/s that inverts the noncentral t?
+ *
+ * Convention: the probability falls as delta rises, so p = 0.025 gives the upper end and p = 0.975 the lower end of a 95%
+ * interval for delta.
+ * Domain: 0 < p < 1, nu > 0, finite t; anything else throws.
+ * Unit: as {@link noncentralTUpperTail}.
+ * Edges: every t and p has exactly one delta. Relative error below 1e-12, near 0 absolute.
+ * Source: Chandrupatla's root of the normal score, which is nearly a straight line in delta.
+ * Example: `noncentralityAt(0.025, 2.5, 19)` is 4.5848.
+ */
 export const noncentralityAt = (p: number, t: number, nu: number): number => {
   if (!(p > 0 && p < 1)) throw new RangeError(`noncentralityAt: p = ${p} does not lie inside (0, 1)`);
   mustBeInDomain('noncentralityAt', t, nu, 0);

@@ -1,7 +1,7 @@
 import { integrate } from '../../numerics/integral.ts';
 import { expandBracket, findRoot } from '../../numerics/roots.ts';
 import { millsRatio } from './millsRatio.ts';
-import { stirlingRemainder } from './stirlingRemainder.ts';
+import { halfLogTwoPi, stirlingRemainder } from './stirlingRemainder.ts';
 
 /*
  * P(T ≤ t) for T = (Z + delta)/S, Z standard normal and nu·S² chi-square, is the mean of Φ(t·S − delta). With S = e^y the
@@ -10,7 +10,6 @@ import { stirlingRemainder } from './stirlingRemainder.ts';
  */
 
 const windowDepth = 40;
-const halfLogTwoPi = 0.9189385332046728;
 
 /** ln(Φ(u)), or ln(1 − Φ(u)) for the upper side. */
 const logNormalSide = (u: number, upper: boolean): number => {

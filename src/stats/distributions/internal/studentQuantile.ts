@@ -20,13 +20,16 @@ const nearCentre = (central: number, nu: number): number => {
   });
 };
 
+const logLargest = Math.log(Number.MAX_VALUE);
+
 /** Solved for ln t on the logarithm of the tail, which is nearly a straight line when the tail is heavy. */
 const inTail = (tail: number, nu: number): number => {
   const logTwoSided = Math.log(2 * tail);
+  if (twoSidedTail(Number.MAX_VALUE, nu) > 2 * tail) return Number.POSITIVE_INFINITY;
   const logQuantile = finishQuantile({
     start: Math.log(startOf(tail, nu)),
     low: -2,
-    high: 709,
+    high: logLargest,
     residual: (logT) => logTwoSided - Math.log(twoSidedTail(Math.exp(logT), nu)),
     slope: (logT) => {
       const t = Math.exp(logT);
