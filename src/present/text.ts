@@ -24,7 +24,8 @@ export const wrap = (text: string, width: number, hanging = ''): string[] => {
   const lines: string[] = [];
   let line = '';
   const room = () => Math.max(1, width - (lines.length === 0 ? 0 : lengthOf(hanging)));
-  for (const word of text.split(' ').flatMap((each) => pieces(each, room()))) {
+  const longestPiece = Math.max(1, width - lengthOf(hanging));
+  for (const word of text.split(' ').flatMap((each) => pieces(each, longestPiece))) {
     const longer = line === '' ? word : `${line} ${word}`;
     if (lengthOf(longer) <= room()) line = longer;
     else {

@@ -1,4 +1,4 @@
-import { type DigitOptions, decimalsOfThree, digits } from './digits.ts';
+import { type DigitOptions, decimalsOfThree, digits, threeDigits } from './digits.ts';
 import { type Bounded, decimalsOfBounds, type WrittenBounds, writeBounds } from './estimate.ts';
 
 /** Decimal fractions become percent here and nowhere else. */
@@ -27,10 +27,14 @@ export const percent = (fraction: number, decimals?: number, options: DigitOptio
   return `${digits(value, decimals ?? decimalsOfThree(value), options)}%`;
 };
 
-/** Basis points with three significant digits: `20bp`. */
-export const basisPoints = (fraction: number): string => {
-  const value = fraction * 10_000;
-  return `${digits(value, Number.isInteger(Math.round(value * 1e9) / 1e9) ? 0 : decimalsOfThree(value))}bp`;
+/** Basis points with three significant digits: `35.8bp`. */
+export const basisPoints = (fraction: number): string => `${threeDigits(fraction * 10_000)}bp`;
+
+/** A size that a person typed, with all the digits it was typed with: `20bp`, `12.34bp`. */
+export const typedBasisPoints = (fraction: number): string => {
+  const value = Number((fraction * 10_000).toPrecision(10));
+  const decimals = String(value).split('.')[1]?.length ?? 0;
+  return `${digits(value, decimals)}bp`;
 };
 
 /** A level with just the digits it was asked with: `95%`, `97.5%`, `99.9%`. */

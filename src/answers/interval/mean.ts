@@ -108,6 +108,7 @@ export const answerMean = (asked: Asked, question: IntervalQuestion): Result<Mea
   const widths = meanWidths(returns, level, side);
   if (!widths.ok) return widths;
   const trusted = found.value;
+  const leads = leading(trusted, robust);
   const figures: MeanFigures = {
     ...intervalFigures(trusted, policy.periodsPerYear),
     ...evidenceFigures(trusted),
@@ -121,7 +122,7 @@ export const answerMean = (asked: Asked, question: IntervalQuestion): Result<Mea
       upper: step.upper,
     })),
     widths: widths.value,
-    trust: leading(trusted, robust),
+    trust: leads,
     annualLeads: question.annual,
   };
   return succeed(
@@ -129,7 +130,7 @@ export const answerMean = (asked: Asked, question: IntervalQuestion): Result<Mea
       kind: 'interval mean',
       verb: 'interval',
       figures,
-      warnings: [...meanWarnings(trusted), ...predictionWarnings(prediction.value)],
+      warnings: [...meanWarnings(trusted, leads), ...predictionWarnings(prediction.value)],
       notes: notesFor(trusted),
       method: 'Student’s t interval of the mean',
       sources,

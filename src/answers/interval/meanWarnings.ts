@@ -7,7 +7,10 @@ const dependenceFound = ({ evidence }: TrustedMeanInterval): string =>
   `returns follow each other (robust test p ${probabilityValue(evidence.robustAutocorrelation?.p ?? 1)})`;
 
 /** What speaks against reading the plain interval, what that means here and what to do. */
-export const meanWarnings = (trusted: TrustedMeanInterval): readonly Warning[] => {
+export const meanWarnings = (
+  trusted: TrustedMeanInterval,
+  leading: TrustedMeanInterval['trust'],
+): readonly Warning[] => {
   const { reason, evidence } = trusted;
   switch (reason) {
     case 'nothingAgainst':
@@ -30,7 +33,7 @@ export const meanWarnings = (trusted: TrustedMeanInterval): readonly Warning[] =
       return [
         {
           code: 'lopsided',
-          text: `returns are few and lopsided (skewness ${threeDigits(evidence.skewness ?? 0)}), and the plain interval does not lean with them: read the bootstrap row.`,
+          text: `returns are few and lopsided (skewness ${threeDigits(evidence.skewness ?? 0)}), and the plain interval does not lean with them: read the ${leading === 'neweyWest' ? 'bootstrap row beside the Newey–West one' : 'bootstrap row'}.`,
         },
       ];
     case 'outOfReach':

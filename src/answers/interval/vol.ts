@@ -19,9 +19,15 @@ const sources = [
   'Annual figures: trade practice, without a source; √ of the days needs returns without autocorrelation (Lo 2002)',
 ] as const;
 
-const trustedEnds = (trust: DeviationTrust) => trust[trust.trust] ?? trust.chiSquare;
+type Leading = VolFigures['trust'];
 
-const warningsFor = ({ reason, clustering }: DeviationTrust): readonly Warning[] => {
+/** The interval that leads: the resampled blocks where they were asked for and can be had. */
+const leadingOf = (trust: DeviationTrust, robustAsked: boolean): Leading =>
+  robustAsked && trust.block !== null ? 'block' : trust.trust;
+
+const leadingEnds = (trust: DeviationTrust, leading: Leading) => trust[leading] ?? trust.chiSquare;
+
+const warningsFor = ({ reason, clustering }: DeviationTrust, leading: Leading): readonly Warning[] => {
   if (reason === 'clustered')
     return [
       {
@@ -33,7 +39,7 @@ const warningsFor = ({ reason, clustering }: DeviationTrust): readonly Warning[]
     return [
       {
         code: 'fatTails',
-        text: 'the tails are fatter than the bell curve’s, so the chi-square row is too narrow: read the Bonett row.',
+        text: `the tails are fatter than the bell curve’s, so the chi-square row is too narrow: read the ${leading === 'block' ? 'resampled blocks' : 'Bonett row'}.`,
       },
     ];
   return reason === 'outOfReach'
@@ -115,7 +121,8 @@ export const answerVol = (asked: Asked, question: IntervalQuestion): Result<VolA
   if (!found.ok) return found;
   const trust = found.value;
   const deviation = sampleStandardDeviation(returns);
-  const ends = trustedEnds(trust);
+  const leading = leadingOf(trust, question.robust);
+  const ends = leadingEnds(trust, leading);
   const figures: VolFigures = {
     sampleStandardDeviation: deviation,
     confidenceLevel: levelFraction(question.level),
@@ -129,14 +136,14 @@ export const answerVol = (asked: Asked, question: IntervalQuestion): Result<VolA
     annualDeviation: annualDeviation(deviation, policy.periodsPerYear),
     annualDeviationLower: annualDeviation(ends.lower, policy.periodsPerYear),
     annualDeviationUpper: annualDeviation(ends.upper, policy.periodsPerYear),
-    trust: question.robust && trust.block !== null ? 'block' : trust.trust,
+    trust: leading,
   };
   return succeed(
     enclose(asked, {
       kind: 'interval vol',
       verb: 'interval',
       figures,
-      warnings: warningsFor(trust),
+      warnings: warningsFor(trust, leading),
       notes: notesFor(trust),
       method: 'interval of the standard deviation',
       sources,

@@ -16,7 +16,7 @@ const warningsFor = ({ dependenceFactor, forDetection }: Need, returnCount: numb
     ? [
         {
           code: 'dependenceFactor',
-          text: `returns follow each other, so each carries less: all counts are multiplied by ${threeDigits(dependenceFactor)}.`,
+          text: `the standard error that allows for dependence (Newey–West) is the larger one, so all counts are multiplied by ${threeDigits(dependenceFactor)}.`,
         },
       ]
     : []),

@@ -1,8 +1,15 @@
 import type { ClaimAnswer } from '../../answers/answer.ts';
 import type { ClaimFigures } from '../../answers/claim/figures.ts';
-import { digits, threeDigits } from '../../wording/digits.ts';
+import { digits, roundTo, threeDigits } from '../../wording/digits.ts';
 import { decimalsOfBounds, writeBounds } from '../../wording/estimate.ts';
-import { basisPoints, levelInWords, percent, percentBounds, percentDecimals } from '../../wording/percent.ts';
+import {
+  basisPoints,
+  inPercent,
+  levelInWords,
+  percent,
+  percentBounds,
+  percentDecimals,
+} from '../../wording/percent.ts';
 import { counted, probabilityValue } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
 import { framed, placeInWords, windowInWords } from './parts.ts';
@@ -22,7 +29,7 @@ const claimedInWords = ({ of, claimed, claimedPer }: ClaimFigures, periodsPerYea
       ? `a ratio of ${threeDigits(claimed)} a day`
       : `a ratio of ${threeDigits(claimed * Math.sqrt(periodsPerYear))} a year`;
   return claimedPer === 'day'
-    ? `a mean of ${basisPoints(claimed)} a day`
+    ? `a mean of ${typedBasisPoints(claimed)} a day`
     : `a mean of ${percent(claimed * periodsPerYear)} a year (${basisPoints(claimed)} a day)`;
 };
 
@@ -37,6 +44,13 @@ const verdictSentence = (answer: ClaimAnswer): string => {
   return figures.claimed === 0
     ? `${name}: whether the mean is zero cannot be told ${window}`
     : `${name}: the data cannot tell ${claim} from zero ${window}`;
+};
+
+/** With the decimals of the estimate, unless those would change what was claimed. */
+const claimedDigits = ({ of, claimed }: ClaimFigures, decimals: number): string => {
+  const value = of === 'mean' ? inPercent(claimed) : claimed;
+  const unchanged = Math.abs(roundTo(value, decimals) - value) < 1e-9;
+  return unchanged ? digits(value, decimals, { plus: true }) : threeDigits(value, { plus: true });
 };
 
 const distance = ({ of, detectableAt80 }: ClaimFigures): string =>
@@ -56,12 +70,7 @@ const table = ({ figures }: ClaimAnswer): Table => {
         `At ${levelInWords(figures.confidenceLevel)}`,
         `${bounds.lower ?? 'no bound'} to ${bounds.upper ?? 'no bound'}`,
       ],
-      [
-        'Claimed',
-        figures.of === 'mean'
-          ? percent(figures.claimed, undefined, { plus: true }).replace('%', '')
-          : threeDigits(figures.claimed, { plus: true }),
-      ],
+      ['Claimed', claimedDigits(figures, bounds.decimals)],
       ['p of the claim', probabilityValue(figures.p)],
       [`Found with 80% power, off by${unit === '%' ? '' : ' a ratio of'}`, distance(figures)],
       ['Days to tell the claim from zero', needed === null ? 'none, it is zero' : digits(needed, 0)],

@@ -3,7 +3,7 @@ import type { CompareFigures } from '../../answers/compare/figures.ts';
 import { significant } from '../../wording/digits.ts';
 import { decimalsOfBounds, writeBounds } from '../../wording/estimate.ts';
 import { levelInWords, percent, percentBounds } from '../../wording/percent.ts';
-import { listed, probabilityValue } from '../../wording/words.ts';
+import { listed, possessive, probabilityValue } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
 import { framed, placeInWords, windowInWords } from './parts.ts';
 
@@ -22,11 +22,14 @@ const spreadWords = (figures: CompareFigures): string => {
   return `volatility ${figures.spreadsDiffer ? 'differs' : 'is not shown to differ'}, by a factor ${placeInWords(bounds, '')}`;
 };
 
-const subjectWords = (answer: CompareAnswer): string => {
-  const [first, second] = answer.figures.order;
-  return answer.figures.kind === 'paired'
-    ? `${first} and ${second}`
-    : `${answer.subject[0] ?? ''} ${first} and ${second}`;
+/** Who is compared, and whether they are told apart. */
+const verdictWords = (answer: CompareAnswer): string => {
+  const { kind, order, meansDiffer } = answer.figures;
+  const [first, second] = order;
+  if (kind === 'paired')
+    return `${first} and ${second} ${meansDiffer ? 'differ' : 'do not show a difference'} in mean daily return`;
+  const changed = meansDiffer ? 'has changed' : 'is not shown to have changed';
+  return `${possessive(answer.subject[0] ?? '')} mean daily return ${changed} ${first}, against ${second}`;
 };
 
 const pairTable = ({ figures }: CompareAnswer): Table => {
@@ -65,7 +68,7 @@ export const compareReply = (answer: CompareAnswer): Reply => {
   const { figures } = answer;
   const bounds = meanBounds(figures);
   const sentence =
-    `${subjectWords(answer)} ${figures.meansDiffer ? 'differ' : 'do not show a difference'} in mean daily return ${windowInWords(answer)}: ` +
+    `${verdictWords(answer)} ${windowInWords(answer)}: ` +
     `at ${levelInWords(figures.confidenceLevel)} the true difference lies ${placeInWords(bounds, '%')}; ${spreadWords(figures)}.`;
   return framed(answer, sentence, {
     table: pairTable(answer),
@@ -92,10 +95,10 @@ export const compareManyReply = (answers: readonly [CompareAnswer, ...CompareAns
   const names = [...new Set(answers.flatMap(({ subject }) => subject))];
   const apart = answers
     .filter(({ figures }) => figures.meansDiffer)
-    .map(({ figures }) => figures.order.join(' and '));
+    .map(({ figures }) => figures.order.join('–'));
   const spreadApart = answers
     .filter(({ figures }) => figures.spreadsDiffer)
-    .map(({ figures }) => figures.order.join(' and '));
+    .map(({ figures }) => figures.order.join('–'));
   const found = (pairs: readonly string[]) => (pairs.length === 0 ? 'no pair' : listed(pairs));
   const sentence =
     `Among ${listed(names)} ${windowInWords(first)}, adjusted for ${answers.length} pairs at ${levelInWords(level)}: ` +

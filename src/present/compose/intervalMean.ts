@@ -1,6 +1,6 @@
 import type { MeanAnswer } from '../../answers/answer.ts';
 import type { Bounds, MeanFigures } from '../../answers/interval/figures.ts';
-import { digits } from '../../wording/digits.ts';
+import { digits, significant } from '../../wording/digits.ts';
 import { levelInWords, percent, percentBounds, percentDecimals } from '../../wording/percent.ts';
 import { possessive } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
@@ -30,7 +30,7 @@ const bothScales = (periodsPerYear: number, estimate: number, { lower, upper }: 
 const tooNarrow = (figures: MeanFigures): string => {
   const plain = (figures.upper ?? figures.mean) - (figures.lower ?? figures.mean);
   const normal = (figures.normalUpper ?? figures.mean) - (figures.normalLower ?? figures.mean);
-  return plain > 0 ? percent(1 - normal / plain) : '0%';
+  return plain > 0 ? `${significant(100 * (1 - normal / plain), 2)}%` : '0%';
 };
 
 const intervalRow = (answer: MeanAnswer, name: string, bounds: Bounds): readonly string[] => {

@@ -1,6 +1,6 @@
 import type { NeedAnswer } from '../../answers/answer.ts';
 import { digits, threeDigits } from '../../wording/digits.ts';
-import { basisPoints, levelInWords, percent } from '../../wording/percent.ts';
+import { levelInWords, percent, typedBasisPoints } from '../../wording/percent.ts';
 import { counted } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
 import { framed, windowInWords } from './parts.ts';
@@ -39,7 +39,7 @@ const table = ({ figures }: NeedAnswer): Table => ({
 
 export const needReply = (answer: NeedAnswer): Reply => {
   const { figures } = answer;
-  const size = basisPoints(figures.detect);
+  const size = typedBasisPoints(figures.detect);
   const level = levelInWords(figures.confidenceLevel);
   const sentence =
     `${answer.subject[0] ?? ''}: to tell a mean of ${size} a day from zero takes about ${counted(figures.detectReturns, 'trading day')} ` +

@@ -46,7 +46,6 @@ const ask = async (terminal: Terminal, converse: Converse, room: Room, text: str
   const place = room.channel.startsWith('@') ? 'direct' : 'channel';
   const where = room.thread === null ? '' : `, in thread ${room.thread}`;
   if (terminal.interactive) say(terminal, `  message ${number} in ${room.channel}${where}`);
-  else say(terminal, `${promptOf(room)}${text}`);
   const spoken = await converse.ask({ text, place });
   return show(
     terminal,
@@ -87,10 +86,15 @@ export const startTerminal = async (terminal: Terminal, converse: Converse): Pro
   const prompt = () => {
     if (terminal.interactive) terminal.write(promptOf(room));
   };
+  /** Where nobody types, what was read is shown, so that the whole can be read as a conversation. */
+  const echo = (typed: string) => {
+    if (!terminal.interactive && typed.trim() !== '') say(terminal, `${promptOf(room)}${typed.trim()}`);
+  };
   if (terminal.interactive) say(terminal, welcome);
   prompt();
   for await (const typed of terminal.lines) {
     linesRead += 1;
+    echo(typed);
     const line = readLine(typed);
     if (line.kind === 'leave') return room.messageCount;
     if (line.kind === 'channel') room = { ...room, channel: line.name, thread: null };
@@ -100,6 +104,9 @@ export const startTerminal = async (terminal: Terminal, converse: Converse): Pro
     prompt();
   }
   if (linesRead === 0 && !terminal.interactive)
-    for (const question of demonstrationQuestions) room = await ask(terminal, converse, room, question);
+    for (const question of demonstrationQuestions) {
+      echo(question);
+      room = await ask(terminal, converse, room, question);
+    }
   return room.messageCount;
 };

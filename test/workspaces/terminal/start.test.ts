@@ -1,0 +1,85 @@
+import { describe, expect, test } from 'vitest';
+import { type Reply, reply } from '../../../src/present/reply.ts';
+import type { Asking, Converse } from '../../../src/workspaces/converse.ts';
+import { demonstrationQuestions, startTerminal } from '../../../src/workspaces/terminal/start.ts';
+
+/** A conversation that repeats what it is asked, and a terminal that keeps what is written on it. */
+const sitDown = async (typed: readonly string[], interactive = false) => {
+  const asked: Asking[] = [];
+  const answer = (text: string): Reply =>
+    reply('answer', `You asked ${text}`, {
+      buttons: [{ action: 'working', label: `Working of ${text}`, answerId: 'R-0000000000', question: text }],
+    });
+  const converse: Converse = {
+    ask: async (asking) => {
+      asked.push(asking);
+      return [{ reply: answer(asking.text), outcome: null }];
+    },
+    press: async ({ question }) => [reply('working', `Working of ${question}.`)],
+  };
+  let screen = '';
+  const lines = (async function* () {
+    yield* typed;
+  })();
+  const write = (text: string) => {
+    screen += text;
+  };
+  const count = await startTerminal({ lines, write, width: () => 80, interactive }, converse);
+  return { asked, screen, count };
+};
+
+describe('the terminal workspace', () => {
+  test('answers line by line, and shows what it read where nobody types', async () => {
+    const { asked, screen, count } = await sitDown(['interval KELP', '', 'feed']);
+    expect(asked.map(({ text }) => text)).toEqual(['interval KELP', 'feed']);
+    expect(screen).toContain('#desk> interval KELP\n  You asked interval KELP\n');
+    expect(count).toBe(2);
+  });
+
+  test('with nothing typed at all it shows three questions with their answers', async () => {
+    const { asked } = await sitDown([]);
+    expect(asked.map(({ text }) => text)).toEqual([...demonstrationQuestions]);
+    expect(demonstrationQuestions).toHaveLength(3);
+  });
+
+  test('a person who types gets a welcome and prompts, and no demonstration', async () => {
+    const { asked, screen } = await sitDown([], true);
+    expect(asked).toEqual([]);
+    expect(screen).toContain('#desk> ');
+  });
+
+  test('channels, direct messages and threads are places to be in', async () => {
+    const { asked, screen } = await sitDown([
+      '#risk',
+      'feed',
+      'thread 1',
+      'feed',
+      'top',
+      '@leadsman',
+      'feed',
+    ]);
+    expect(asked.map(({ place }) => place)).toEqual(['channel', 'channel', 'direct']);
+    expect(screen).toContain('#risk thread 1> feed');
+    expect(screen).toContain('@leadsman> feed');
+  });
+
+  test('a button is pressed by its number, counted through the whole conversation', async () => {
+    const { screen } = await sitDown(['first', 'second', 'press 2']);
+    expect(screen).toContain('[2] Working of second');
+    expect(screen).toContain('Working of second.');
+  });
+
+  test.each([
+    [['press 1'], 'There is no button yet.'],
+    [['feed', 'press 7'], 'There is no button 7: press 1 to 1.'],
+    [['thread 3'], 'There is no message yet.'],
+    [['feed', 'thread 3'], 'There is no message 3: 1 to 1 can be answered.'],
+  ])('%j says what would be right', async (typed, expected) => {
+    expect((await sitDown(typed)).screen).toContain(expected);
+  });
+
+  test('leave ends it, with lines still to come', async () => {
+    const { asked } = await sitDown(['feed', 'leave', 'feed']);
+    expect(asked).toHaveLength(1);
+  });
+});
