@@ -99,11 +99,11 @@ const nearbyMaximum = (
     studentSettings,
   );
 
+/** The highest maximum; null where none was reached, or where one that was not reached already lies higher. */
 const highestOf = (maxima: readonly NewtonMaximum[]): NewtonMaximum | null => {
-  const reached = maxima.filter((maximum) => maximum.converged);
-  const highest = reached.sort((first, second) => second.value - first.value)[0];
-  const beaten = maxima.some((maximum) => !maximum.converged && maximum.value > (highest?.value ?? 0));
-  return highest === undefined || beaten ? null : highest;
+  let highest: NewtonMaximum | null = null;
+  for (const maximum of maxima) if (highest === null || maximum.value > highest.value) highest = maximum;
+  return highest?.converged === true ? highest : null;
 };
 
 /** The fit with its standard-unit parts; see {@link fitStudent}. */

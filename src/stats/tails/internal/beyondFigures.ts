@@ -13,6 +13,6 @@ export const beyondFigures = (
   probability,
   interval,
   intervalMethod: interval === null ? null : intervalMethod,
-  meanReturnSessions: probability > 0 ? 1 / probability : null,
+  meanReturnSessions: Number.isFinite(1 / probability) ? 1 / probability : null,
   notes,
 });

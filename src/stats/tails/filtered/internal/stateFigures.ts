@@ -1,0 +1,27 @@
+import { ceilingOfCount, expectedBeyond, type Level } from '../../../../terms/level.ts';
+import { orderStatistic } from '../../../numerics/quantile.ts';
+import { lossesAscending, meanBeyond } from '../../internal/losses.ts';
+import type { FilterState } from './filterSource.ts';
+
+/** Losses as positive decimal fractions. */
+export type StateFigures = { readonly var: number; readonly es: number };
+
+/** The historical figures of the residuals' losses −z, times the next day's deviation, less mu. */
+export const stateFigures = (
+  { mu, residuals, nextVariance }: FilterState,
+  tailLevel: Level,
+): StateFigures => {
+  const losses = lossesAscending(residuals);
+  const rank = ceilingOfCount(losses.length, tailLevel);
+  const deviation = Math.sqrt(nextVariance);
+  const shortfall = meanBeyond(losses, rank, expectedBeyond(losses.length, tailLevel));
+  return { var: deviation * orderStatistic(losses, rank) - mu, es: deviation * shortfall - mu };
+};
+
+/** How many residuals, put on the next day's deviation, lose at least `threshold`. */
+export const countAtLeast = ({ mu, residuals, nextVariance }: FilterState, threshold: number): number => {
+  const bound = (threshold + mu) / Math.sqrt(nextVariance);
+  let count = 0;
+  for (let day = 0; day < residuals.length; day += 1) if (-(residuals[day] as number) >= bound) count += 1;
+  return count;
+};
