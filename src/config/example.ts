@@ -28,6 +28,21 @@ const keyAndValue = (key: string, value: string, indent: string): string =>
     ? `${indent}${key}:\n${value.replace(/^/gm, `${indent}  `)}`
     : `${indent}${key}: ${value}`;
 
+const widestLine = 110;
+
+const commentLines = (comment: string, indent: string): readonly string[] => {
+  const lines: string[] = [];
+  let line = `${indent}#`;
+  for (const word of comment.split(' ')) {
+    if (line.length + 1 + word.length > widestLine) {
+      lines.push(line);
+      line = `${indent}#`;
+    }
+    line += ` ${word}`;
+  }
+  return [...lines, line];
+};
+
 /** The example settings file, printed from the schema. */
 export const exampleSettings = (): string => {
   const lines = [...head];
@@ -43,9 +58,9 @@ export const exampleSettings = (): string => {
     }
     if (keys.length === 1) lines.push('');
     const indent = '  '.repeat(keys.length - 1);
-    const comment = `# ${setting.says} (${setting.expects})`;
+    const comment = `${setting.says} (${setting.expects})`;
     // what was said of a setting is not said again of its namesakes
-    if (!said.has(comment)) lines.push(`${indent}${comment}`);
+    if (!said.has(comment)) lines.push(...commentLines(comment, indent));
     said.add(comment);
     lines.push(keyAndValue(keys.at(-1) ?? '', valueText(setting), indent));
     open = keys.slice(0, -1);

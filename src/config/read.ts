@@ -42,10 +42,12 @@ const checkRules = (settings: Settings): readonly SettingProblem[] =>
     ),
   );
 
-const withAbsolutePath = (settings: Settings, folder: string): Settings => ({
-  ...settings,
-  feed: { ...settings.feed, path: resolve(folder, settings.feed.path) },
-});
+const withAbsolutePaths = (settings: Settings, folder: string): Settings => {
+  const { feed } = settings;
+  const holidaysPath = feed.holidays.path === null ? null : resolve(folder, feed.holidays.path);
+  const holidays = { ...feed.holidays, path: holidaysPath };
+  return { ...settings, feed: { ...feed, path: resolve(folder, feed.path), holidays } };
+};
 
 /** Settings from the text of a settings file, or everything that is wrong with it. Relative paths start at `folder`. */
 export const parseSettings = (text: string, folder: string): SettingsReading => {
@@ -59,7 +61,7 @@ export const parseSettings = (text: string, folder: string): SettingsReading => 
   }
   const problems = checkRules(parsed.data);
   if (problems.length > 0) return { ok: false, problems };
-  return { ok: true, settings: withAbsolutePath(parsed.data, folder) };
+  return { ok: true, settings: withAbsolutePaths(parsed.data, folder) };
 };
 
 /** Settings from a file, or everything that is wrong with it. */

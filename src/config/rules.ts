@@ -5,10 +5,13 @@ export type RuleBreach = { readonly path: string; readonly value: string; readon
 
 export type Rule = (settings: Settings) => readonly RuleBreach[];
 
+/** In a wide file the date is the only column with a name of its own; the others are tickers. */
 const columnNamesDiffer: Rule = ({ feed }) => {
+  if (feed.shape === 'wide') return [];
   const seen = new Map<string, string>();
   const breaches: RuleBreach[] = [];
   for (const [column, name] of Object.entries(feed.columns)) {
+    if (name === null) continue;
     const other = seen.get(name);
     if (other === undefined) seen.set(name, column);
     else {
@@ -37,4 +40,31 @@ const quoteUnitNeedsCurrency: Rule = ({ feed }) => {
   return [...forAll, ...forOne];
 };
 
-export const rules: readonly Rule[] = [columnNamesDiffer, quoteUnitNeedsCurrency];
+const wideHasNoOtherColumns: Rule = ({ feed }) => {
+  if (feed.shape !== 'wide') return [];
+  return (['adjustedClose', 'volume', 'currency'] as const).flatMap((column) => {
+    const name = feed.columns[column];
+    if (name === null) return [];
+    const advice = 'in the wide shape every column beside the date is a ticker; use the long shape for it';
+    return [{ path: `feed.columns.${column}`, value: name, message: advice }];
+  });
+};
+
+const decimalMarkIsNotDelimiter: Rule = ({ feed: { format } }) =>
+  format.decimalMark === 'comma' && format.delimiter === 'comma'
+    ? [
+        {
+          path: 'feed.format.decimalMark',
+          value: format.decimalMark,
+          message:
+            'the cells are separated by a comma too; files with a decimal comma have another delimiter',
+        },
+      ]
+    : [];
+
+export const rules: readonly Rule[] = [
+  columnNamesDiffer,
+  quoteUnitNeedsCurrency,
+  wideHasNoOtherColumns,
+  decimalMarkIsNotDelimiter,
+];

@@ -1,68 +1,128 @@
-import { access, constants } from 'node:fs/promises';
-import { isoFromDay } from '../terms/day.ts';
+import type { InstantMs } from '../terms/clock.ts';
+import type { FeedReport } from '../terms/feedReport.ts';
+import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
-import { withDatabase } from './internal/database.ts';
+import { breathe } from './internal/breathe.ts';
+import { checkTickers, type HolidayCalendars } from './internal/check/checkTickers.ts';
+import { checkDays } from './internal/check/days.ts';
+import { checkCurrency, extrasByTicker } from './internal/check/names.ts';
+import { compact } from './internal/compact.ts';
 import { fingerprintOf } from './internal/fingerprint.ts';
-import { readRows } from './internal/readRows.ts';
+import { quarantinedReports } from './internal/quarantine.ts';
+import { type ReadFiles, readPriceFiles } from './internal/read/readPriceFiles.ts';
 import { type SortedColumns, sortRows } from './internal/sortRows.ts';
+import { type FileState, listPriceFiles, signatureOf } from './priceFiles.ts';
 import { type FeedSettings, meaningOf } from './settings.ts';
-import { type OpenSnapshot, snapshotFromColumns } from './snapshot.ts';
+import { type SnapshotColumns, snapshotFromColumns } from './snapshot.ts';
+import { readHolidays } from './tables/holidays.ts';
 
-const repeatedDay = ({ tickers, starts, days }: SortedColumns): string | null => {
-  for (let place = 0; place < tickers.length; place += 1) {
-    for (let row = (starts[place] as number) + 1; row < (starts[place + 1] as number); row += 1) {
-      if (days[row] === days[row - 1]) return `${tickers[place]} on ${isoFromDay(days[row] as number)}`;
-    }
-  }
-  return null;
+/** A snapshot with what the reading found, and its columns so that it can be handed to another thread. */
+export type OpenSnapshot = PriceSnapshot & {
+  readonly columns: SnapshotColumns;
+  readonly report: FeedReport;
 };
 
-const isReadable = (path: string): Promise<boolean> =>
-  access(path, constants.R_OK).then(
-    () => true,
-    () => false,
+const noFile = (path: string) =>
+  refuse(
+    problem('fileUnreadable', `There is no price file at ${path}. Check feed.path and who may read it.`),
   );
 
-/** Reads, checks and opens the price file. */
-export const openFeed = async (settings: FeedSettings): Promise<Result<OpenSnapshot>> => {
-  const { path } = settings;
-  if (!(await isReadable(path))) {
-    return refuse(
-      problem(
-        'fileUnreadable',
-        `The price file ${path} cannot be opened. Check feed.path and who may read it.`,
-      ),
-    );
+const changedMeanwhile = (path: string) =>
+  refuse(problem('fileUnreadable', `${path} was written while it was read. Read it again once it is whole.`));
+
+/** Sorts what was read and leaves out, by name, what contradicts itself. */
+const sortAndSift = async (read: ReadFiles, settings: FeedSettings, nowMs: InstantMs | null) => {
+  const { collected } = read;
+  const { findings } = collected;
+  const extras = extrasByTicker(collected);
+  const sorted = await sortRows(collected.names, collected.blocks, (ticker) =>
+    findings.record('daysOutOfOrder', { ticker }),
+  );
+  for (const [place, ticker] of sorted.tickers.entries()) {
+    if (sorted.starts[place] === sorted.starts[place + 1]) findings.record('noPrice', { ticker });
+    checkDays(sorted, place, nowMs, findings);
+    const ownExtras = extras.get(ticker);
+    if (ownExtras !== undefined) checkCurrency(ownExtras, settings, findings);
+    if (place % 64 === 63) await breathe();
   }
-  const rows = await withDatabase((connection) => readRows(connection, settings)).catch((error: unknown) => {
-    const reason = error instanceof Error ? (error.message.split('\n')[0] ?? '') : 'unknown reason';
-    return refuse(
-      problem(
-        'fileUnreadable',
-        `${path} is not a readable CSV file: ${reason}. Correct the file and save it again.`,
-      ),
-    );
-  });
-  if (!rows.ok) return rows;
-  const sorted = sortRows(rows.value.names, rows.value.blocks);
-  if (sorted.days.length === 0) {
-    return refuse(
-      problem('fileEmpty', `${path} holds no price. Write one row per date and ticker below the first row.`),
-    );
-  }
-  const twice = repeatedDay(sorted);
-  if (twice !== null) {
-    return refuse(problem('valueUnreadable', `${path} has two prices for ${twice}. Keep one of the two.`));
-  }
-  const lastDay = sorted.days.reduce((latest, day) => Math.max(latest, day));
-  const snapshot = snapshotFromColumns({
-    ...sorted,
-    fingerprint: await fingerprintOf(sorted),
-    meanings: sorted.tickers.map((ticker) => meaningOf(settings, ticker)),
-    flags: sorted.tickers.map(() => []),
-    quarantined: new Map(),
-    lastDay,
-  });
-  return succeed(snapshot);
+  const heldBack = quarantinedReports(sorted, settings, findings);
+  return { extras, findings, heldBack, columns: compact(sorted, findings.quarantinedTickers()) };
 };
+
+const extentOf = (columns: SortedColumns): { firstDay: number; lastDay: number } => {
+  let firstDay = Number.POSITIVE_INFINITY;
+  let lastDay = Number.NEGATIVE_INFINITY;
+  for (let place = 0; place < columns.tickers.length; place += 1) {
+    firstDay = Math.min(firstDay, columns.days[columns.starts[place] as number] as number);
+    lastDay = Math.max(lastDay, columns.days[(columns.starts[place + 1] as number) - 1] as number);
+  }
+  return { firstDay, lastDay };
+};
+
+const assemble = async (
+  read: ReadFiles,
+  settings: FeedSettings,
+  holidays: HolidayCalendars,
+  nowMs: InstantMs | null,
+): Promise<Result<OpenSnapshot>> => {
+  const { extras, findings, heldBack, columns } = await sortAndSift(read, settings, nowMs);
+  if (columns.tickers.length === 0) {
+    const why = heldBack[0]?.quarantine;
+    return why == null
+      ? refuse(
+          problem(
+            'fileEmpty',
+            `${settings.path} holds no price. Write one row per date and ticker below the first row.`,
+          ),
+        )
+      : refuse(problem('valueUnreadable', `No ticker of ${settings.path} can be served. ${why}`));
+  }
+  const meanings = columns.tickers.map((ticker) =>
+    meaningOf(settings, ticker, extras.get(ticker)?.currency ?? null),
+  );
+  const served = await checkTickers({ columns, meanings, extras, holidays, findings });
+  const fingerprint = await fingerprintOf(columns);
+  const extent = extentOf(columns);
+  const snapshot = snapshotFromColumns({
+    ...columns,
+    fingerprint,
+    meanings,
+    flags: served.map(({ flags }) => flags),
+    quarantined: new Map(heldBack.map(({ ticker, quarantine }) => [ticker, quarantine ?? ''])),
+    lastDay: extent.lastDay,
+  });
+  const report: FeedReport = {
+    files: read.files,
+    fingerprint,
+    priceCount: columns.days.length,
+    ...extent,
+    findings: findings.list(),
+    tickers: [...served, ...heldBack].sort((first, second) => (first.ticker < second.ticker ? -1 : 1)),
+  };
+  return succeed({ ...snapshot, report });
+};
+
+/** Reads, checks and opens price files that were listed just before. A file that changes meanwhile is refused. */
+export const openFiles = async (
+  files: readonly FileState[],
+  settings: FeedSettings,
+  nowMs: InstantMs | null,
+): Promise<Result<OpenSnapshot>> => {
+  if (files.length === 0) return noFile(settings.path);
+  const holidays = await readHolidays(settings);
+  if (!holidays.ok) return holidays;
+  const read = await readPriceFiles(files, settings);
+  if (signatureOf(await listPriceFiles(settings.path)) !== signatureOf(files))
+    return changedMeanwhile(settings.path);
+  return read.ok ? assemble(read.value, settings, holidays.value, nowMs) : read;
+};
+
+/**
+ * Reads, checks and opens the price files. `nowMs` is the present instant, against which dates in the future are
+ * found; null leaves that check out.
+ */
+export const openFeed = async (
+  settings: FeedSettings,
+  nowMs: InstantMs | null = null,
+): Promise<Result<OpenSnapshot>> => openFiles(await listPriceFiles(settings.path), settings, nowMs);

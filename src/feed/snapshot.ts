@@ -29,11 +29,10 @@ const placeOf = (tickers: readonly string[], ticker: string): number => {
   return tickers[low] === ticker ? low : -1;
 };
 
-/** A snapshot that knows its columns, so that it can be handed to another thread. */
-export type OpenSnapshot = PriceSnapshot & { readonly columns: SnapshotColumns };
-
-/** The snapshot over columns, in whichever thread they have arrived. */
-export const snapshotFromColumns = (columns: SnapshotColumns): OpenSnapshot => {
+/** The snapshot over columns, in whichever thread they have arrived; it knows them, so that it can be handed on. */
+export const snapshotFromColumns = (
+  columns: SnapshotColumns,
+): PriceSnapshot & { readonly columns: SnapshotColumns } => {
   const { tickers, starts, days, closes, meanings, flags } = columns;
   const series = (ticker: string): PriceSeries | null => {
     const place = placeOf(tickers, ticker);

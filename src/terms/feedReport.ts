@@ -6,8 +6,12 @@ import type { Problem } from './problem.ts';
 /** What a finding does: the ticker is not served, the ticker is served with a warning, or it is only told. */
 export type FindingWeight = 'quarantined' | 'warned' | 'noted';
 
-/** Where a finding was seen. `row` counts from 1 with the row of names in it; null after the rows have been sorted. */
+/**
+ * Where a finding was seen. `row` counts the rows of the file from 1, that of the names included and blank lines not;
+ * null where the finding is about sorted rows.
+ */
 export type FindingExample = {
+  readonly file: string | null;
   readonly ticker: string | null;
   readonly day: Day | null;
   readonly row: number | null;

@@ -40,7 +40,18 @@ test('with the path of the feed alone every other setting has its default', () =
   expect(settings).toMatchObject({
     feed: {
       path: '/desk/prices.csv',
-      columns: { date: 'date', ticker: 'ticker', close: 'close' },
+      shape: 'long',
+      columns: {
+        date: 'date',
+        ticker: 'ticker',
+        close: 'close',
+        adjustedClose: null,
+        volume: null,
+        currency: null,
+      },
+      format: { delimiter: 'comma', decimalMark: 'point', dateFormat: 'YYYY-MM-DD' },
+      holidays: { path: null, columns: { date: 'date', calendar: null } },
+      checkEverySeconds: 5,
       prices: {
         priceAdjustment: 'unknown',
         currency: null,
@@ -87,13 +98,18 @@ test.each([
   ],
   ['defaults: { tail: { window: all } }', ['defaults', 'tail', 'window'], { kind: 'all' }],
   ['smallestMeanThatMatters: 0.2%', ['smallestMeanThatMatters'], 0.002],
+  [
+    'feed: { path: /a, shape: wide, columns: { date: ticker }, holidays: { path: h.csv } }',
+    ['feed', 'holidays', 'path'],
+    '/desk/h.csv',
+  ],
   ['deskTimeZone: Europe/London', ['deskTimeZone'], 'Europe/London'],
 ])('%s is read', (line, path, value) => {
-  expect(settingsOf(`${feedOnly}${line}\n`)).toHaveProperty(path, value);
+  expect(settingsOf(line.startsWith('feed') ? line : `${feedOnly}${line}\n`)).toHaveProperty(path, value);
 });
 
 test.each([
-  ['', 'feed', null, 'a block with path, columns'],
+  ['', 'feed', null, 'a block with path, shape, columns'],
   ['feed: {}', 'feed.path', null, 'must be the path of'],
   ['feed: { path: 7 }', 'feed.path', '7', 'must be the path of'],
   [`${feedOnly}deskTimeZone: Atlantis/Deep`, 'deskTimeZone', '“Atlantis/Deep”', 'IANA time zone'],
@@ -135,6 +151,24 @@ test.each([
     'feed.tickers.K.quoteUnit',
     'cents',
     'currency must be',
+  ],
+  [
+    'feed: { path: a, shape: wide, columns: { volume: v } }',
+    'feed.columns.volume',
+    'v',
+    'use the long shape',
+  ],
+  [
+    'feed: { path: a, format: { decimalMark: comma } }',
+    'feed.format.decimalMark',
+    'comma',
+    'another delimiter',
+  ],
+  [
+    'feed: { path: a, format: { dateFormat: DD/MM } }',
+    'feed.format.dateFormat',
+    '“DD/MM”',
+    'one of YYYY-MM-DD',
   ],
   ['- a list', '', '["a list"]', 'a block with feed'],
 ])('%s is refused where it is wrong', (text, path, value, right) => {

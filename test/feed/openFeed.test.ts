@@ -1,56 +1,49 @@
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { afterAll, expect, test } from 'vitest';
+import { expect, test } from 'vitest';
 import { openFeed } from '../../src/feed/openFeed.ts';
-import type { FeedSettings } from '../../src/feed/settings.ts';
 import { snapshotFromColumns } from '../../src/feed/snapshot.ts';
 import { dayFromIso, isoFromDay } from '../../src/terms/day.ts';
+import {
+  accepted,
+  codesOf,
+  demoPath,
+  head,
+  longCsv,
+  problemOf,
+  temporaryFolder,
+} from './settingsForTests.ts';
 
-const folder = mkdtempSync(join(tmpdir(), 'feed-'));
-afterAll(() => rmSync(folder, { recursive: true }));
+const folder = temporaryFolder();
 
-const settings = (path: string): FeedSettings => ({
-  path,
-  columns: { date: 'date', ticker: 'ticker', close: 'close' },
-  prices: { priceAdjustment: 'unknown', currency: 'USD', quoteUnit: null, closingTime: null, calendar: null },
-  tickers: { TARN: { currency: 'GBP', quoteUnit: 'pence' }, KELP: { currency: null } },
-});
+const tickers = { TARN: { currency: 'GBP', quoteUnit: 'pence' }, KELP: { currency: null } };
+const prices = { ...longCsv('').prices, currency: 'USD' };
 
-const open = (text: string) => {
-  const path = join(folder, 'prices.csv');
-  writeFileSync(path, text);
-  return openFeed(settings(path));
-};
+const open = (text: string) => openFeed(longCsv(folder.write('prices.csv', text), { tickers, prices }));
+const opened = async (text: string) => accepted(await open(text));
 
-const opened = async (text: string) => {
-  const reading = await open(text);
-  if (!reading.ok) throw new Error(reading.problem.message);
-  return reading.value;
-};
-
-const head = 'date,ticker,close\n';
-const demoPath = new URL('../../config/demo-prices.csv', import.meta.url).pathname;
-
-test('the demonstration prices open, twelve tickers to 2026-11-27', async () => {
-  const reading = await openFeed(settings(demoPath));
-  if (!reading.ok) throw new Error(reading.problem.message);
-  expect(reading.value.tickers).toHaveLength(12);
-  expect(isoFromDay(reading.value.lastDay)).toBe('2026-11-27');
+test('the demonstration prices open clean, twelve tickers to 2026-11-27', async () => {
+  const snapshot = accepted(await openFeed(longCsv(demoPath), Date.UTC(2026, 11, 1)));
+  expect(snapshot.tickers).toHaveLength(12);
+  expect(isoFromDay(snapshot.lastDay)).toBe('2026-11-27');
   // 785 weekdays from 2023-11-27 to 2026-11-27, both ends in
-  expect(reading.value.series('KELP')?.closes).toHaveLength(785);
-  expect(reading.value.series('PETREL')?.closes).toHaveLength(16);
-  expect(reading.value.fingerprint).toMatch(/^[0-9a-f]{64}$/);
+  expect(snapshot.series('KELP')?.closes).toHaveLength(785);
+  expect(snapshot.series('PETREL')?.closes).toHaveLength(16);
+  expect(snapshot.fingerprint).toMatch(/^[0-9a-f]{64}$/);
+  expect(snapshot.report.findings).toEqual([]);
+  expect(snapshot.report.tickers.every(({ state }) => state === 'clean')).toBe(true);
+  expect(snapshot.report).toMatchObject({ priceCount: 11 * 785 + 16, lastDay: snapshot.lastDay });
+  expect(snapshot.report.files).toEqual([
+    { path: demoPath, kind: 'csv', bytes: expect.any(Number), rowCount: 8651 },
+  ]);
 });
 
 test('rows in any order are served by ticker and day, with what is known of each ticker', async () => {
   const snapshot = await opened(
-    `${head}2026-01-06,TARN,5.5\n2026-01-06,KELP,2\n2026-01-05,TARN,5\n2026-01-05,KELP,1e0\n`,
+    `${head}2026-01-06,TARN,5.5\n2026-01-06,KELP,2\n2026-01-05,TARN,5\n2026-01-05,KELP,1.5e0\n`,
   );
   expect(snapshot.tickers).toEqual(['KELP', 'TARN']);
   const kelp = snapshot.series('KELP');
   expect([...(kelp?.days ?? [])].map(isoFromDay)).toEqual(['2026-01-05', '2026-01-06']);
-  expect([...(kelp?.closes ?? [])]).toEqual([1, 2]);
+  expect([...(kelp?.closes ?? [])]).toEqual([1.5, 2]);
   expect(kelp?.meaning.currency).toBe(null);
   expect(snapshot.series('TARN')?.meaning).toEqual({
     priceAdjustment: 'unknown',
@@ -62,6 +55,7 @@ test('rows in any order are served by ticker and day, with what is known of each
   expect(snapshot.series('kelp')).toBe(null);
   expect(snapshot.series('')).toBe(null);
   expect(snapshot.lastDay).toBe(dayFromIso('2026-01-06'));
+  expect(codesOf(snapshot)).toEqual(['daysOutOfOrder']);
 });
 
 test('the fingerprint is that of the values, not of the file', async () => {
@@ -72,36 +66,40 @@ test('the fingerprint is that of the values, not of the file', async () => {
   expect(other.fingerprint).not.toBe(one.fingerprint);
 });
 
-test('a snapshot made from columns that crossed to another thread serves the same', async () => {
-  const snapshot = await opened(`${head}2026-01-05,KELP,1\n2026-01-06,KELP,2\n`);
+test('a snapshot made from columns that crossed to another thread serves the same from shared memory', async () => {
+  const snapshot = await opened(`${head}2026-01-05,KELP,1\n2026-01-06,KELP,2\n2026-01-05,TARN,-1\n`);
   const again = snapshotFromColumns(structuredClone(snapshot.columns));
   expect(again.series('KELP')).toEqual(snapshot.series('KELP'));
+  expect(again.quarantined).toEqual(snapshot.quarantined);
   expect(again.columns.closes.buffer).toBeInstanceOf(SharedArrayBuffer);
+  expect(again.columns.days.buffer).toBeInstanceOf(SharedArrayBuffer);
 });
 
-test.each([
-  ['', 'columnMissing', 'no column “date”'],
-  ['date,ticker,price\n2026-01-05,KELP,1\n', 'columnMissing', 'no column “close”'],
-  ['date,ticker,close,close\n2026-01-05,KELP,1,1\n', 'columnMissing', '“close” twice'],
-  [head, 'fileEmpty', 'holds no price'],
-  [`${head}2026-01-05,KELP,1\n2026-02-30,KELP,2\n`, 'valueUnreadable', 'column “date”, row 3: “2026-02-30”'],
-  [`${head}05/01/2026,KELP,1\n`, 'valueUnreadable', 'row 2: “05/01/2026”'],
-  [`${head}2026-01-05,KELP,1\n2026-01-06,,2\n`, 'valueUnreadable', 'column “ticker”, row 3'],
-  [`${head}2026-01-05,KELP,n/a\n`, 'valueUnreadable', 'column “close”, row 2: “n/a”'],
-  [`${head}2026-01-05,KELP,1_000\n`, 'valueUnreadable', '“1_000”'],
-  [`${head}2026-01-05,KELP,0\n`, 'valueUnreadable', '“0” is not a price above zero'],
-  [`${head}2026-01-05,KELP,-3\n`, 'valueUnreadable', '“-3”'],
-  [`${head}2026-01-05,KELP,inf\n`, 'valueUnreadable', '“inf”'],
-  [`${head}2026-01-05,KELP\n`, 'fileUnreadable', 'Line: 2'],
-  [`${head}2026-01-05,KELP,1\n2026-01-05,KELP,2\n`, 'valueUnreadable', 'two prices for KELP on 2026-01-05'],
-])('%j is refused by name', async (text, code, words) => {
-  const reading = await open(text);
-  expect(reading.ok ? null : reading.problem.code).toBe(code);
-  expect(reading.ok ? '' : reading.problem.message).toContain(words);
-  expect(reading.ok ? '' : reading.problem.message).toContain(join(folder, 'prices.csv'));
+test('a ticker that contradicts itself is held back by name with the reason, the others are served', async () => {
+  const snapshot = await opened(`${head}2026-01-05,KELP,1\n2026-01-05,KELP,2\n2026-01-05,TARN,5\n`);
+  expect(snapshot.tickers).toEqual(['TARN']);
+  expect(snapshot.series('KELP')).toBe(null);
+  expect(snapshot.quarantined.get('KELP')).toContain(
+    'two different prices for one day: 2026-01-05, “1 and 2”',
+  );
+  expect(snapshot.report.tickers.map(({ ticker, state }) => `${ticker} ${state}`)).toEqual([
+    'KELP quarantined',
+    'TARN clean',
+  ]);
+});
+
+test('dates in the future are found against the present instant, allowing for the latest zone on earth', async () => {
+  const path = folder.write('future.csv', `${head}2026-01-05,KELP,1\n2026-01-06,TARN,1\n`);
+  // 2026-01-06 begins at 2026-01-05T10:00Z where the clock is furthest ahead (UTC+14)
+  const before = accepted(await openFeed(longCsv(path), Date.UTC(2026, 0, 5, 9, 59)));
+  const after = accepted(await openFeed(longCsv(path), Date.UTC(2026, 0, 5, 10, 0)));
+  expect([...before.quarantined.keys()]).toEqual(['TARN']);
+  expect(before.lastDay).toBe(dayFromIso('2026-01-05'));
+  expect([...after.quarantined.keys()]).toEqual([]);
 });
 
 test('a file that is not there is refused by name', async () => {
-  const reading = await openFeed(settings(join(folder, 'absent.csv')));
-  expect(reading.ok ? null : reading.problem).toMatchObject({ code: 'fileUnreadable' });
+  const problem = problemOf(await openFeed(longCsv(folder.path('absent.csv'))));
+  expect(problem.code).toBe('fileUnreadable');
+  expect(problem.message).toContain(folder.path('absent.csv'));
 });

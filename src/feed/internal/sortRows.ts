@@ -1,5 +1,7 @@
+import { breathe } from './breathe.ts';
 import type { RowBlock } from './rowBlocks.ts';
 
+/** Row ranges by ticker: ticker i owns rows `starts[i]` to `starts[i + 1]`. */
 export type SortedColumns = {
   readonly tickers: readonly string[];
   readonly starts: Int32Array;
@@ -7,64 +9,83 @@ export type SortedColumns = {
   readonly closes: Float64Array;
 };
 
-/** Places of the tickers in ascending order of their code units: `rank[number]` is the place of a ticker's number. */
-const rankOf = (names: readonly string[]): Int32Array => {
-  const order = names.map((_, number) => number);
-  order.sort((first, second) => ((names[first] as string) < (names[second] as string) ? -1 : 1));
-  const rank = new Int32Array(names.length);
+export const sharedInts = (length: number): Int32Array => new Int32Array(new SharedArrayBuffer(4 * length));
+export const sharedDoubles = (length: number): Float64Array =>
+  new Float64Array(new SharedArrayBuffer(8 * length));
+
+/** Numbers of the names in the ascending order of their UTF-16 code units. */
+const orderOf = (names: readonly string[]): number[] =>
+  names
+    .map((_, number) => number)
+    .sort((first, second) => ((names[first] as string) < (names[second] as string) ? -1 : 1));
+
+const placesOf = (order: readonly number[]): Int32Array => {
+  const places = new Int32Array(order.length);
   order.forEach((number, place) => {
-    rank[number] = place;
+    places[number] = place;
   });
-  return rank;
+  return places;
 };
 
-const ascends = (days: Int32Array, start: number, end: number): boolean => {
-  for (let row = start + 1; row < end; row += 1) {
-    if ((days[row] as number) < (days[row - 1] as number)) return false;
-  }
-  return true;
-};
-
-/** Sorts one ticker's rows by day; rows of one day keep the order of the file. */
-const sortRange = (days: Int32Array, closes: Float64Array, start: number, end: number): void => {
-  const order = Array.from({ length: end - start }, (_, place) => start + place);
-  order.sort((first, second) => (days[first] as number) - (days[second] as number) || first - second);
-  const sortedDays = Int32Array.from(order, (row) => days[row] as number);
-  const sortedCloses = Float64Array.from(order, (row) => closes[row] as number);
-  days.set(sortedDays, start);
-  closes.set(sortedCloses, start);
-};
-
-/** Columns in shared memory, by ticker and then by day. `names` are the tickers by their number in the blocks. */
-export const sortRows = (names: readonly string[], blocks: readonly RowBlock[]): SortedColumns => {
-  const rank = rankOf(names);
-  const starts = new Int32Array(new SharedArrayBuffer(4 * (names.length + 1)));
+const rangeStarts = (places: Int32Array, blocks: readonly RowBlock[]): Int32Array => {
+  const starts = sharedInts(places.length + 1);
   for (const { tickerNumbers, count } of blocks) {
     for (let at = 0; at < count; at += 1) {
-      const place = rank[tickerNumbers[at] as number] as number;
-      starts[place + 1] = (starts[place + 1] as number) + 1;
+      const next = (places[tickerNumbers[at] as number] as number) + 1;
+      starts[next] = (starts[next] as number) + 1;
     }
   }
-  for (let place = 0; place < names.length; place += 1) {
-    starts[place + 1] = (starts[place + 1] as number) + (starts[place] as number);
+  for (let place = 1; place < starts.length; place += 1) {
+    starts[place] = (starts[place] as number) + (starts[place - 1] as number);
   }
+  return starts;
+};
+
+/** Sorts one ticker's rows by day; rows of one day keep the order of the files. */
+const sortRange = (days: Int32Array, closes: Float64Array): void => {
+  const order = Array.from(days, (_, row) => row);
+  order.sort((first, second) => (days[first] as number) - (days[second] as number) || first - second);
+  const sortedDays = Int32Array.from(order, (row) => days[row] as number);
+  closes.set(Float64Array.from(order, (row) => closes[row] as number));
+  days.set(sortedDays);
+};
+
+/**
+ * Columns in shared memory, by ticker and then by day. `names` are the tickers by their number in the blocks; the
+ * blocks are let go one by one, so that rows are never held twice. `onUnordered` is told of tickers whose days did not ascend.
+ */
+export const sortRows = async (
+  names: readonly string[],
+  blocks: RowBlock[],
+  onUnordered: (ticker: string) => void,
+): Promise<SortedColumns> => {
+  const order = orderOf(names);
+  const places = placesOf(order);
+  const starts = rangeStarts(places, blocks);
   const rowCount = starts[names.length] as number;
-  const days = new Int32Array(new SharedArrayBuffer(4 * rowCount));
-  const closes = new Float64Array(new SharedArrayBuffer(8 * rowCount));
-  const next = starts.slice();
-  for (const block of blocks) {
+  const days = sharedInts(rowCount);
+  const closes = sharedDoubles(rowCount);
+  const next = Int32Array.from(starts);
+  const unordered = new Set<number>();
+  for (let block = blocks.shift(); block !== undefined; block = blocks.shift()) {
     for (let at = 0; at < block.count; at += 1) {
-      const place = rank[block.tickerNumbers[at] as number] as number;
+      const place = places[block.tickerNumbers[at] as number] as number;
       const row = next[place] as number;
-      days[row] = block.days[at] as number;
+      const day = block.days[at] as number;
+      days[row] = day;
       closes[row] = block.closes[at] as number;
       next[place] = row + 1;
+      if (row > (starts[place] as number) && day < (days[row - 1] as number)) unordered.add(place);
     }
+    await breathe();
   }
-  for (let place = 0; place < names.length; place += 1) {
-    const start = starts[place] as number;
-    const end = starts[place + 1] as number;
-    if (!ascends(days, start, end)) sortRange(days, closes, start, end);
+  const tickers = order.map((number) => names[number] as string);
+  for (const place of unordered) {
+    const from = starts[place] as number;
+    const to = starts[place + 1] as number;
+    sortRange(days.subarray(from, to), closes.subarray(from, to));
+    onUnordered(tickers[place] as string);
+    await breathe();
   }
-  return { tickers: [...names].sort((first, second) => (first < second ? -1 : 1)), starts, days, closes };
+  return { tickers, starts, days, closes };
 };

@@ -1,0 +1,55 @@
+import { type Findings, makeFindings } from '../findings.ts';
+import { makeRowBlocks, type RowBlock } from '../rowBlocks.ts';
+
+/** What the optional columns say of one ticker, gathered over all its rows. */
+export type TickerExtras = {
+  readonly ticker: string;
+  currency: string | null;
+  daysWithoutVolume: number;
+  lastDay: number;
+  lastClose: number;
+};
+
+/** Rows gathered from one price file after the other. */
+export type Collected = {
+  readonly names: string[];
+  readonly blocks: RowBlock[];
+  readonly add: (tickerNumber: number, day: number, price: number) => void;
+  /** The number of a ticker, a new one at its first sight. */
+  readonly numberOf: (ticker: string) => number;
+  /** What the optional columns say of a ticker so far; null for a number that no ticker has. */
+  readonly extrasOf: (tickerNumber: number) => TickerExtras | null;
+  readonly findings: Findings;
+};
+
+export const makeCollected = (): Collected => {
+  const names: string[] = [];
+  const numbers = new Map<string, number>();
+  const numberOf = (ticker: string): number => {
+    const known = numbers.get(ticker);
+    if (known !== undefined) return known;
+    numbers.set(ticker, names.length);
+    names.push(ticker);
+    return names.length - 1;
+  };
+  const extras: TickerExtras[] = [];
+  const extrasOf = (number: number): TickerExtras | null => {
+    const ticker = names[number];
+    if (ticker === undefined) return null;
+    extras[number] ??= {
+      ticker,
+      currency: null,
+      daysWithoutVolume: 0,
+      lastDay: Number.NEGATIVE_INFINITY,
+      lastClose: 0,
+    };
+    return extras[number];
+  };
+  return { names, numberOf, ...makeRowBlocks(), extrasOf, findings: makeFindings() };
+};
+
+const mostTickerLength = 40;
+
+/** A quotation mark that was left open swallows whole rows into a name; such a name is refused, not served. */
+export const isTickerName = (name: string): boolean =>
+  name.length <= mostTickerLength && !/[\p{Cc}\p{Zl}\p{Zp}\uFFFD]/u.test(name);

@@ -1,0 +1,96 @@
+import { createReadStream } from 'node:fs';
+import { type FileHandle, open } from 'node:fs/promises';
+import { createGunzip } from 'node:zlib';
+import type { FileKind } from './fileKind.ts';
+
+/**
+ * Whether a file reaches its own end. The reader accepts a compressed file that was cut off and serves the rows before
+ * the cut, so this is found out here. `unfinishedLine`: text that does not end with a line end, which is either a
+ * habit of the program that wrote it or a cut through the last row.
+ */
+export type Wholeness = 'whole' | 'cutOff' | 'unfinishedLine';
+
+const lineEnds = [0x0a, 0x0d];
+
+const afterLastByte = (last: number | undefined): Wholeness =>
+  last === undefined || lineEnds.includes(last) ? 'whole' : 'unfinishedLine';
+
+const wholenessOfText = async (file: FileHandle, size: number): Promise<Wholeness> => {
+  if (size === 0) return 'whole';
+  const { buffer } = await file.read(new Uint8Array(1), 0, 1, size - 1);
+  return afterLastByte(buffer[0]);
+};
+
+const wholenessOfGzip = async (path: string): Promise<Wholeness> => {
+  let last: number | undefined;
+  try {
+    // the check sum at the end of each member is verified on the way
+    for await (const piece of createReadStream(path).pipe(createGunzip({ chunkSize: 262_144 }))) {
+      const bytes: Uint8Array = piece;
+      last = bytes.at(-1) ?? last;
+    }
+  } catch {
+    return 'cutOff';
+  }
+  return afterLastByte(last);
+};
+
+type Bytes = (position: number, count: number) => Promise<DataView | null>;
+
+const zstandardMagic = 0xfd2fb528;
+
+/** Bytes of a Zstandard frame header after its magic number, from its first byte (RFC 8878, section 3.1.1.1). */
+const frameHeaderBytes = (descriptor: number): number => {
+  const sizeFlag = descriptor >>> 6;
+  const singleSegment = (descriptor >>> 5) & 1;
+  const dictionaryBytes = [0, 1, 2, 4][descriptor & 3] ?? 0;
+  const contentBytes = sizeFlag === 0 ? singleSegment : 2 ** sizeFlag;
+  return 1 + (1 - singleSegment) + dictionaryBytes + contentBytes;
+};
+
+/** Where the frame that starts at `start` ends, or null where the file ends before it (RFC 8878, section 3.1). */
+const endOfFrame = async (bytes: Bytes, start: number): Promise<number | null> => {
+  const head = await bytes(start, 8);
+  if (head === null) return null;
+  const magic = head.getUint32(0, true);
+  if (magic >>> 4 === 0x0184d2a5) return start + 8 + head.getUint32(4, true);
+  if (magic !== zstandardMagic) return null;
+  const descriptor = head.getUint8(4);
+  let position = start + 4 + frameHeaderBytes(descriptor);
+  for (;;) {
+    const block = await bytes(position, 3);
+    if (block === null) return null;
+    const header = block.getUint8(0) | (block.getUint8(1) << 8) | (block.getUint8(2) << 16);
+    const runLength = ((header >>> 1) & 3) === 1;
+    position += 3 + (runLength ? 1 : header >>> 3);
+    if ((header & 1) === 1) return position + ((descriptor >>> 2) & 1) * 4;
+  }
+};
+
+const wholenessOfZstandard = async (file: FileHandle, size: number): Promise<Wholeness> => {
+  const bytes: Bytes = async (position, count) => {
+    if (position + count > size) return null;
+    const { buffer } = await file.read(new Uint8Array(count), 0, count, position);
+    return new DataView(buffer.buffer);
+  };
+  let position = 0;
+  while (position < size) {
+    const end = await endOfFrame(bytes, position);
+    if (end === null || end > size) return 'cutOff';
+    position = end;
+  }
+  return 'whole';
+};
+
+/** Parquet has its directory at its end, so that the reader itself refuses one that was cut off. */
+export const wholenessOf = async (path: string, kind: FileKind): Promise<Wholeness> => {
+  if (kind === 'parquet') return 'whole';
+  if (kind === 'gz') return wholenessOfGzip(path);
+  const file = await open(path);
+  try {
+    const { size } = await file.stat();
+    return kind === 'csv' ? await wholenessOfText(file, size) : await wholenessOfZstandard(file, size);
+  } finally {
+    await file.close();
+  }
+};
