@@ -12,7 +12,6 @@ import { exitCodes } from './exit.ts';
 import { startHeartbeat } from './heartbeat.ts';
 import { operatorLog } from './log.ts';
 import { settingsFor } from './settings.ts';
-import { runSlack } from './slack.ts';
 import { thisTerminal } from './terminal.ts';
 
 const usage = 'npm start -- [--config FILE] [--feed FILE] [--workspace auto|slack|terminal]';
@@ -29,6 +28,8 @@ const serveSlack = async (
   serving: Serving,
 ): Promise<number> => {
   const log = operatorLog();
+  // The chat library is slow to load; nobody in the terminal should wait for it.
+  const { runSlack } = await import('./slack.ts');
   const stopBeating = startHeartbeat(() => 'running', log.warn);
   const problemFound = await runSlack(workspace, serving.converse, serving.tickers, log, randomUUID);
   stopBeating();

@@ -9,6 +9,7 @@ import {
   percent,
   percentBounds,
   percentDecimals,
+  typedBasisPoints,
 } from '../../wording/percent.ts';
 import { counted, probabilityValue } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
