@@ -1,0 +1,75 @@
+import type { Clock } from '../../terms/clock.ts';
+
+/** Where a question was asked. */
+export type AskedWhere = 'channel' | 'direct' | 'command' | 'terminal';
+
+export type Asking = {
+  /** What was typed, as the platform wrote it out, without the mention of the bot itself. */
+  readonly text: string;
+  readonly place: AskedWhere;
+  /** Says how far a slow answer has come, in words that need no escaping. */
+  readonly progress?: (words: string) => void;
+};
+
+/** A block of the platform's layout, rendered and checked elsewhere. */
+export type Block = { readonly type: string };
+
+export type SpokenReply = {
+  /** All that screen readers and notifications get; escaped. */
+  readonly text: string;
+  /** Empty for a reply of text alone. */
+  readonly blocks: readonly Block[];
+  readonly kind: 'answer' | 'refusal' | 'help';
+  /** Only for the person who asked. */
+  readonly private: boolean;
+};
+
+/** A button, or a line of a menu, that someone chose. */
+export type Press = {
+  readonly actionId: string;
+  readonly value: string | null;
+  readonly place: AskedWhere;
+};
+
+export type Converse = (asking: Asking) => Promise<readonly SpokenReply[]>;
+
+/** What is said in this workspace, and by whom it is thought up. */
+export type Conversation = {
+  readonly converse: Converse;
+  readonly press: (press: Press) => Promise<readonly SpokenReply[]>;
+  /** Three questions that work here, for a mention without a word. */
+  readonly examples: () => readonly SpokenReply[];
+};
+
+/** `error` is for the operator: something that people did not get although they should have. */
+export type Logger = {
+  readonly info: (message: string) => void;
+  readonly warn: (message: string) => void;
+  readonly error: (message: string) => void;
+};
+
+/** Runs something later; the result calls it off. */
+export type Timers = { readonly after: (delayMs: number, run: () => void) => () => void };
+export type Time = Clock & Timers;
+
+/** Remembers what was dealt with: true exactly once for each key. */
+export type SeenEvents = { readonly firstSeen: (key: string) => Promise<boolean> };
+
+/** What the platform sent, before anyone has looked at it. */
+export type Received = { readonly body: Readonly<Record<string, unknown>>; readonly retryNumber: number };
+
+/**
+ * Keeps what arrives until it is dealt with. The platform is told that it arrived only after `keep` is done, and it sends
+ * again what `keep` fails on.
+ */
+export type Inbox = { readonly keep: (received: Received) => Promise<void> };
+
+export type SlackPorts = {
+  readonly conversation: Conversation;
+  readonly log: Logger;
+  readonly time: Time;
+  /** A new opaque identifier, never the same twice. */
+  readonly newId: () => string;
+  readonly seen: SeenEvents;
+  readonly inbox: Inbox;
+};

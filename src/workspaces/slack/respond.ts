@@ -1,0 +1,60 @@
+import { looksRefusedNote, plainly, textAlone } from './content.ts';
+import { inWords } from './log.ts';
+import type { Logger, SpokenReply, Time } from './ports.ts';
+import { callTimeoutMs } from './settings.ts';
+import { wait } from './wait.ts';
+import type { Outcome } from './wire.ts';
+
+/** A response address takes this many replies, for half an hour. */
+const mostReplies = 5;
+const retryMs = 1_000;
+
+const send = async (
+  url: string,
+  { text, blocks }: Pick<SpokenReply, 'text' | 'blocks'>,
+): Promise<Outcome> => {
+  const looks = blocks.length === 0 ? {} : { blocks };
+  const body = { response_type: 'ephemeral', replace_original: false, text, ...looks, ...plainly };
+  try {
+    const response = await fetch(url, {
+      method: 'POST',
+      headers: { 'content-type': 'application/json' },
+      body: JSON.stringify(body),
+      redirect: 'error',
+      signal: AbortSignal.timeout(callTimeoutMs),
+    });
+    const words = await response.text();
+    if (response.ok) return { kind: 'done', body: {}, warnings: [] };
+    if (response.status >= 500 || response.status === 429)
+      return { kind: 'unsure', reason: `status ${response.status}` };
+    return { kind: 'refused', code: words.slice(0, 80), details: [] };
+  } catch (error) {
+    return { kind: 'unsure', reason: inWords(error) };
+  }
+};
+
+/** Replies privately through a response address, to a command or to a press on a private message. */
+export const makeRespond = (time: Time, log: Logger) => {
+  /** An unclear answer is tried once more: a private reply that comes twice does less harm than one that never comes. */
+  const respond = async (url: string, reply: SpokenReply): Promise<void> => {
+    let outcome = await send(url, reply);
+    if (outcome.kind === 'unsure') {
+      await wait(time, retryMs);
+      outcome = await send(url, reply);
+    }
+    if (outcome.kind === 'refused' && outcome.code.includes('invalid_blocks') && reply.blocks.length > 0) {
+      log.error(looksRefusedNote(outcome));
+      outcome = await send(url, textAlone(reply));
+    }
+    if (outcome.kind === 'refused') log.error(`A private reply was not delivered: ${outcome.code}.`);
+    if (outcome.kind === 'unsure') log.error(`A private reply may be lost: ${outcome.reason}.`);
+  };
+
+  return async (url: string, replies: readonly SpokenReply[]): Promise<void> => {
+    for (const reply of replies.slice(0, mostReplies)) await respond(url, reply);
+    if (replies.length > mostReplies)
+      log.error(`${replies.length - mostReplies} private replies had no place.`);
+  };
+};
+
+export type Respond = ReturnType<typeof makeRespond>;

@@ -1,0 +1,14 @@
+/** How what people say reaches the bot: over sockets that it opens itself, or as requests to its public address. */
+export type Receiving =
+  | { readonly mode: 'socket'; readonly appToken: string; readonly sockets: number }
+  | { readonly mode: 'http'; readonly signingSecret: string; readonly host: string; readonly port: number };
+
+export type SlackSettings = {
+  readonly botToken: string;
+  readonly receiving: Receiving;
+  /** The platform's address where it is not the usual one. */
+  readonly apiUrl: string | null;
+};
+
+/** How long one call may take. An unsure post is looked for only once this and as much again has passed. */
+export const callTimeoutMs = 10_000;

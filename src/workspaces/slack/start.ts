@@ -1,0 +1,145 @@
+import { App, webApi } from '@slack/bolt';
+import { z } from 'zod';
+import { problem } from '../../terms/problem.ts';
+import { type Result, refuse, succeed } from '../../terms/result.ts';
+import { askedInMemory } from './asked.ts';
+import type { Delivering } from './deliver.ts';
+import { listen } from './listen.ts';
+import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
+import type { Self } from './lookup.ts';
+import { editPace, makePace, messagePace } from './pace.ts';
+import type { SlackPorts } from './ports.ts';
+import { makeVoice, type Voice } from './post.ts';
+import { type Reception, receptionOf } from './receive.ts';
+import { makeRespond } from './respond.ts';
+import { type Feature, featuresOf } from './scopes.ts';
+import { callTimeoutMs, type SlackSettings } from './settings.ts';
+import { atMost } from './wait.ts';
+import { makeWire, type Outcome, type Wire } from './wire.ts';
+import { makeWork } from './work.ts';
+
+const stopLimitMs = 30_000;
+
+export type SlackWorkspace = {
+  readonly features: ReadonlySet<Feature>;
+  readonly voice: Voice;
+  /** The port that requests come in at; null over sockets. */
+  readonly port: number | null;
+  /** Resolves once nothing is under way. */
+  readonly idle: () => Promise<void>;
+  /** Takes nothing new, finishes what is under way, and leaves. */
+  readonly stop: () => Promise<void>;
+};
+
+type Identity = Self & { readonly scopes: readonly string[] | null };
+
+const identityShape = z.object({
+  user_id: z.string(),
+  bot_id: z.string(),
+  response_metadata: z.object({ scopes: z.array(z.string()).optional() }).optional(),
+});
+
+const unanswered = (outcome: Exclude<Outcome, { kind: 'done' }>): Result<never> =>
+  outcome.kind === 'refused'
+    ? refuse(
+        problem(
+          'settingWrong',
+          `The platform refuses the bot token (${outcome.code}). Copy the token again from the app's settings.`,
+        ),
+      )
+    : refuse(
+        problem(
+          'platformUnreachable',
+          `The platform did not answer the first call (${outcome.kind}). Check the network and the platform's address, then start again.`,
+        ),
+      );
+
+const identify = async (wire: Wire): Promise<Result<Identity>> => {
+  const outcome = await wire.call('auth.test', {});
+  if (outcome.kind !== 'done') return unanswered(outcome);
+  const read = identityShape.safeParse(outcome.body);
+  if (!read.success)
+    return refuse(
+      problem('settingWrong', 'The token is not one of a bot. Use the token that begins with xoxb-.'),
+    );
+  const { user_id: userId, bot_id: botId, response_metadata: more } = read.data;
+  return succeed({ userId, botId, scopes: more?.scopes ?? null });
+};
+
+const open = async (reception: Reception): Promise<Result<null>> => {
+  try {
+    await reception.start();
+    return succeed(null);
+  } catch (error) {
+    await reception.stop().catch(() => {});
+    return refuse(
+      problem(
+        'platformUnreachable',
+        `Nothing can be received from the platform (${inWords(error)}). Check the app token, or the address to listen at, then start again.`,
+      ),
+    );
+  }
+};
+
+/** Joins the workspace and answers there until it is stopped. */
+export const startSlack = async (
+  settings: SlackSettings,
+  ports: SlackPorts,
+): Promise<Result<SlackWorkspace>> => {
+  const { botToken, receiving } = settings;
+  const { conversation, time, newId, seen, inbox } = ports;
+  const secret = receiving.mode === 'socket' ? receiving.appToken : receiving.signingSecret;
+  const log = maskedLog(ports.log, [botToken, secret]);
+  const clientOptions = {
+    retryConfig: { retries: 0 },
+    rejectRateLimitedCalls: true,
+    timeout: callTimeoutMs,
+    allowAbsoluteUrls: false,
+    ...(settings.apiUrl === null ? {} : { slackApiUrl: settings.apiUrl }),
+  };
+  const wire = makeWire(new webApi.WebClient(botToken, { ...clientOptions, logger: silentLog }));
+  const identified = await identify(wire);
+  if (!identified.ok) return identified;
+
+  const { scopes, ...self } = identified.value;
+  const features = featuresOf(scopes, log);
+  const pace = makePace(time, messagePace);
+  const canLookUp = features.has('lookUp');
+  const delivering: Delivering = { wire, pace, time, log, newId, self, canLookUp };
+  const voice = makeVoice(delivering, makePace(time, editPace));
+  const work = makeWork();
+  const reception = receptionOf(receiving, { inbox, work, time, log, clientOptions });
+  const app = new App({
+    receiver: reception,
+    token: botToken,
+    botId: self.botId,
+    botUserId: self.userId,
+    tokenVerificationEnabled: false,
+    convoStore: false,
+    logger: libraryLog(log),
+    // The library writes into what it is given.
+    clientOptions: { ...clientOptions },
+  });
+  const asked = askedInMemory(time);
+  const respond = makeRespond(time, log);
+  listen(app, features, { voice, time, log, conversation, seen, asked, respond, self });
+  const opened = await open(reception);
+  if (!opened.ok) return opened;
+
+  const leave = async (): Promise<void> => {
+    work.close();
+    await reception.stop();
+    await atMost(time, stopLimitMs, work.idle());
+  };
+  let leaving: Promise<void> | null = null;
+  return succeed({
+    features,
+    voice,
+    port: reception.port(),
+    idle: work.idle,
+    stop: () => {
+      leaving ??= leave();
+      return leaving;
+    },
+  });
+};
