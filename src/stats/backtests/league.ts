@@ -3,9 +3,9 @@ import { holmAdjusted } from '../comparisons/holm.ts';
 import { arithmeticMean } from '../moments/mean.ts';
 import { dieboldMariano } from './dieboldMariano.ts';
 import { jointLoss, quantileLoss } from './losses.ts';
-import type { JudgedDays } from './shortfall.ts';
+import { canJudgeShortfall, type JudgedDays } from './shortfall.ts';
 
-/** One model's place among the others. `meanJointLoss` is null where an ES is 0 or less; both losses: lower is better. */
+/** One model's place among the others. `meanJointLoss` is null where an ES is 0 or less, or infinite; both losses: lower is better. */
 export type Standing = {
   readonly meanQuantileLoss: number;
   readonly meanJointLoss: number | null;
@@ -16,7 +16,7 @@ export type Standing = {
 const leastExpected = 10;
 
 const jointLosses = (days: JudgedDays, tail: number): Float64Array | null =>
-  days.expectedShortfalls.every((expectedShortfall) => expectedShortfall > 0)
+  canJudgeShortfall(days.expectedShortfalls)
     ? days.losses.map((loss, day) =>
         jointLoss(loss, days.valuesAtRisk[day] as number, days.expectedShortfalls[day] as number, tail),
       )

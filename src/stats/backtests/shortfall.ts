@@ -2,31 +2,37 @@ import { expectedBeyond, type Level, tailFraction } from '../../terms/level.ts';
 import type { Random, RandomStreams } from '../../terms/random.ts';
 import { nextOpenDouble } from '../random/draws.ts';
 
-/** One figure a day: losses and forecasts on the same days, all as decimal fractions. */
+/**
+ * One figure a day: losses and forecasts on the same days, all as decimal fractions. ES is Infinity on a day whose forecast
+ * tail has no mean.
+ */
 export type JudgedDays = {
   readonly losses: Float64Array;
   readonly valuesAtRisk: Float64Array;
   readonly expectedShortfalls: Float64Array;
 };
 
+/** Only a positive and finite ES can be compared with losses in shares of it. */
+export const canJudgeShortfall = (expectedShortfalls: Float64Array): boolean =>
+  expectedShortfalls.every((expectedShortfall) => expectedShortfall > 0 && expectedShortfall < Infinity);
+
 /**
  * Were the losses beyond VaR as frequent and as large as the ES said?
  *
  * Convention: Z2 = 1 − Σ l·1{l > VaR}/(T·(1 − a)·ES); 0 is expected of a right model, negative is worse than promised.
- * Domain: at least one day, every ES above 0.
+ * Domain: at least one day.
  * Units: decimal fractions in, a number without unit out.
- * Edges: without an exceedance it is 1. Null if an ES is 0 or less: the share of it that was lost has no meaning.
+ * Edges: without an exceedance it is 1. Null if an ES is 0 or less, or infinite: the share of it that was lost has no meaning.
  * Source: Acerbi & Szekely 2014, Risk, December, test 2.
  * Example: on 100 days at 99% one loss of 0.05 beyond a VaR of 0.03 with ES 0.04 gives −0.25.
  */
 export const shortfallZ2 = (days: JudgedDays, tailLevel: Level): number | null => {
   const { losses, valuesAtRisk, expectedShortfalls } = days;
+  if (!canJudgeShortfall(expectedShortfalls)) return null;
   let sum = 0;
   for (let day = 0; day < losses.length; day += 1) {
-    const expectedShortfall = expectedShortfalls[day] as number;
-    if (!(expectedShortfall > 0)) return null;
     const loss = losses[day] as number;
-    if (loss > (valuesAtRisk[day] as number)) sum += loss / expectedShortfall;
+    if (loss > (valuesAtRisk[day] as number)) sum += loss / (expectedShortfalls[day] as number);
   }
   return 1 - sum / expectedBeyond(losses.length, tailLevel);
 };
@@ -39,7 +45,7 @@ export type DrawBeyond = (day: number, random: Random) => number;
  *
  * Convention: (1 + #{Z2* ≤ Z2})/(N + 1) over N replicates. In each, every day is a hit with chance 1 − a, independently,
  * so that the hits are Bin(T, 1 − a); a hit's loss is drawn from that day's own forecast beyond its VaR.
- * Domain: every ES above 0; N ≥ 1 replicates, 9,999 unless said.
+ * Domain: every ES positive and finite; N ≥ 1 replicates, 9,999 unless said.
  * Units: decimal fractions in, a probability out.
  * Edges: the smallest possible value is 1/(N + 1).
  * Source: Acerbi & Szekely 2014, Risk, December, on simulating the test; the (1 + count)/(N + 1) form is Davison &
