@@ -10,6 +10,7 @@ import { checkCurrency, extrasByTicker } from './internal/check/names.ts';
 import { compact } from './internal/compact.ts';
 import { fingerprintOf } from './internal/fingerprint.ts';
 import { quarantinedReports } from './internal/quarantine.ts';
+import { type Database, passingDatabase } from './internal/read/database.ts';
 import { type ReadFiles, readPriceFiles } from './internal/read/readPriceFiles.ts';
 import { type SortedColumns, sortRows } from './internal/sortRows.ts';
 import { type FileState, listPriceFiles, signatureOf } from './priceFiles.ts';
@@ -108,11 +109,12 @@ export const openFiles = async (
   files: readonly FileState[],
   settings: FeedSettings,
   nowMs: InstantMs | null,
+  database: Database = passingDatabase,
 ): Promise<Result<OpenSnapshot>> => {
   if (files.length === 0) return noFile(settings.path);
   const holidays = await readHolidays(settings);
   if (!holidays.ok) return holidays;
-  const read = await readPriceFiles(files, settings);
+  const read = await readPriceFiles(files, settings, database);
   if (signatureOf(await listPriceFiles(settings.path)) !== signatureOf(files))
     return changedMeanwhile(settings.path);
   return read.ok ? assemble(read.value, settings, holidays.value, nowMs) : read;

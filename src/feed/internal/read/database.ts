@@ -9,21 +9,38 @@ const options = {
   autoload_known_extensions: 'false',
 };
 
-/** Runs `work` on a database of its own, which is gone afterwards with all its memory. */
-export const withDatabase = async <Value>(
+/** Runs work on a connection of its own. */
+export type Database = <Value>(work: (connection: DuckDBConnection) => Promise<Value>) => Promise<Value>;
+
+const runOn = async <Value>(
+  instance: DuckDBInstance,
   work: (connection: DuckDBConnection) => Promise<Value>,
 ): Promise<Value> => {
-  const database = await DuckDBInstance.create(':memory:', options);
+  const connection = await instance.connect();
   try {
-    const connection = await database.connect();
-    try {
-      // the default of 1 MB makes the reading threads wait for every few rows that are taken
-      await connection.run("SET streaming_buffer_size = '32MB'");
-      return await work(connection);
-    } finally {
-      connection.closeSync();
-    }
+    // the default of 1 MB makes the reading threads wait for every few rows that are taken
+    await connection.run("SET streaming_buffer_size = '32MB'");
+    return await work(connection);
   } finally {
-    database.closeSync();
+    connection.closeSync();
   }
+};
+
+/** A database that is made for the work and gone after it with all its memory. */
+export const passingDatabase: Database = async (work) => {
+  const instance = await DuckDBInstance.create(':memory:', options);
+  try {
+    return await runOn(instance, work);
+  } finally {
+    instance.closeSync();
+  }
+};
+
+/** A database that stays until it is closed, for whoever reads many small files in a row. */
+export const openDatabase = async (): Promise<{
+  readonly database: Database;
+  readonly close: () => void;
+}> => {
+  const instance = await DuckDBInstance.create(':memory:', options);
+  return { database: (work) => runOn(instance, work), close: () => instance.closeSync() };
 };

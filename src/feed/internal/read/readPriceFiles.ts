@@ -5,7 +5,7 @@ import { type Result, refuse, succeed } from '../../../terms/result.ts';
 import type { FileState } from '../../priceFiles.ts';
 import type { FeedSettings } from '../../settings.ts';
 import { type Collected, makeCollected } from './collected.ts';
-import { withDatabase } from './database.ts';
+import type { Database } from './database.ts';
 import { contradictsItsName, type FileKind, fileKindOf } from './fileKind.ts';
 import { type FileReading, readLongRows } from './longRows.ts';
 import { readerProblem } from './readerProblem.ts';
@@ -114,8 +114,9 @@ const wrongFormat = (settings: FeedSettings, { findings }: Collected, rowCount: 
 export const readPriceFiles = (
   files: readonly FileState[],
   settings: FeedSettings,
+  database: Database,
 ): Promise<Result<ReadFiles>> =>
-  withDatabase(async (connection) => {
+  database(async (connection) => {
     const collected = makeCollected();
     const reports: FileReport[] = [];
     for (const file of files) {

@@ -3,7 +3,7 @@ import { type Result, refuse, succeed } from '../../../terms/result.ts';
 import type { TextFormat } from '../../../terms/tableFormat.ts';
 import { daySql, numberSql, type SourceColumn, textSql } from './cellSql.ts';
 import { findColumns } from './columnsNeeded.ts';
-import { withDatabase } from './database.ts';
+import { type Database, passingDatabase } from './database.ts';
 import { contradictsItsName, fileKindOf } from './fileKind.ts';
 import { readerProblem } from './readerProblem.ts';
 import { openSource } from './source.ts';
@@ -78,11 +78,12 @@ export const readSmallTable = async (
   format: TextFormat,
   wanted: readonly ColumnWanted[],
   setting: string,
+  database: Database = passingDatabase,
 ): Promise<Result<readonly (readonly Cell[])[]>> => {
   const refusal = await refuseUnlessWhole(path);
   if (refusal !== null) return refuse(refusal);
   const kind = fileKindOf(path) ?? 'csv';
-  return withDatabase(async (connection) => {
+  return database(async (connection) => {
     try {
       const source = await openSource(connection, path, kind, format.delimiter);
       const names = Object.fromEntries(wanted.map(({ name }, place) => [String(place), name]));
