@@ -6,7 +6,7 @@ import { type HelpPage, helpReply } from '../present/compose/help.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
 import { type Button, type Reply, reply } from '../present/reply.ts';
 import type { Question, ReadQuestion, StatisticalQuestion } from '../questions/question.ts';
-import { type ReadContext, readMessage } from '../questions/readMessage.ts';
+import { type ReadContext, type ReadOutcome, readMessage } from '../questions/readMessage.ts';
 import type { PriceSeries, PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
@@ -103,6 +103,9 @@ export const createConverse = (desk: Desk): Converse => {
   const ask = async ({ text, progress }: Asking): Promise<readonly Spoken[]> => {
     const live = desk.snapshot();
     const { questions } = readMessage(text, desk.contextFor(live.ok ? live.value : null));
+    const asksForHelp = (outcome: ReadOutcome) => outcome.ok && outcome.value.question.verb === 'help';
+    // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
+    if (!live.ok && !questions.some(asksForHelp)) return questions.length === 0 ? [] : [refused(live)];
     const spoken: Spoken[] = [];
     for (const outcome of questions)
       spoken.push(outcome.ok ? await answerOne(outcome.value, live, progress) : refused(outcome));
