@@ -1,5 +1,5 @@
-import { problem } from '../terms/problem.ts';
-import { canonicalText } from './canonicalText.ts';
+import { type Position, type ProblemCode, problem } from '../terms/problem.ts';
+import { canonicalLine, canonicalText } from './canonicalText.ts';
 import { cleanMessage } from './cleanMessage.ts';
 import type { ReadContext } from './context.ts';
 import type { Fault } from './internal/faults/fault.ts';
@@ -10,27 +10,31 @@ import type { Line } from './internal/recognisers/recogniser.ts';
 import { isOnlyFiller } from './internal/recognisers/table.ts';
 import { splitLines } from './internal/words/splitLines.ts';
 import { limits } from './limits.ts';
-import type { Reading, ReadingProblem, ReadOutcome } from './reading.ts';
+import type { Reading, ReadOutcome } from './reading.ts';
 
 export type { QuestionDefaults, ReadContext, Vocabulary } from './context.ts';
 export type { Reading, ReadingProblem, ReadOutcome } from './reading.ts';
 
-const refused = (reason: ReadingProblem): ReadOutcome => ({ ok: false, problem: reason });
+const refused = (
+  code: ProblemCode,
+  message: string,
+  suggestions: readonly string[],
+  position: Position | null,
+): ReadOutcome => ({
+  ok: false,
+  problem: { ...problem(code, message, { position, suggestion: suggestions[0] ?? null }), suggestions },
+});
 
-const lineProblem = (line: Line, fault: Fault): ReadingProblem => {
+const lineRefused = (line: Line, fault: Fault): ReadOutcome => {
   const first = line.words[fault.first];
   const last = line.words[fault.first + fault.wordCount - 1];
   const position = first === undefined || last === undefined ? null : { start: first.start, end: last.end };
-  const suggestions = suggestionsFor(line, fault);
-  return {
-    ...problem(fault.code, fault.message, { position, suggestion: suggestions[0] ?? null }),
-    suggestions,
-  };
+  return refused(fault.code, fault.message, suggestionsFor(line, fault), position);
 };
 
 const outcomesOf = (line: Line): readonly ReadOutcome[] => {
   const attempt = readLine(line);
-  if (!attempt.ok) return [refused(lineProblem(line, attempt.fault))];
+  if (!attempt.ok) return [lineRefused(line, attempt.fault)];
   const position = { start: line.words[0]?.start ?? 0, end: line.words[line.words.length - 1]?.end ?? 0 };
   const { questions, assumed, wishes } = attempt.value;
   return questions.map((question) => ({
@@ -39,21 +43,23 @@ const outcomesOf = (line: Line): readonly ReadOutcome[] => {
   }));
 };
 
+/** The first question that is not answered is written out, to be sent again. */
 const tooManyLines = (lines: readonly Line[]): readonly ReadOutcome[] => {
-  const first = lines[limits.questionsPerMessage]?.words[0];
-  if (first === undefined) return [];
+  const [next] = lines.slice(limits.questionsPerMessage);
+  const first = next?.words[0];
+  if (next === undefined || first === undefined) return [];
+  const attempt = readLine(next);
+  const suggestions = attempt.ok ? [canonicalLine(attempt.value.questions)] : [];
   const more = lines.length - limits.questionsPerMessage;
   const message =
     `A message may hold ${limits.questionsPerMessage} questions and this one holds ${lines.length}. ` +
     `Send the last ${more === 1 ? 'one' : more} again.`;
-  const position = { start: first.start, end: first.end };
-  return [refused({ ...problem('tooManyLines', message, { position }), suggestions: [] })];
+  return [refused('tooManyLines', message, suggestions, { start: first.start, end: first.end })];
 };
 
-const tooLong = (length: number): ReadOutcome => {
-  const most = limits.messageCharacters;
-  const message = `The message has ${length} characters, and at most ${most} are read. Send the question alone.`;
-  return refused({ ...problem('messageTooLong', message), suggestions: [] });
+const tooLong = (length: number, context: ReadContext): ReadOutcome => {
+  const message = `The message has ${length} characters, and at most ${limits.messageCharacters} are read. Send the question alone.`;
+  return refused('messageTooLong', message, context.builtVerbs.includes('help') ? ['help'] : [], null);
 };
 
 /**
@@ -63,7 +69,7 @@ const tooLong = (length: number): ReadOutcome => {
  * Example: `interval KELP` is the interval of KELP's mean over the default window, with `60d (default)` among `assumed`.
  */
 export const readMessage = (text: string, context: ReadContext): Reading => {
-  if (text.length > limits.messageCharacters) return { text: '', questions: [tooLong(text.length)] };
+  if (text.length > limits.messageCharacters) return { text: '', questions: [tooLong(text.length, context)] };
   const clean = cleanMessage(text, context.ownId ?? null);
   const lines = splitLines(clean.text, context.vocabulary, (words) => beginsQuestion({ words, context }))
     .map((words): Line => ({ words, context }))

@@ -17,5 +17,5 @@ export type HelpTopic = {
 
 export type VerbTopic = HelpTopic & { readonly name: Verb };
 
-/** Something that is often asked for and not answered here; `sentence` says what comes nearest. */
-export type NotAskedTopic = HelpTopic & { readonly nearestVerb: Verb };
+/** Something that is often asked for and not answered here. `nearest` says in a sentence what comes nearest. */
+export type NotAskedTopic = HelpTopic & { readonly nearest: string; readonly nearestVerb: Verb };

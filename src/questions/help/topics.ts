@@ -18,6 +18,8 @@ const byWord = <Topic extends HelpTopic>(topics: readonly Topic[]): ReadonlyMap<
 const topicsByWord = byWord(helpTopics);
 const notAskedByWord = byWord(notAskedTopics);
 
+export const topicWords: readonly string[] = [...topicsByWord.keys()];
+
 /** The topic that is called so, by its name or one of its other words, in small letters. */
 export const topicNamed = (words: string): HelpTopic | null => topicsByWord.get(words) ?? null;
 
@@ -37,6 +39,6 @@ export const generalTopic = (builtVerbs: readonly string[]): HelpTopic => ({
   examples: firstExamples,
   remarks: [
     'help VERB says how a question is written; help windows, dates, levels, sizes and typing explain its parts.',
-    ...notAskedTopics.map(({ sentence }) => sentence),
+    ...notAskedTopics.map(({ sentence, nearest }) => `${sentence} ${nearest}`),
   ],
 });

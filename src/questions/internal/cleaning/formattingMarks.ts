@@ -57,9 +57,12 @@ export const removeFormattingMarks = (mapped: MappedText): MappedText => {
   if (!/[*_~`]/.test(mapped.text)) return mapped;
   const remove = marksToRemove(mapped.text);
   if (remove.size === 0) return mapped;
-  const kept = Array.from(mapped.origins.keys()).filter((index) => !remove.has(index));
-  return {
-    text: kept.map((index) => mapped.text.charAt(index)).join(''),
-    origins: kept.map((index) => mapped.origins[index] ?? 0),
-  };
+  const parts: string[] = [];
+  let kept = 0;
+  for (const at of [...remove].sort((first, second) => first - second)) {
+    parts.push(mapped.text.slice(kept, at));
+    kept = at + 1;
+  }
+  parts.push(mapped.text.slice(kept));
+  return { text: parts.join(''), origins: mapped.origins.filter((_, index) => !remove.has(index)) };
 };

@@ -4,22 +4,17 @@ export type MappedText = { readonly text: string; readonly origins: readonly num
 export type MappedWriter = {
   /** Adds text whose characters stand one after the other from `origin` on. */
   readonly write: (text: string, origin: number) => void;
-  /** Whether anything but blanks has been written. */
-  readonly hasWords: () => boolean;
   readonly finish: () => MappedText;
 };
 
 export const createMappedWriter = (): MappedWriter => {
   const parts: string[] = [];
   const origins: number[] = [];
-  let words = false;
   return {
     write: (text, origin) => {
       parts.push(text);
       for (let index = 0; index < text.length; index += 1) origins.push(origin + index);
-      words ||= text.trim() !== '';
     },
-    hasWords: () => words,
     finish: () => ({ text: parts.join(''), origins }),
   };
 };

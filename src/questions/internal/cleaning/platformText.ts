@@ -1,4 +1,4 @@
-import { mentionMark, readBracketed } from './angleBrackets.ts';
+import { type Bracketed, mentionMark, readBracketed } from './angleBrackets.ts';
 import { plainForm } from './characters.ts';
 import { createMappedWriter, type MappedText, type MappedWriter } from './mappedText.ts';
 
@@ -26,37 +26,27 @@ const writePlain = (writer: MappedWriter, text: string, origin: number): void =>
   writer.write(text.slice(written), origin + written);
 };
 
-const writeBracketed = (
-  writer: MappedWriter,
-  inside: string,
-  origin: number,
-  ownId: string | null,
-): boolean => {
-  const bracketed = readBracketed(inside);
-  if (bracketed === null) return false;
-  if (bracketed.kind === 'link') {
-    writePlain(writer, bracketed.shown, origin + bracketed.offset);
-    return true;
-  }
-  const addressesBot = bracketed.id === ownId || (inside.startsWith('@') && !writer.hasWords());
-  writer.write(addressesBot ? ' ' : ` ${mentionMark} `, origin);
-  return true;
+const writeBracketed = (writer: MappedWriter, bracketed: Bracketed, origin: number): void => {
+  if (bracketed.kind === 'link') writePlain(writer, bracketed.shown, origin + bracketed.offset);
+  else writer.write(` ${mentionMark} `, origin);
 };
 
 const bracketPattern = /<([^<>\n]*)>/g;
 
-/** Undoes what the platform made of the typed characters. A mention at the head, and the bot's own anywhere, go. */
+/** What addresses the message: a mention at the head, or a name where mentions are not marked up. */
+const addressPattern = /^\s*(?:<@[^<>\n]*>|@\S*)/;
+
+/** Undoes what the platform made of the typed characters. The address at the head goes, and the bot's own mention anywhere. */
 export const undoPlatformText = (text: string, ownId: string | null): MappedText => {
   const writer = createMappedWriter();
-  // where mentions are not marked up, a name at the head is the address
-  let written = /^\s*@\S*/.exec(text)?.[0].length ?? 0;
+  let written = addressPattern.exec(text)?.[0].length ?? 0;
   for (const match of text.matchAll(bracketPattern)) {
-    if (match.index < written) continue;
+    const bracketed = match.index < written ? null : readBracketed(match[1] ?? '');
+    if (bracketed === null) continue;
     writePlain(writer, text.slice(written, match.index), written);
-    const end = match.index + match[0].length;
-    const undone = writeBracketed(writer, match[1] ?? '', match.index + 1, ownId);
-    if (!undone) writePlain(writer, match[0], match.index);
-    written = end;
+    if (bracketed.kind === 'link' || bracketed.id !== ownId)
+      writeBracketed(writer, bracketed, match.index + 1);
+    written = match.index + match[0].length;
   }
   writePlain(writer, text.slice(written), written);
   return writer.finish();

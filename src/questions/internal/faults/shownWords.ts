@@ -27,12 +27,15 @@ const placeOf = (first: number, wordCount: number): string =>
 export const shownWords = (words: readonly Word[], first: number, wordCount: number): string => {
   const chosen = words.slice(first, first + wordCount);
   const place = placeOf(first, wordCount);
-  if (chosen.every(isMention)) return `A mention (${place})`;
+  if (chosen.every(isMention)) return `a mention (${place})`;
   const text = safeText(
     chosen
       .filter((word) => !isMention(word))
       .map((word) => word.text)
       .join(' '),
   );
-  return text === '' ? `A sign (${place})` : `“${text}” (${place})`;
+  return text === '' ? `a sign (${place})` : `“${text}” (${place})`;
 };
+
+/** A message that begins with shown words begins like a sentence. */
+export const asSentence = (text: string): string => `${text.charAt(0).toUpperCase()}${text.slice(1)}`;

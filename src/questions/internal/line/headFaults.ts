@@ -35,13 +35,14 @@ export const noVerb = (line: Line): Fault => {
   const at = line.words.findIndex((word) => !word.quoted && notAsked(word.lower) !== null);
   const topic = notAsked(line.words[at]?.lower ?? '');
   if (topic !== null) return notAskedFault(line, at, topic);
+  const misspelt = misspeltVerbs(line);
   return {
     code: 'noVerb',
     message:
       'No verb was found, so it is not clear what is asked. Begin with one, such as interval; help lists them.',
     first: 0,
     wordCount: line.words.length,
-    repairs: [...misspeltVerbs(line), ...prefixed(line)],
+    repairs: misspelt.length > 0 ? misspelt : prefixed(line),
   };
 };
 

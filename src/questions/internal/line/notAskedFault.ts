@@ -6,7 +6,7 @@ import { verbPlaces } from './verbPlaces.ts';
 /** A word for something that the bot does not answer: what comes nearest, as a question where there is one. */
 export const notAskedFault = (line: Line, at: number, topic: NotAskedTopic): Fault => {
   const hasVerb = verbPlaces(line).length > 0;
-  const says = `cannot be asked. ${topic.sentence}`;
+  const says = `is not answered. ${topic.nearest}`;
   const fault = faultAt(line, at, 1, {
     code: 'unreadableWords',
     says,

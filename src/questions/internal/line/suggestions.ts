@@ -23,22 +23,26 @@ const repairedText = (words: readonly Word[], repair: Repair): string => {
 const writtenOut = ({ questions, wishes }: WholeLine): string =>
   [canonicalLine(questions), ...wishes.map((wish) => `as ${wish}`)].join(' ');
 
-/** A repaired line may have a fault of its own, which is repaired in turn, this often. */
-const mostRounds = 2;
+/** Where no repair is enough, the repaired lines' own faults are repaired in turn, this often in all. */
+const mostRounds = 3;
 
 const readableForms = (line: Line, fault: Fault, rounds: number): readonly string[] => {
+  const { context } = line;
   const forms = new Set<string>();
+  const failed: { line: Line; fault: Fault }[] = [];
   for (const repair of fault.repairs) {
     if (forms.size >= limits.suggestionsPerProblem) break;
-    const { context } = line;
-    const words = splitWords(repairedText(line.words, repair), 0, context.vocabulary);
-    const attempt = readLine({ words, context });
+    const repaired = { words: splitWords(repairedText(line.words, repair), 0, context.vocabulary), context };
+    const attempt = readLine(repaired);
     if (attempt.ok) forms.add(writtenOut(attempt.value));
-    else if (rounds > 1)
-      for (const form of readableForms({ words, context }, attempt.fault, rounds - 1).slice(0, 1))
-        forms.add(form);
+    else failed.push({ line: repaired, fault: attempt.fault });
   }
-  return [...forms];
+  if (forms.size > 0 || rounds <= 1) return [...forms];
+  for (const next of failed) {
+    const deeper = readableForms(next.line, next.fault, rounds - 1);
+    if (deeper.length > 0) return deeper;
+  }
+  return [];
 };
 
 const helpAbout = (line: Line): string => {
@@ -53,7 +57,8 @@ const canHelp = (context: ReadContext): boolean => context.builtVerbs.includes('
 
 /** Questions near the refused line that would work, ready to send, the nearest first; help about its verb where there is none. */
 export const suggestionsFor = (line: Line, fault: Fault): readonly string[] => {
-  const forms = readableForms(line, fault, mostRounds);
+  const short = line.words.length <= limits.wordsOfRepairedLine;
+  const forms = short ? readableForms(line, fault, mostRounds) : [];
   if (forms.length > 0 || !canHelp(line.context)) return forms;
   return [helpAbout(line)];
 };

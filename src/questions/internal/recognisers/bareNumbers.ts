@@ -1,3 +1,4 @@
+import type { Day } from '../../../terms/day.ts';
 import { decimalOf } from '../words/numbers.ts';
 import { isoReadings } from './numericDates.ts';
 import { found, type Recogniser } from './recogniser.ts';
@@ -8,11 +9,11 @@ export const bareNumber: Recogniser = (line, at) => {
   return decimal === null ? null : found({ kind: 'number', decimal }, 1);
 };
 
-/** What a bare number may have meant, in words that say so: a level, a window, a size, a ratio, or a date without dashes. */
-export const numberReadings = (decimal: string, today: number): readonly string[] => {
+/** Texts that a bare number may have been short for: a level, a window, or a date without dashes. */
+export const levelOrWindow = (decimal: string, today: Day): readonly string[] => {
   if (/^\d{8}$/.test(decimal)) return isoReadings(decimal, today).map((day) => `since ${day}`);
   const value = Number(decimal);
   const level = value > 0 && value < 100 ? [`at ${decimal}${value < 1 ? '' : '%'}`] : [];
   const window = /^\d{1,7}$/.test(decimal) && value > 0 ? [`${decimal}d`] : [];
-  return [...level, ...window, `${decimal}bp`, `${decimal}%`, `ratio ${decimal}`];
+  return [...level, ...window];
 };

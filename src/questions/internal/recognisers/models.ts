@@ -29,7 +29,7 @@ export const model: Recogniser = (line, at) => {
   const word = line.words[at + 1];
   const named = word === undefined ? null : modelNamed(word.lower);
   if (named !== null) return found({ kind: 'model', model: named }, 2);
-  const near = modelsNear(word?.lower ?? '').map((name) => `by ${name}`);
+  const near = word === undefined ? [] : modelsNear(word.lower).map((name) => `by ${name}`);
   const wordCount = near.length === 0 || word === undefined ? 1 : 2;
   const says = `needs one of the models after it: ${tailModels.join(', ')}.`;
   return foundFault(

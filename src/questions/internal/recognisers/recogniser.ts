@@ -1,6 +1,6 @@
 import type { ReadContext } from '../../context.ts';
 import { type Fault, instead } from '../faults/fault.ts';
-import { shownWords } from '../faults/shownWords.ts';
+import { asSentence, shownWords } from '../faults/shownWords.ts';
 import type { Piece } from '../pieces/piece.ts';
 import type { Word } from '../words/word.ts';
 
@@ -24,7 +24,7 @@ export type Complaint = Pick<Fault, 'code'> & { readonly says: string; readonly 
 /** A fault about `wordCount` words from `first` on; the message begins with those words. */
 export const faultAt = (line: Line, first: number, wordCount: number, complaint: Complaint): Fault => ({
   code: complaint.code,
-  message: `${shownWords(line.words, first, wordCount)} ${complaint.says}`,
+  message: asSentence(`${shownWords(line.words, first, wordCount)} ${complaint.says}`),
   first,
   wordCount,
   repairs: instead(first, wordCount, complaint.instead),

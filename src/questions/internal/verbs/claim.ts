@@ -8,9 +8,11 @@ import { checkedSize } from './sizeRange.ts';
 import { createTaking, takeLevel, takeSample } from './taking.ts';
 import { faultAtPiece, missing, ofEachTicker, type VerbLine, type VerbReader } from './verbReader.ts';
 
+const asRatio = (decimal: string): readonly string[] => [`ratio ${decimal}`];
+
 /** With `ratio` the claim is a number without a unit, and a percentage is the level. */
 const settle: VerbReader['settle'] = (line, pieces) => {
-  if (firstOf(pieces, 'of')?.of !== 'ratio') return settleSize(line, pieces);
+  if (firstOf(pieces, 'of')?.of !== 'ratio') return settleSize(line, pieces, asRatio);
   const numbers = allOf(pieces, 'number');
   const settled = settleLevels(
     line,

@@ -1,4 +1,4 @@
-import { topicNamed } from '../../help/topics.ts';
+import { topicNamed, topicWords } from '../../help/topics.ts';
 import { attained } from '../faults/fault.ts';
 import { firstOf } from '../pieces/piece.ts';
 import { faultAt, found, foundFault, type Recogniser } from '../recognisers/recogniser.ts';
@@ -12,7 +12,6 @@ const topic: Recogniser = (line, at) => {
   const [first, second] = [line.words[at], line.words[at + 1]];
   if (first === undefined || first.quoted) return null;
   const verb = verbOfWord(first.lower);
-  if (verb === 'help') return null;
   if (verb !== null && !line.context.builtVerbs.includes(verb))
     return foundFault(faultAt(line, at, 1, cannotBeAskedYet(line.context, [''])), 1);
   const both = second === undefined ? null : topicNamed(`${first.lower} ${second.lower}`);
@@ -26,6 +25,7 @@ export const help: VerbReader = {
   takes: new Set(['topic']),
   tickers: { least: 0, most: 0 },
   recognise: topic,
+  ownWords: topicWords,
   settle: settleLevels,
   read: ({ pieces }) =>
     attained({ questions: [{ verb: 'help', topic: firstOf(pieces, 'topic')?.topic ?? null }], assumed: [] }),

@@ -1,7 +1,7 @@
 import { levelFromPercent } from '../../../terms/level.ts';
 import { type Attempt, attained, type Fault, faulty } from '../faults/fault.ts';
 import { allOf, has, type Piece, type PieceOf, type Placed } from '../pieces/piece.ts';
-import { numberReadings } from '../recognisers/bareNumbers.ts';
+import { levelOrWindow } from '../recognisers/bareNumbers.ts';
 import { levelOutside } from '../recognisers/levels.ts';
 import type { Line } from '../recognisers/recogniser.ts';
 import { scaledDecimal } from '../words/numbers.ts';
@@ -13,19 +13,23 @@ type PlacedPercent = Placed<PieceOf<'percent'>>;
 const replacePiece = (pieces: readonly Placed[], old: Placed, piece: Piece): readonly Placed[] =>
   pieces.map((placed) => (placed === old ? { ...placed, piece } : placed));
 
-/** A number without a unit is never guessed at: each of its readings is offered. */
-export const bareNumberFault = (line: Line, placed: Placed<PieceOf<'number'>>): Fault => {
-  const { decimal } = placed.piece;
-  const readings = numberReadings(decimal, line.context.today);
+/** A number without a unit is never guessed at: what it may have been short for is offered. */
+const bareNumberFault = (
+  line: Line,
+  placed: Placed<PieceOf<'number'>>,
+  readingsOf: (decimal: string) => readonly string[],
+): Fault => {
+  const readings = readingsOf(placed.piece.decimal);
   const ticker = line.context.vocabulary.canonicalTicker(line.words[placed.first]?.text ?? '');
-  return faultAtPiece(line, placed, {
-    code: 'ambiguous',
-    says: `has no unit. Write at 95% for a level, 95d for a window or 95bp for a size.`,
-    instead: [...readings, ...(ticker === null ? [] : [`\`${ticker}\``]), ''],
-  });
+  const says =
+    readings.length === 0
+      ? 'has no unit and no use here. Leave it out.'
+      : `has no unit. Write what is meant: ${readings.join(' or ')}.`;
+  const texts = ticker === null ? readings : [...readings, `\`${ticker}\``];
+  return faultAtPiece(line, placed, { code: 'ambiguous', says, instead: texts.length === 0 ? [''] : texts });
 };
 
-export const percentAsLevel = (
+const percentAsLevel = (
   line: Line,
   pieces: readonly Placed[],
   placed: PlacedPercent,
@@ -39,7 +43,9 @@ export const percentAsLevel = (
 /** For verbs without a size: percentages are levels, and bare numbers nothing. */
 export const settleLevels: Settle = (line, pieces) => {
   const [number] = allOf(pieces, 'number');
-  if (number !== undefined) return faulty(bareNumberFault(line, number));
+  const { today } = line.context;
+  if (number !== undefined)
+    return faulty(bareNumberFault(line, number, (decimal) => levelOrWindow(decimal, today)));
   let settled = pieces;
   for (const placed of allOf(pieces, 'percent')) {
     const attempt = percentAsLevel(line, settled, placed);
@@ -64,10 +70,24 @@ const twoPercentages = (line: Line, first: PlacedPercent, second: PlacedPercent)
   ]),
 });
 
-/** For verbs with a size: a percentage is the level where the size is given otherwise, else the size. */
-export const settleSize: Settle = (line, pieces) => {
+const sizes = (decimal: string): readonly string[] => [`${decimal}bp`, `${decimal}%`];
+
+/**
+ * For verbs with a size: a percentage is the level where the size is given otherwise, else the size. `others` are
+ * texts that a bare number may be short for with this verb alone.
+ */
+export const settleSize = (
+  line: Line,
+  pieces: readonly Placed[],
+  others: (decimal: string) => readonly string[] = () => [],
+): ReturnType<Settle> => {
   const [number] = allOf(pieces, 'number');
-  if (number !== undefined) return faulty(bareNumberFault(line, number));
+  const { today } = line.context;
+  const readingsOf = (decimal: string) => {
+    const shared = levelOrWindow(decimal, today);
+    return has(pieces, 'size') ? shared : [...sizes(decimal), ...others(decimal), ...shared];
+  };
+  if (number !== undefined) return faulty(bareNumberFault(line, number, readingsOf));
   const [first, second] = allOf(pieces, 'percent');
   if (first === undefined) return attained(pieces);
   if (has(pieces, 'size')) return settleLevels(line, pieces);

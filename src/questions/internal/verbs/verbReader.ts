@@ -24,6 +24,8 @@ export type VerbReader = {
   readonly tickers: { readonly least: number; readonly most: number };
   /** Looks at every word before the language does, where the verb has words of its own. */
   readonly recognise?: Recogniser;
+  /** Those words, where they stand in the place of the language's. */
+  readonly ownWords?: readonly string[];
   /** Makes levels, sizes and ratios of the percentages and numbers that nothing marks. */
   readonly settle: (line: Line, pieces: readonly Placed[]) => Attempt<readonly Placed[]>;
   readonly read: (line: VerbLine) => Attempt<ReadLine>;
