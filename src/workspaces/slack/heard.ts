@@ -63,3 +63,12 @@ export const heardIn = (event: unknown, team: string, self: Self): Heard | null 
     editedTs,
   };
 };
+
+const bodyOfEvent = z.object({ team_id: z.string().catch(''), event: z.looseObject({ type: z.string() }) });
+
+/** Whether anything in it is meant for the bot. People's words that are not are never kept anywhere. */
+export const concernsBot = (body: unknown, self: Self): boolean => {
+  const read = bodyOfEvent.safeParse(body);
+  if (!read.success || !spoken.shape.type.safeParse(read.data.event.type).success) return true;
+  return heardIn(read.data.event, read.data.team_id, self) !== null;
+};

@@ -1,5 +1,7 @@
 import { type App, HTTPReceiver, type Receiver, SocketModeReceiver, type webApi } from '@slack/bolt';
+import { concernsBot } from './heard.ts';
 import { libraryLog } from './log.ts';
+import type { Self } from './lookup.ts';
 import type { Inbox, Logger, Time } from './ports.ts';
 import type { Receiving } from './settings.ts';
 import { keepSocket } from './sockets.ts';
@@ -14,6 +16,7 @@ export type Reception = Receiver & {
 };
 
 export type Receptionist = {
+  readonly self: Self;
   readonly inbox: Inbox;
   readonly work: Work;
   readonly time: Time;
@@ -25,11 +28,12 @@ export type Receptionist = {
  * The app as its receivers see it. The library acknowledges an event before anything of ours runs, and what is
  * acknowledged never comes again: so what arrives is kept first. Where keeping fails it is not acknowledged.
  */
-const keepingFirst = (app: App, { inbox, work }: Receptionist): App => {
+const keepingFirst = (app: App, { self, inbox, work }: Receptionist): App => {
   const front: App = Object.create(app);
   front.processEvent = (event) =>
     work.track(async () => {
-      await inbox.keep({ body: event.body, retryNumber: event.retryNum ?? 0 });
+      if (concernsBot(event.body, self))
+        await inbox.keep({ body: event.body, retryNumber: event.retryNum ?? 0 });
       await app.processEvent(event);
     });
   return front;

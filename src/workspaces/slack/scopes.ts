@@ -11,6 +11,7 @@ export const featureScopes = {
   followUp: ['channels:history', 'groups:history'],
   pin: ['pins:write', 'pins:read'],
   picture: ['files:write'],
+  home: [],
 } as const;
 
 export type Feature = keyof typeof featureScopes;
@@ -36,7 +37,7 @@ export const featureEvents = {
   pin: ['pin_removed'],
   picture: [],
   home: ['app_home_opened'],
-} as const;
+} as const satisfies Readonly<Record<Feature, readonly string[]>>;
 
 const features = Object.keys(featureScopes).filter((name): name is Feature => name in featureScopes);
 
@@ -51,7 +52,7 @@ export const featuresOf = (scopes: readonly string[] | null, log: Logger): Reado
   }
   const on = new Set(features);
   for (const feature of features) {
-    const missing = featureScopes[feature].filter((scope) => !scopes.includes(scope));
+    const missing = featureScopes[feature].filter((scope: string) => !scopes.includes(scope));
     if (missing.length === 0) continue;
     on.delete(feature);
     log.warn(

@@ -108,7 +108,7 @@ export const startSlack = async (
   const delivering: Delivering = { wire, pace, time, log, newId, self, canLookUp };
   const voice = makeVoice(delivering, makePace(time, editPace));
   const work = makeWork();
-  const reception = receptionOf(receiving, { inbox, work, time, log, clientOptions });
+  const reception = receptionOf(receiving, { self, inbox, work, time, log, clientOptions });
   const app = new App({
     receiver: reception,
     token: botToken,

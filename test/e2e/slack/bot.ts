@@ -1,5 +1,12 @@
 import { afterEach } from 'vitest';
-import type { Asking, Block, Conversation, Press, SpokenReply } from '../../../src/workspaces/slack/ports.ts';
+import type {
+  Asking,
+  Block,
+  Conversation,
+  Inbox,
+  Press,
+  SpokenReply,
+} from '../../../src/workspaces/slack/ports.ts';
 import { noInbox, seenInMemory } from '../../../src/workspaces/slack/seen.ts';
 import type { Receiving } from '../../../src/workspaces/slack/settings.ts';
 import { type SlackWorkspace, startSlack } from '../../../src/workspaces/slack/start.ts';
@@ -62,6 +69,7 @@ export type LogLine = { readonly level: 'info' | 'warn' | 'error'; readonly mess
 type BotOptions = PlatformOptions & {
   readonly conversation?: Partial<Conversation>;
   readonly mode?: Receiving['mode'];
+  readonly inbox?: Inbox;
 };
 
 export type Stage = {
@@ -127,7 +135,7 @@ export const prepare = async (options: BotOptions = {}) => {
         time: platform.time,
         newId: identifiers(),
         seen: seenInMemory(),
-        inbox: noInbox,
+        inbox: options.inbox ?? noInbox,
       },
     );
   return { platform, log, asked, pressed, start };

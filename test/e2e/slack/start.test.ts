@@ -35,7 +35,13 @@ describe('joining the workspace', () => {
   it('says which feature is off for want of which scope, and leaves it off', async () => {
     const scopes = ['app_mentions:read', 'chat:write', 'channels:history', 'groups:history', 'im:history'];
     const stage = await startBot({ scopes });
-    expect([...stage.bot.features].sort()).toEqual(['directMessage', 'followUp', 'lookUp', 'mention']);
+    expect([...stage.bot.features].sort()).toEqual([
+      'directMessage',
+      'followUp',
+      'home',
+      'lookUp',
+      'mention',
+    ]);
     expect(stage.log.map(({ message }) => message)).toContain(
       'The feature slashCommand is off: the token lacks commands. Add it to the app and install it again.',
     );
