@@ -39,8 +39,9 @@ export const studentTDensity = (t: number, nu: number): number => {
 export const studentTTwoSidedTail = (t: number, nu: number): number => {
   mustBeInDomain('studentTTwoSidedTail', t, nu);
   const size = Math.abs(t);
+  if (size === 0) return 1;
   if (size === Number.POSITIVE_INFINITY) return 0;
-  return nu >= normalFrom ? 2 * normalUpperTail(size) : twoSidedTail(size, nu);
+  return nu >= normalFrom ? 2 * normalUpperTail(size) : Math.min(1, twoSidedTail(size, nu));
 };
 
 /**

@@ -6,7 +6,7 @@ export type RootOutcome =
 export type RootOptions = {
   /** The bracket is narrowed to this share of the root; never finer than two units in the last place. */
   readonly relativeTolerance?: number;
-  /** ... or to this width, whichever is wider. */
+  /** … or to this width, whichever is wider; 1e-24 of the larger end unless told otherwise, for roots at zero. */
   readonly absoluteTolerance?: number;
   readonly maxEvaluations?: number;
 };
@@ -19,7 +19,7 @@ export type RootOptions = {
  * Domain: low and high finite, in either order; infinite values of f count by their sign.
  * Unit: that of the argument.
  * Edges: an end at which f is exactly zero is the root; equal signs, a NaN value and running out of evaluations (default
- * 200) are outcomes, never a loop.
+ * 300) are outcomes, never a loop.
  * Source: Chandrupatla 1997, Advances in Engineering Software 28, 145-149.
  * Example: `findRoot((x) => x * x - 2, 0, 2)` finds 1.4142135623730951.
  */
@@ -30,8 +30,8 @@ export const findRoot = (
   options: RootOptions = {},
 ): RootOutcome => {
   const relativeTolerance = Math.max(options.relativeTolerance ?? 0, 2 * Number.EPSILON);
-  const absoluteTolerance = options.absoluteTolerance ?? Number.MIN_VALUE;
-  const maxEvaluations = options.maxEvaluations ?? 200;
+  const absoluteTolerance = options.absoluteTolerance ?? 1e-24 * Math.max(Math.abs(low), Math.abs(high));
+  const maxEvaluations = options.maxEvaluations ?? 300;
   let older = low;
   let newest = high;
   let fOlder = f(older);

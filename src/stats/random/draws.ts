@@ -30,7 +30,7 @@ const mostIndices = 2 ** 21;
  * Example: `nextIndex(random, 60)` picks one of sixty returns.
  */
 export const nextIndex = (random: Random, count: number): number => {
-  if (!(count >= 1 && count <= mostIndices) || Math.floor(count) !== count) {
+  if ((count | 0) !== count || count < 1 || count > mostIndices) {
     throw new RangeError(`nextIndex: count ${count} is not a whole number from 1 to ${mostIndices}`);
   }
   let drawn = random.nextUint32();
@@ -42,7 +42,7 @@ export const nextIndex = (random: Random, count: number): number => {
       lower = Math.imul(drawn, count) >>> 0;
     }
   }
-  return Math.floor(drawn * count * 2 ** -32);
+  return (drawn * count * 2 ** -32) | 0;
 };
 
 /** A standard normal number: the quantile of an open double, so one number for two draws of 32 bits. */
