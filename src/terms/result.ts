@@ -9,3 +9,6 @@ export type Refusal = { readonly ok: false; readonly problem: Problem };
 export const succeed = <T>(value: T): Result<T> => ({ ok: true, value });
 
 export const refuse = (problem: Problem): Refusal => ({ ok: false, problem });
+
+/** The value, or null where it was refused and the reason does not matter to the caller. */
+export const valueOrNull = <T>(result: Result<T>): T | null => (result.ok ? result.value : null);

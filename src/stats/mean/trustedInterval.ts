@@ -1,4 +1,4 @@
-import { type Result, succeed } from '../../terms/result.ts';
+import { type Result, succeed, valueOrNull } from '../../terms/result.ts';
 import type { MeanBootstrapQuestion } from './bootstrapQuestion.ts';
 import type { Ends } from './ends.ts';
 import { type MeanEvidence, meanEvidence } from './evidence.ts';
@@ -44,10 +44,9 @@ const choose = (candidates: Candidates): Pick<TrustedMeanInterval, 'trust' | 're
 
 const bootstrapFor = (question: TrustedMeanQuestion, evidence: MeanEvidence) => {
   if (!(evidence.dependent || evidence.lopsided || question.bootstrapAsked === true)) return null;
-  const interval = evidence.dependent
-    ? stationaryBootstrapInterval(question)
-    : studentisedBootstrapInterval(question);
-  return interval.ok ? interval.value : null;
+  return evidence.dependent
+    ? valueOrNull(stationaryBootstrapInterval(question))
+    : valueOrNull(studentisedBootstrapInterval(question));
 };
 
 /**
@@ -66,11 +65,10 @@ export const trustedMeanInterval = (question: TrustedMeanQuestion): Result<Trust
   const { returns, level, side } = question;
   const plain = meanInterval(returns, level, side);
   if (!plain.ok) return plain;
-  const robust = neweyWestInterval(returns, level, side);
   const evidence = meanEvidence(returns);
   const candidates = {
     plain: plain.value,
-    neweyWest: robust.ok ? robust.value : null,
+    neweyWest: valueOrNull(neweyWestInterval(returns, level, side)),
     bootstrap: bootstrapFor(question, evidence),
     evidence,
   };

@@ -1,4 +1,4 @@
-import { type Result, succeed } from '../../terms/result.ts';
+import { type Result, succeed, valueOrNull } from '../../terms/result.ts';
 import type { LagTest } from '../dependence/autocorrelation.ts';
 import { dependenceFoundBelow, volatilityClustering } from '../dependence/clustering.ts';
 import { type JarqueBera, jarqueBera } from '../moments/jarqueBera.ts';
@@ -34,8 +34,6 @@ export type DeviationTrust = {
 };
 
 export type DeviationTrustQuestion = BlockDeviationQuestion & { readonly blockAsked?: boolean };
-
-const valueOrNull = <T>(result: Result<T>): T | null => (result.ok ? result.value : null);
 
 const shapeEvidence = (returns: ArrayLike<number>) => {
   if (returns.length < leastCounts.kurtosis) return { kurtosis: null, normality: null, fat: false };

@@ -1,0 +1,3 @@
+import type { CoverageCell } from '../cell.ts';
+
+export const deviationCoverage: readonly CoverageCell[] = [];

@@ -1,0 +1,11 @@
+import type { CoverageCell } from './cell.ts';
+import { deviationCoverage } from './measured/deviation.ts';
+import { meanCoverage } from './measured/mean.ts';
+import { ratioCoverage } from './measured/ratio.ts';
+
+/** All cells that were measured. Each file under measured/ is written by one suite of `npm run coverage-table`. */
+export const coverageTable: readonly CoverageCell[] = [
+  ...meanCoverage,
+  ...deviationCoverage,
+  ...ratioCoverage,
+];
