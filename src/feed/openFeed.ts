@@ -22,6 +22,7 @@ import { readHolidays } from './tables/holidays.ts';
 export type OpenSnapshot = PriceSnapshot & {
   readonly columns: SnapshotColumns;
   readonly report: FeedReport;
+  readonly holidays: HolidayCalendars;
 };
 
 const noFile = (path: string) =>
@@ -30,7 +31,9 @@ const noFile = (path: string) =>
   );
 
 const changedMeanwhile = (path: string) =>
-  refuse(problem('fileUnreadable', `${path} was written while it was read. Read it again once it is whole.`));
+  refuse(
+    problem('fileChanging', `${path} was written while it was read. It is read again once it is whole.`),
+  );
 
 /** Sorts what was read and leaves out, by name, what contradicts itself. */
 const sortAndSift = async (read: ReadFiles, settings: FeedSettings, nowMs: InstantMs | null) => {
@@ -101,7 +104,7 @@ const assemble = async (
     findings: findings.list(),
     tickers: [...served, ...heldBack].sort((first, second) => (first.ticker < second.ticker ? -1 : 1)),
   };
-  return succeed({ ...snapshot, report });
+  return succeed({ ...snapshot, report, holidays });
 };
 
 /** Reads, checks and opens price files that were listed just before. A file that changes meanwhile is refused. */

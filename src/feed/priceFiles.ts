@@ -51,6 +51,12 @@ const stateOf = async (path: string): Promise<(FileState & { readonly isFolder: 
   }
 };
 
+/** The state of one file; null where there is none. */
+export const stateOfFile = async (path: string): Promise<FileState | null> => {
+  const state = await stateOf(path);
+  return state === null || state.isFolder ? null : state;
+};
+
 const filesAt = async (path: string): Promise<FileState[]> => {
   const state = await stateOf(path);
   if (state === null) return [];

@@ -39,6 +39,8 @@ export const problemCodes = {
   columnMissing: 'a column that was asked for is not in the file',
   valueUnreadable: 'a cell that is not the kind of value its column holds',
   fileEmpty: 'a file without a row',
+  fileChanging: 'a file that is still being written',
+  pricesLost: 'a new price file that lacks prices which the one before had',
   settingWrong: 'a setting that is missing, unknown or out of range',
   tokenMissing: 'a token that the workspace needs is not set',
   platformUnreachable: 'the workspace platform does not answer',

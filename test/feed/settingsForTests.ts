@@ -1,6 +1,6 @@
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { afterAll } from 'vitest';
 import type { OpenSnapshot } from '../../src/feed/openFeed.ts';
 import type { FeedSettings } from '../../src/feed/settings.ts';
@@ -37,6 +37,7 @@ export const temporaryFolder = (): {
   afterAll(() => rmSync(folder, { recursive: true }));
   const path = (name: string): string => join(folder, name);
   const write = (name: string, content: string | Uint8Array): string => {
+    mkdirSync(dirname(path(name)), { recursive: true });
     writeFileSync(path(name), content);
     return path(name);
   };
