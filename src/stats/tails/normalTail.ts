@@ -5,6 +5,7 @@ import { normalDensity, normalQuantile } from '../distributions/normal.ts';
 import { type ReturnSummary, summariseReturns } from '../moments/summary.ts';
 import { leastCounts } from '../returns/leastCounts.ts';
 import { normalEsPivots } from './internal/normalEsPivots.ts';
+import { parametricReplicates } from './internal/parametricReplicates.ts';
 import type { Interval, TailFigures, TailInput, TailNote } from './tailFigures.ts';
 
 export type NormalTailParameters = { readonly mean: number; readonly sampleStandardDeviation: number };
@@ -23,9 +24,10 @@ const varIntervalOf = (summary: ReturnSummary, score: number, beyond: number): I
 type EsInterval = { readonly interval: Interval | null; readonly notes: readonly TailNote[] };
 
 const esIntervalOf = (summary: ReturnSummary, multiplier: number, input: TailInput): EsInterval => {
-  const pivots = normalEsPivots(summary.count, multiplier, input.confidence, input.streams);
+  const { confidence, streams, replicates = parametricReplicates } = input;
+  const pivots = normalEsPivots(summary.count, multiplier, confidence, streams, replicates);
   if (pivots === null) {
-    const text = `A confidence of ${levelText(input.confidence)} is beyond what the resamples can reach. Ask for a lower one.`;
+    const text = `A confidence of ${levelText(confidence)} is beyond what the resamples can reach. Ask for a lower one.`;
     return {
       interval: null,
       notes: [{ figure: 'esInterval', code: 'levelBeyondResamples', text, needs: null }],

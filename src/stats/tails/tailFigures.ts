@@ -67,6 +67,8 @@ export type TailInput = {
   readonly tailLevel: Level;
   readonly confidence: Level;
   readonly streams: RandomStreams;
+  /** Resamples of a bootstrap, where the model's own number is not wanted. */
+  readonly replicates?: number;
 };
 
 /**

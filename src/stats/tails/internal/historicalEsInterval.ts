@@ -45,7 +45,7 @@ const without = (code: TailNote['code'], text: string, needs: number | null): Es
 /** Percentile-bootstrap interval of the historical ES, or the reason for which there is none. Losses ascending. */
 export const historicalEsInterval = (
   losses: Float64Array,
-  { tailLevel, confidence, streams }: TailInput,
+  { tailLevel, confidence, streams, replicates = defaultReplicates }: TailInput,
 ): EsInterval => {
   const count = losses.length;
   const expected = expectedBeyond(count, tailLevel);
@@ -56,15 +56,15 @@ export const historicalEsInterval = (
       `beyond it; ${needs} returns would be enough.`;
     return without('tooFewBeyond', text, needs);
   }
-  const ranks = endRanks(confidence, 'both', defaultReplicates);
+  const ranks = endRanks(confidence, 'both', replicates);
   if (!ranks.ok) return without('levelBeyondResamples', ranks.problem.message, null);
-  const replicates = sortedReplicates({
+  const resampled = sortedReplicates({
     draws: [independentDraw(count)],
     statistic: esOfPicks(losses, expected),
     streams,
-    replicates: defaultReplicates,
+    replicates,
   });
-  const lower = orderStatistic(replicates, ranks.value.lower);
-  const upper = orderStatistic(replicates, ranks.value.upper);
+  const lower = orderStatistic(resampled, ranks.value.lower);
+  const upper = orderStatistic(resampled, ranks.value.upper);
   return { interval: { lower, upper }, notes: [] };
 };

@@ -3,7 +3,6 @@ import type { RandomStreams } from '../../../terms/random.ts';
 import { endRanks } from '../../bootstrap/ranks.ts';
 import { orderStatistic } from '../../numerics/quantile.ts';
 import { nextNormal } from '../../random/draws.ts';
-import { parametricReplicates } from './parametricReplicates.ts';
 
 /**
  * Lower and upper order statistics of (ES* − ES)/s* over standard normal samples of `count`, ES = `multiplier` there;
@@ -14,11 +13,12 @@ export const normalEsPivots = (
   multiplier: number,
   confidence: Level,
   streams: RandomStreams,
+  replicates: number,
 ): { readonly lower: number; readonly upper: number } | null => {
-  const ranks = endRanks(confidence, 'both', parametricReplicates);
+  const ranks = endRanks(confidence, 'both', replicates);
   if (!ranks.ok) return null;
-  const pivots = new Float64Array(parametricReplicates);
-  for (let replicate = 0; replicate < parametricReplicates; replicate += 1) {
+  const pivots = new Float64Array(replicates);
+  for (let replicate = 0; replicate < replicates; replicate += 1) {
     const random = streams.stream(replicate);
     let sum = 0;
     let squares = 0;

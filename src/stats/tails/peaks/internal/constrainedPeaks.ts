@@ -1,12 +1,11 @@
 import { maximiseByNewton, type SmoothObjective } from '../../../numerics/boundedNewton.ts';
-import { logarithmCurvature, logarithmCurvatureSlope } from '../../../numerics/logarithmCurvature.ts';
-import { depthAt, quantileBeyond } from './gpdTail.ts';
+import { type ExponentialGrowth, fillExponentialGrowth } from '../../../numerics/exponentialGrowth.ts';
 import type { PeaksMaximum } from './peaksMaximum.ts';
 
 /**
- * A tail whose figure is given: the loss `distance` beyond the threshold (in units of the mean excess) has the chance
- * `tail` of being exceeded, or is the mean of the losses beyond that chance. The share of losses beyond the threshold
- * follows from (xi, ln β), so two parameters stay free.
+ * A tail whose figure is given: the loss `distance` beyond the threshold (in units of the mean excess, above 0) has the
+ * chance `tail` of being exceeded, or is the mean of the losses beyond that chance. Two coordinates stay free: xi and the
+ * logarithm of the depth ln(ζ/tail), ζ the share of losses beyond the threshold; β follows from the figure.
  */
 export type TailConstraint = {
   readonly figure: 'quantile' | 'shortfall';
@@ -14,7 +13,7 @@ export type TailConstraint = {
   readonly distance: number;
 };
 
-/** The highest point under a constraint, and how the height changes with the constraint's own numbers. */
+/** The highest point under a constraint in (xi, ln depth), and how the height changes with the constraint's own numbers. */
 export type ConstrainedTail = {
   readonly point: Float64Array;
   readonly value: number;
@@ -22,34 +21,41 @@ export type ConstrainedTail = {
   readonly inLogTail: number;
 };
 
-/** Mutable, because a climb fills it at every step. */
-type Distance = { value: number; inShape: number; inScale: number; mixed: number; twiceScale: number };
-
-/** How far the quantile lies beyond the threshold in units of β, with its derivatives in xi and ln β. */
-const fillDistance = (
-  { figure, distance }: TailConstraint,
-  shape: number,
-  logScale: number,
-  into: Distance,
-): void => {
-  const scaled = distance * Math.exp(-logScale);
-  if (figure === 'quantile') {
-    into.value = scaled;
-    into.inShape = 0;
-    into.inScale = -scaled;
-    into.mixed = 0;
-    into.twiceScale = scaled;
-    return;
-  }
-  const share = scaled * (1 - shape);
-  into.value = share - 1;
-  into.inShape = -scaled;
-  into.inScale = -share;
-  into.mixed = scaled;
-  into.twiceScale = share;
+/** ln β with its derivatives in xi and the depth. Mutable, because a climb fills it at every step. */
+type LogScale = {
+  value: number;
+  inShape: number;
+  inDepth: number;
+  twiceShape: number;
+  mixed: number;
+  twiceDepth: number;
 };
 
-/** Slopes of the binomial log-likelihood of the count beyond the threshold in the logarithm of its chance. */
+/** β = distance/E for a quantile and distance·(1 − xi)/(E + 1) for a shortfall, E = (e^{xi·depth} − 1)/xi. */
+const fillLogScale = (
+  { figure, distance }: TailConstraint,
+  shape: number,
+  growth: ExponentialGrowth,
+  into: LogScale,
+): void => {
+  const isShortfall = figure === 'shortfall';
+  const divisor = growth.value + (isShortfall ? 1 : 0);
+  const inShape = growth.inRate / divisor;
+  const inDepth = growth.inTime / divisor;
+  into.value = Math.log(distance / divisor);
+  into.inShape = -inShape;
+  into.inDepth = -inDepth;
+  into.twiceShape = inShape * inShape - growth.twiceRate / divisor;
+  into.mixed = inShape * inDepth - growth.rateAndTime / divisor;
+  into.twiceDepth = inDepth * inDepth - growth.twiceTime / divisor;
+  if (!isShortfall) return;
+  const toOne = 1 - shape;
+  into.value += Math.log(toOne);
+  into.inShape -= 1 / toOne;
+  into.twiceShape -= 1 / (toOne * toOne);
+};
+
+/** The binomial log-likelihood of the count beyond the threshold, with its slopes in the logarithm of its chance. */
 type Binomial = { value: number; slope: number; curvature: number };
 
 const fillBinomial = (count: number, beyond: number, logShare: number, into: Binomial): void => {
@@ -60,66 +66,83 @@ const fillBinomial = (count: number, beyond: number, logShare: number, into: Bin
   into.curvature = (-(count - beyond) * odds) / (1 - share);
 };
 
-type Workspace = { readonly distance: Distance; readonly binomial: Binomial };
+type Workspace = {
+  readonly growth: ExponentialGrowth;
+  readonly logScale: LogScale;
+  readonly binomial: Binomial;
+  readonly point: Float64Array;
+  readonly gradient: Float64Array;
+  readonly hessian: Float64Array;
+};
 
-/** Adds the binomial part to the derivatives of the Pareto part, by the chain rule through ln ζ = ln tail + depth. */
-const addBinomial = (
-  shape: number,
-  { distance: d, binomial }: Workspace,
+const createWorkspace = (): Workspace => ({
+  growth: { value: 0, inRate: 0, inTime: 0, twiceRate: 0, rateAndTime: 0, twiceTime: 0 },
+  logScale: { value: 0, inShape: 0, inDepth: 0, twiceShape: 0, mixed: 0, twiceDepth: 0 },
+  binomial: { value: 0, slope: 0, curvature: 0 },
+  point: new Float64Array(2),
+  gradient: new Float64Array(2),
+  hessian: new Float64Array(4),
+});
+
+/** From the Pareto derivatives in (xi, ln β) and the binomial ones to those in (xi, ln depth), by the chain rule. */
+const fillDerivatives = (
+  work: Workspace,
+  depth: number,
   gradient: Float64Array,
   hessian: Float64Array,
 ): void => {
-  const x = shape * d.value;
-  const onePlus = 1 + x;
-  const bend = logarithmCurvature(x, Math.log1p(x));
-  const square = d.value * d.value;
-  const inDistance = 1 / onePlus;
-  const twiceDistance = -shape / (onePlus * onePlus);
-  const inShapeAlone = square * bend;
-  const twiceShapeAlone = square * d.value * logarithmCurvatureSlope(x, bend);
-  const mixedAlone = -d.value / (onePlus * onePlus);
-  const inShape = inDistance * d.inShape + inShapeAlone;
-  const inScale = inDistance * d.inScale;
-  const twiceShape = twiceDistance * d.inShape * d.inShape + 2 * mixedAlone * d.inShape + twiceShapeAlone;
-  const mixed = twiceDistance * d.inShape * d.inScale + inDistance * d.mixed + mixedAlone * d.inScale;
-  const twiceScale = twiceDistance * d.inScale * d.inScale + inDistance * d.twiceScale;
-  const { slope, curvature } = binomial;
-  gradient[0] = (gradient[0] as number) + slope * inShape;
-  gradient[1] = (gradient[1] as number) + slope * inScale;
-  hessian[0] = (hessian[0] as number) + curvature * inShape * inShape + slope * twiceShape;
-  const cross = (hessian[1] as number) + curvature * inShape * inScale + slope * mixed;
-  hessian[1] = cross;
-  hessian[2] = cross;
-  hessian[3] = (hessian[3] as number) + curvature * inScale * inScale + slope * twiceScale;
+  const { logScale: s, binomial } = work;
+  const inScale = work.gradient[1] as number;
+  const mixedScale = work.hessian[1] as number;
+  const twiceScale = work.hessian[3] as number;
+  const inDepth = inScale * s.inDepth + binomial.slope;
+  const twiceDepth = twiceScale * s.inDepth * s.inDepth + inScale * s.twiceDepth + binomial.curvature;
+  const mixed = depth * (mixedScale * s.inDepth + twiceScale * s.inShape * s.inDepth + inScale * s.mixed);
+  gradient[0] = (work.gradient[0] as number) + inScale * s.inShape;
+  gradient[1] = depth * inDepth;
+  hessian[0] =
+    (work.hessian[0] as number) +
+    2 * mixedScale * s.inShape +
+    twiceScale * s.inShape * s.inShape +
+    inScale * s.twiceShape;
+  hessian[1] = mixed;
+  hessian[2] = mixed;
+  hessian[3] = depth * (depth * twiceDepth + inDepth);
 };
 
 const constrainedObjective =
   (maximum: PeaksMaximum, constraint: TailConstraint, work: Workspace): SmoothObjective =>
-  (point, gradient, hessian) => {
-    const value = maximum.gpd.objective(point, gradient, hessian);
-    if (value === Number.NEGATIVE_INFINITY) return value;
-    const shape = point[0] as number;
-    fillDistance(constraint, shape, point[1] as number, work.distance);
-    if (!(1 + shape * work.distance.value > 0)) return Number.NEGATIVE_INFINITY;
-    const logShare = Math.log(constraint.tail) + depthAt(shape, work.distance.value);
+  (coordinates, gradient, hessian) => {
+    const shape = coordinates[0] as number;
+    const depth = Math.exp(coordinates[1] as number);
+    const logShare = Math.log(constraint.tail) + depth;
     if (!(logShare < 0)) return Number.NEGATIVE_INFINITY;
+    fillExponentialGrowth(shape, depth, work.growth);
+    fillLogScale(constraint, shape, work.growth, work.logScale);
+    work.point[0] = shape;
+    work.point[1] = work.logScale.value;
+    const value = maximum.gpd.objective(work.point, work.gradient, work.hessian);
+    if (!Number.isFinite(value)) return Number.NEGATIVE_INFINITY;
     fillBinomial(maximum.count, maximum.beyond, logShare, work.binomial);
-    addBinomial(shape, work, gradient, hessian);
+    fillDerivatives(work, depth, gradient, hessian);
     return value + work.binomial.value;
   };
 
 /** Just above the shape at which the likelihood stops having a highest point, and far above any that data show. */
 const lowestShape = -0.99;
 const highestShape = 10;
+/** ES exists below xi = 1 only. */
+const highestShortfallShape = 1 - 1e-9;
 const tolerance = 1e-7;
 const maxSteps = 100;
+/** A tail of this shape reaches past every loss, so a climb can start there when it can start nowhere nearer. */
+const safeShape = 0.05;
 
-/** The same shape with β such that the share beyond the threshold is the observed one, where there is such a β. */
-const scaledStart = (maximum: PeaksMaximum, constraint: TailConstraint, shape: number): Float64Array => {
-  const { figure, tail, distance } = constraint;
-  const beyond = quantileBeyond(shape, Math.log(maximum.beyond / maximum.count / tail));
-  const scale = figure === 'quantile' ? distance / beyond : (distance * (1 - shape)) / (beyond + 1);
-  return Float64Array.of(shape, Math.log(scale));
+/** The shape of `near` with the observed share beyond the threshold; `near` itself; a shape that always allows a start. */
+const startsNear = (maximum: PeaksMaximum, { tail }: TailConstraint, near: Float64Array): Float64Array[] => {
+  const depth = Math.log(maximum.beyond / maximum.count / tail);
+  const logDepth = depth > 0 ? Math.log(depth) : (near[1] as number);
+  return [Float64Array.of(near[0] as number, logDepth), near, Float64Array.of(safeShape, logDepth)];
 };
 
 /** Climbs under the constraint from the neighbourhood of `near`; null where no climb reaches its rule. */
@@ -128,28 +151,23 @@ export const maximisePeaksUnder = (
   constraint: TailConstraint,
   near: Float64Array,
 ): ConstrainedTail | null => {
-  const work: Workspace = {
-    distance: { value: 0, inShape: 0, inScale: 0, mixed: 0, twiceScale: 0 },
-    binomial: { value: 0, slope: 0, curvature: 0 },
-  };
+  const work = createWorkspace();
   const objective = constrainedObjective(maximum, constraint, work);
+  const highest = constraint.figure === 'quantile' ? highestShape : highestShortfallShape;
   const settings = {
     lower: Float64Array.of(lowestShape, Number.NEGATIVE_INFINITY),
-    upper: Float64Array.of(constraint.figure === 'quantile' ? highestShape : 1, Number.POSITIVE_INFINITY),
+    upper: Float64Array.of(highest, Number.POSITIVE_INFINITY),
     tolerance,
     maxSteps,
   };
-  for (const start of [scaledStart(maximum, constraint, near[0] as number), near]) {
-    if (!Number.isFinite(start[1] as number)) continue;
+  for (const start of startsNear(maximum, constraint, near)) {
     const climb = maximiseByNewton(objective, start, settings);
     if (!climb.converged) continue;
     const value = objective(climb.point, new Float64Array(2), new Float64Array(4));
-    const perDistance = -work.distance.inScale / constraint.distance;
-    const atQuantile = 1 + (climb.point[0] as number) * work.distance.value;
     return {
       point: climb.point,
       value,
-      inDistance: constraint.distance === 0 ? 0 : (work.binomial.slope * perDistance) / atQuantile,
+      inDistance: (work.gradient[1] as number) / constraint.distance,
       inLogTail: work.binomial.slope,
     };
   }

@@ -25,7 +25,7 @@ export const gpdLogLikelihood =
       const logarithm = Math.log1p(x);
       const bend = logarithmCurvature(x, logarithm);
       const share = u / onePlus;
-      loss += x === 0 ? u : ((1 + shape) * logarithm) / shape;
+      loss += (1 + shape) * (Math.abs(x) < 1e-17 ? u : logarithm / shape);
       inScale += (1 + shape) * share;
       inShape -= u * u * bend + share;
       twiceScale -= ((1 + shape) * share) / onePlus;

@@ -31,17 +31,25 @@ const bothEnds = (reach: number, search: Search): PeaksEnds => {
   return { lower: towards(-1, search.bounds[0]), upper: towards(1, search.bounds[1]) };
 };
 
-/** Climbs under one constraint after another, each from where the last one ended. */
+/** Climbs under one constraint after another, each from where the last one ended, or from the fit where that fails. */
 const followConstraint = (maximum: PeaksMaximum) => {
-  let near = maximum.gpd.point;
+  let last: Float64Array | null = null;
   return (constraint: TailConstraint): ConstrainedTail | null => {
+    const depth = Math.max(depthOf(maximum, constraint.tail), leastDepth);
+    const fitted = Float64Array.of(maximum.gpd.fit.shape, Math.log(depth));
     const reached =
-      maximisePeaksUnder(maximum, constraint, near) ??
-      (near === maximum.gpd.point ? null : maximisePeaksUnder(maximum, constraint, maximum.gpd.point));
-    if (reached !== null) near = reached.point;
+      (last === null ? null : maximisePeaksUnder(maximum, constraint, last)) ??
+      maximisePeaksUnder(maximum, constraint, fitted);
+    if (reached !== null) last = reached.point;
     return reached;
   };
 };
+
+/** How far a level lies beyond the threshold: ln(ζ/tail), ζ the observed share beyond it. */
+const depthOf = ({ count, beyond }: PeaksMaximum, tail: number): number => Math.log(beyond / count / tail);
+
+/** Where a search must start for a chance that is larger than the observed share. */
+const leastDepth = 0.1;
 
 /** Range in which xi is profiled: above −1, where the likelihood of a given xi still has a highest point. */
 const profiledShapes = [-0.95, 5] as const;
@@ -78,7 +86,8 @@ export const shapeEnds = ({ gpd }: PeaksMaximum, reach: number): PeaksEnds => {
   });
 };
 
-const depthOf = ({ count, beyond }: PeaksMaximum, tail: number): number => Math.log(beyond / count / tail);
+/** A distance in mean excesses that counts as none. */
+const leastDistance = 1e-6;
 
 const distanceEnds = (
   maximum: PeaksMaximum,
@@ -101,7 +110,7 @@ const distanceEnds = (
     estimate,
     highest: maximum.value,
     roughError: (scale * (1 + inScales)) / Math.sqrt(maximum.beyond),
-    bounds: [0, boundedAbove ? Number.POSITIVE_INFINITY : estimate],
+    bounds: [leastDistance, boundedAbove ? Number.POSITIVE_INFINITY : estimate],
   });
 };
 
@@ -130,8 +139,8 @@ export const shortfallEnds = (
     boundedAbove,
   );
 
-/** The logarithm of a chance below this is that of 0 in a double. */
-export const leastLogTail = -690;
+/** ln of 1e-12, below which a chance counts as 0: nearer to the end of a short tail its distance from it loses its digits. */
+const leastLogTail = Math.log(1e-12);
 
 /** Ends of the logarithm of the chance of a loss `distance` mean excesses beyond the threshold. */
 export const logTailEnds = (
