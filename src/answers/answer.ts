@@ -1,9 +1,12 @@
 import type { PriceAdjustment } from '../terms/prices.ts';
 import type { ReturnType } from '../terms/returns.ts';
+import type { BacktestFigures } from './backtest/figures.ts';
 import type { ClaimFigures } from './claim/figures.ts';
 import type { CompareFigures } from './compare/figures.ts';
 import type { MeanFigures, RatioFigures, VolFigures } from './interval/figures.ts';
 import type { NeedFigures } from './need/figures.ts';
+import type { ShapeFigures } from './shape/figures.ts';
+import type { BeyondFigures, TailFigures } from './tail/figures.ts';
 
 /** Raised whenever a figure is computed differently than before, so that recorded answers can be told apart. */
 export const methodVersion = '1';
@@ -64,7 +67,22 @@ export type ClaimAnswer = AnswerOf<'claim', 'claim', ClaimFigures>;
 export type NeedAnswer = AnswerOf<'need', 'need', NeedFigures>;
 export type CompareAnswer = AnswerOf<'compare', 'compare', CompareFigures>;
 
-export type Answer = MeanAnswer | VolAnswer | RatioAnswer | ClaimAnswer | NeedAnswer | CompareAnswer;
+export type TailAnswer = AnswerOf<'tail', 'tail', TailFigures>;
+export type TailBeyondAnswer = AnswerOf<'tail beyond', 'tail', BeyondFigures>;
+export type ShapeAnswer = AnswerOf<'shape', 'shape', ShapeFigures>;
+export type BacktestAnswer = AnswerOf<'backtest', 'backtest', BacktestFigures>;
+
+export type Answer =
+  | MeanAnswer
+  | VolAnswer
+  | RatioAnswer
+  | ClaimAnswer
+  | NeedAnswer
+  | CompareAnswer
+  | TailAnswer
+  | TailBeyondAnswer
+  | ShapeAnswer
+  | BacktestAnswer;
 
 /** What one question is answered with: one answer, or one for each pair where several tickers are compared. */
 export type Answers = readonly [Answer, ...Answer[]];

@@ -1,10 +1,14 @@
 import type { Answer, Answers, CompareAnswer } from '../answers/answer.ts';
+import { backtestReply } from './compose/backtest.ts';
 import { claimReply } from './compose/claim.ts';
 import { compareManyReply, compareReply } from './compose/compare.ts';
 import { intervalMeanReply } from './compose/intervalMean.ts';
 import { intervalRatioReply } from './compose/intervalRatio.ts';
 import { intervalVolReply } from './compose/intervalVol.ts';
 import { needReply } from './compose/need.ts';
+import { shapeReply } from './compose/shape.ts';
+import { tailReply } from './compose/tail.ts';
+import { tailBeyondReply } from './compose/tailBeyond.ts';
 import { type Reply, reply, warningsShown } from './reply.ts';
 
 /** The reply to one answer, whatever its verb. */
@@ -22,6 +26,14 @@ export const answerReply = (answer: Answer): Reply => {
       return needReply(answer);
     case 'compare':
       return compareReply(answer);
+    case 'tail':
+      return tailReply(answer);
+    case 'tail beyond':
+      return tailBeyondReply(answer);
+    case 'shape':
+      return shapeReply(answer);
+    case 'backtest':
+      return backtestReply(answer);
   }
 };
 

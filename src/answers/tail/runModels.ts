@@ -1,0 +1,52 @@
+import type { TailModel } from '../../questions/question.ts';
+import { filteredBeyond } from '../../stats/tails/filtered/filteredBeyond.ts';
+import { filteredKinds } from '../../stats/tails/filtered/filteredKinds.ts';
+import { type FilteredTailFigures, filteredTail } from '../../stats/tails/filtered/filteredTail.ts';
+import { historicalBeyond } from '../../stats/tails/historicalBeyond.ts';
+import { type HistoricalTailFigures, historicalTail } from '../../stats/tails/historicalTail.ts';
+import { normalBeyond } from '../../stats/tails/normalBeyond.ts';
+import { type NormalTailFigures, normalTail } from '../../stats/tails/normalTail.ts';
+import { peaksBeyond } from '../../stats/tails/peaks/peaksBeyond.ts';
+import { type PeaksTailFigures, peaksTail } from '../../stats/tails/peaks/peaksTail.ts';
+import { studentBeyond } from '../../stats/tails/studentBeyond.ts';
+import { type StudentTailFigures, studentTail } from '../../stats/tails/studentTail.ts';
+import type { BeyondFigures, BeyondInput, TailInput } from '../../stats/tails/tailFigures.ts';
+import type { Result } from '../../terms/result.ts';
+
+export type AnyTailFigures =
+  | HistoricalTailFigures
+  | NormalTailFigures
+  | StudentTailFigures
+  | FilteredTailFigures
+  | PeaksTailFigures;
+
+export type RanModel<Figures> = { readonly model: TailModel; readonly result: Result<Figures> };
+
+/** Each model by its name; filtered can be two, where its two kinds meet. */
+const tailModels: Readonly<Record<TailModel, (input: TailInput) => readonly Result<AnyTailFigures>[]>> = {
+  historical: (input) => [historicalTail(input)],
+  normal: (input) => [normalTail(input)],
+  student: (input) => [studentTail(input)],
+  filtered: (input) => filteredKinds(input.returns.length).map((kind) => filteredTail(input, { kind })),
+  peaks: (input) => [peaksTail(input)],
+};
+
+const beyondModels: Readonly<Record<TailModel, (input: BeyondInput) => Result<BeyondFigures>>> = {
+  historical: historicalBeyond,
+  normal: normalBeyond,
+  student: (input) => studentBeyond(input),
+  filtered: (input) => filteredBeyond(input),
+  peaks: peaksBeyond,
+};
+
+export const runTails = (
+  models: readonly TailModel[],
+  input: TailInput,
+): readonly RanModel<AnyTailFigures>[] =>
+  models.flatMap((model) => tailModels[model](input).map((result) => ({ model, result })));
+
+export const runBeyond = (
+  models: readonly TailModel[],
+  input: BeyondInput,
+): readonly RanModel<BeyondFigures>[] =>
+  models.map((model) => ({ model, result: beyondModels[model](input) }));
