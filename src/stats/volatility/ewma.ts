@@ -1,7 +1,10 @@
-import type { FilteredReturns } from './garchPath.ts';
+import { type FilteredReturns, filterByGarch, type GarchProcess } from './garchPath.ts';
 
 /** Weight of yesterday's variance. Trade practice; it is fitted to nothing here. */
 export const ewmaDecay = 0.94;
+
+/** The exponentially weighted mean as a process without a mean and without a long-run variance. */
+export const ewmaProcess: GarchProcess = { mu: 0, omega: 0, alpha: 0.06, beta: ewmaDecay };
 
 /**
  * How volatile was each day by an exponentially weighted mean of squares, and how volatile will the next one be?
@@ -12,15 +15,4 @@ export const ewmaDecay = 0.94;
  * Source: trade practice for the recursion, the weight and the zero mean; start from the window's mean square is ours.
  * Example: filterByEwma(Float64Array.of(0.01, -0.01)).nextVariance is 0.0001.
  */
-export const filterByEwma = (returns: Float64Array): FilteredReturns => {
-  const residuals = new Float64Array(returns.length);
-  let variance = 0;
-  for (let day = 0; day < returns.length; day += 1) variance += (returns[day] as number) ** 2;
-  variance /= returns.length;
-  for (let day = 0; day < returns.length; day += 1) {
-    const value = returns[day] as number;
-    residuals[day] = value / Math.sqrt(variance);
-    variance = ewmaDecay * variance + (1 - ewmaDecay) * value * value;
-  }
-  return { mu: 0, residuals, nextVariance: variance };
-};
+export const filterByEwma = (returns: Float64Array): FilteredReturns => filterByGarch(returns, ewmaProcess);

@@ -7,6 +7,7 @@ import { parameter } from './internal/garchLikelihood.ts';
 import { noClustering, refuseMaximum } from './internal/garchOutcome.ts';
 import {
   climbNear,
+  climbResample,
   fitConstantVariance,
   type Innovations,
   pointOf,
@@ -135,14 +136,14 @@ export const fitGarch = (returns: Float64Array, options: GarchOptions = {}): Res
 };
 
 /**
- * The fit again, to returns resampled from `near`: the climb from there alone, or the constant variance alone where
- * `near` found no clustering. Null where it does not finish inside the range that {@link fitGarch} reports.
+ * The fit again, to returns resampled from `near`: the climb from there alone, to 1e-4 standard errors, or the constant
+ * variance alone where `near` found no clustering. Null where it does not finish inside the range that {@link fitGarch} reports.
  */
 export const refitGarch = (returns: Float64Array, near: GarchFit): GarchFit | null => {
   const { innovations } = near;
   const sample = standardise(returns);
   const maximum = near.clustering
-    ? climbNear(sample.values, pointNear(sample, near, innovations), innovations)
+    ? climbResample(sample.values, pointNear(sample, near, innovations), innovations)
     : fitConstantVariance(sample.values, innovations);
   const chosen = noClustering(maximum) ? fitConstantVariance(sample.values, innovations) : maximum;
   return refuseMaximum(chosen, returns.length) === null ? describe(sample, chosen, innovations) : null;

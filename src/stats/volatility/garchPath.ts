@@ -18,7 +18,7 @@ export type FilteredReturns = {
 /**
  * How volatile was each day under a known GARCH(1,1) process, and how volatile will the next one be?
  * Convention: h_t = ω + α·e²_{t−1} + β·h_{t−1} with e_t = r_t − mu; before the first day e²_0 = h_0 = mean (r − mu)².
- * Domain: at least 1 return; omega > 0, alpha and beta ≥ 0.
+ * Domain: at least 1 return; omega, alpha and beta ≥ 0, not all 0.
  * Units: returns as decimal fractions; omega and the next day's variance in their square; residuals have none.
  * Edges: alpha = beta = 0 is a constant variance omega.
  * Source: Bollerslev 1986, Journal of Econometrics 31, 307-327; start as in Fiorentini, Calzolari & Panattoni 1996.
@@ -36,4 +36,29 @@ export const filterByGarch = (returns: Float64Array, process: GarchProcess): Fil
     residuals[day] = deviation / Math.sqrt(variance);
   }
   return { mu, residuals, nextVariance: omega + alpha * squared + beta * variance };
+};
+
+/**
+ * Which returns would the same process have made of other residuals?
+ * Convention: the recursion of {@link filterByGarch} run forward, r_t = mu + √h_t·z_t, from the presample variance of `returns`.
+ * Domain, units, source: as there. `picks` are places in `residuals`, one for each day.
+ * Example: picked in their own order the residuals give the returns back.
+ */
+export const rebuildReturns = (
+  returns: Float64Array,
+  process: GarchProcess,
+  residuals: Float64Array,
+  picks: Uint32Array,
+): Float64Array => {
+  const { mu, omega, alpha, beta } = process;
+  const rebuilt = new Float64Array(picks.length);
+  let variance = presampleVariance(returns, mu);
+  let squared = variance;
+  for (let day = 0; day < picks.length; day += 1) {
+    variance = omega + alpha * squared + beta * variance;
+    const deviation = Math.sqrt(variance) * (residuals[picks[day] as number] as number);
+    squared = deviation * deviation;
+    rebuilt[day] = mu + deviation;
+  }
+  return rebuilt;
 };

@@ -21,8 +21,8 @@ const probabilityAt = (end: ProfileEnd, atBound: number): number | null => {
  * below the threshold the share of days, with its exact binomial interval.
  * Domain: as peaksTail, without a level; a finite threshold x.
  * Units: returns and threshold as decimal fractions (a loss of 4% is 0.04); probabilities in 0..1.
- * Edges: beyond the end of a short tail (xi < 0) the probability is 0 and the mean return time null; a search that fails
- * leaves its end null with a note. Returns are taken as independent.
+ * Edges: beyond the end of a short tail (xi < 0) the probability is 0 and the mean return time null; an upper end of 1e-12
+ * says that no larger chance will do. A search that fails leaves its end null with a note. Returns are taken as independent.
  * Source: McNeil & Frey 2000, Journal of Empirical Finance 7, 271-300; profile likelihood: Venzon & Moolgavkar 1988,
  * Applied Statistics 37, 87-94.
  * Example: with u 2%, β 1%, xi 0.2 and ζ a tenth, a loss of at least 4% has probability 0.0186, once in 54 sessions.

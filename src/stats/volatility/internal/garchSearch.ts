@@ -13,7 +13,9 @@ const mostLogOmega = Math.log(1e3);
 /** Beyond this sum of α and β the likelihood is not looked at: the variance would explode within the window. */
 const largestPersistence = 1.2;
 
+/** A reported fit is finished at this |gradient|·standard error; a resample is lost in its own noise far above it. */
 const tolerance = 1e-8;
+const resampleTolerance = 1e-4;
 /** Enough for a climb with a clear summit; only the highest of them, if it needs more, is followed further. */
 const stepsToExplore = 40;
 const stepsToFinish = 300;
@@ -48,6 +50,7 @@ const climbFrom = (
   innovations: Innovations,
   constantVariance: boolean,
   maxSteps: number,
+  stopAt = tolerance,
 ): NewtonMaximum =>
   maximiseByNewton(
     (point, gradient, hessian) =>
@@ -64,7 +67,7 @@ const climbFrom = (
         constantVariance ? 0 : 1,
         highestInverseNu(innovations),
       ),
-      tolerance,
+      tolerance: stopAt,
       maxSteps,
     },
   );
@@ -99,6 +102,13 @@ export const climbNear = (
   start: Float64Array,
   innovations: Innovations,
 ): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore);
+
+/** The same for a resample of the returns that were fitted at `start`. */
+export const climbResample = (
+  returns: Float64Array,
+  start: Float64Array,
+  innovations: Innovations,
+): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore, resampleTolerance);
 
 /** Searches from every promising start. `returns` have mean 0 and mean square 1. */
 export const searchGarch = (returns: Float64Array, innovations: Innovations): GarchSearch => {

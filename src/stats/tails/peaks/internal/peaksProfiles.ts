@@ -156,9 +156,16 @@ export const logTailEnds = (
       return reached === null ? null : { value: reached.value, slope: reached.inLogTail };
     };
   };
+  const estimate = Math.max(logTail, leastLogTail);
+  if (logTail < leastLogTail) {
+    // Beyond the end of a short tail the smallest chance that counts may already be too unlikely.
+    const least = start()(leastLogTail);
+    if (least !== null && 2 * (maximum.value - least.value) >= reach * reach)
+      return { lower: { kind: 'bound' }, upper: { kind: 'end', figure: leastLogTail } };
+  }
   return bothEnds(reach, {
     start,
-    estimate: Math.max(logTail, leastLogTail),
+    estimate,
     highest: maximum.value,
     roughError: 0.5,
     bounds: [leastLogTail, 0],
