@@ -20,7 +20,7 @@ const differencesOf = (before: PriceSeries, after: PriceSeries): Differences => 
   const firstCommon = after.days[0] ?? Number.POSITIVE_INFINITY;
   let old = before.days.findIndex((day) => day >= firstCommon);
   if (old < 0) old = before.days.length;
-  const firstOld = before.days[old] ?? Number.POSITIVE_INFINITY;
+  const firstOld = before.days[0] ?? Number.POSITIVE_INFINITY;
   let now = after.days.findIndex((day) => day >= firstOld);
   let from: Day | null = null;
   let dayCount = 0;
