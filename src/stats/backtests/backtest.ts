@@ -6,7 +6,8 @@ import type { TailModelName } from '../tails/tailFigures.ts';
 import { judgeModel, type ModelVerdict } from './judgedModel.ts';
 import { type Standing, standings } from './league.ts';
 import type { RollingSpan } from './rolling/rollingForecaster.ts';
-import { chosenDays, type WalkedModel, type WalkListener, walk } from './walk.ts';
+import type { DrawBeyond } from './shortfall.ts';
+import { chosenDays, type Walk, type WalkedModel, type WalkListener, walk } from './walk.ts';
 
 export type BacktestQuestion = RollingSpan & {
   readonly models: readonly TailModelName[];
@@ -51,25 +52,16 @@ const refuseQuestion = (question: BacktestQuestion): Refusal | null => {
   return null;
 };
 
-/** The refusal of a model that left out too many days, in the words of its first refusal. */
-const refuseGaps = ({ refusedDays, firstRefusal }: WalkedModel, dayCount: number): Problem | null =>
-  firstRefusal !== null && refusedDays > mostRefusedShare * dayCount
-    ? {
-        ...firstRefusal,
-        message: `The model gave no figure on ${refusedDays} of ${dayCount} days, which is too many to judge it. On the first of them: ${firstRefusal.message}`,
-      }
-    : null;
-
-type Walked = { readonly model: TailModelName; readonly outcome: WalkedModel | Problem };
-
-const withoutGappy = (model: TailModelName, started: Result<WalkedModel>, dayCount: number): Walked => {
-  if (!started.ok) return { model, outcome: started.problem };
-  return { model, outcome: refuseGaps(started.value, dayCount) ?? started.value };
+/** Refuses a model that left out too many days, in the words of its first refusal. */
+const withoutGaps = ({ model, outcome }: Walk, dayCount: number): Walk => {
+  if (!outcome.ok) return { model, outcome };
+  const { refusedDays, firstRefusal } = outcome.value;
+  if (firstRefusal === null || refusedDays <= mostRefusedShare * dayCount) return { model, outcome };
+  const message = `The model gave no figure on ${refusedDays} of ${dayCount} days, which is too many to judge it. On the first of them: ${firstRefusal.message}`;
+  return { model, outcome: refuse({ ...firstRefusal, message }) };
 };
 
-const isWalked = (outcome: WalkedModel | Problem): outcome is WalkedModel => 'forecaster' in outcome;
-
-const verdictOf = (
+const verdictOn = (
   walked: WalkedModel,
   question: BacktestQuestion,
   standing: Standing | null,
@@ -77,7 +69,7 @@ const verdictOf = (
   const { tailLevel, streams, replicates = defaultReplicates } = question;
   const { forecaster, figured, refusedDays, firstRefusal } = walked;
   const forecasts = chosenDays(walked, question, (place) => figured[place] === 1);
-  const drawBeyond = (place: number, random: Parameters<typeof forecaster.drawBeyond>[1]) =>
+  const drawBeyond: DrawBeyond = (place, random) =>
     forecaster.drawBeyond(forecasts.days[place] as number, random);
   return {
     model: forecaster.model,
@@ -118,16 +110,16 @@ export const backtest = (question: BacktestQuestion): Result<Backtest> | null =>
   const { models, dayCount, listener = {} } = question;
   const started = walk(models, question, listener);
   if (started === null) return null;
-  const outcomes = started.map((one, index) => withoutGappy(models[index] as TailModelName, one, dayCount));
-  const walked = outcomes.flatMap(({ outcome }) => (isWalked(outcome) ? [outcome] : []));
+  const walks = started.map((one) => withoutGaps(one, dayCount));
+  const walked = walks.flatMap(({ outcome }) => (outcome.ok ? [outcome.value] : []));
   const { commonDays, standing } = standingsOf(walked, question);
   const verdicts: (ModelVerdict | ModelRefused)[] = [];
-  for (const { model, outcome } of outcomes) {
+  for (const { model, outcome } of walks) {
     if (listener.cancelled?.() === true) return null;
     verdicts.push(
-      isWalked(outcome)
-        ? verdictOf(outcome, question, standing[walked.indexOf(outcome)] ?? null)
-        : { model, ok: false, problem: outcome },
+      outcome.ok
+        ? verdictOn(outcome.value, question, standing[walked.indexOf(outcome.value)] ?? null)
+        : { model, ok: false, problem: outcome.problem },
     );
   }
   return succeed({ models: verdicts, commonDays });

@@ -66,14 +66,16 @@ const forecastDay = (walked: WalkedModel, day: number, place: number, into: DayF
   walked.expectedShortfalls[place] = into.expectedShortfall ?? Infinity;
 };
 
+export type Walk = { readonly model: TailModelName; readonly outcome: Result<WalkedModel> };
+
 /** One pass over the days, every model on each; null where the listener ended it. A model that cannot start is refused. */
 export const walk = (
   models: readonly TailModelName[],
   span: RollingSpan,
   listener: WalkListener,
-): readonly Result<WalkedModel>[] | null => {
-  const started = models.map((model) => startModel(model, span));
-  const walking = started.flatMap((one) => (one.ok ? [one.value] : []));
+): readonly Walk[] | null => {
+  const walks = models.map((model) => ({ model, outcome: startModel(model, span) }));
+  const walking = walks.flatMap(({ outcome }) => (outcome.ok ? [outcome.value] : []));
   const into: DayForecast = { valueAtRisk: 0, expectedShortfall: 0 };
   for (let place = 0; place < span.dayCount; place += 1) {
     if (place % daysBetweenReports === 0) {
@@ -83,7 +85,7 @@ export const walk = (
     for (const walked of walking) forecastDay(walked, span.firstDay + place, place, into);
   }
   listener.progress?.(span.dayCount, span.dayCount);
-  return started;
+  return walks;
 };
 
 /** The forecasts of the days that pass, beside the losses that then came. */

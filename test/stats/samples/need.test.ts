@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import { normalQuantile } from '../../../src/stats/distributions/normal.ts';
 import { need } from '../../../src/stats/samples/need.ts';
 import { returnsForHalfWidth } from '../../../src/stats/samples/returnsForHalfWidth.ts';
 import { returnsForPower } from '../../../src/stats/samples/returnsForPower.ts';
@@ -6,6 +7,7 @@ import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level, level95 } from '../levels.ts';
+import { fixtureJson } from '../readFixture.ts';
 
 const power = level('0.8');
 
@@ -32,6 +34,26 @@ describe('returns for a half-width', () => {
 
 test('NIST/SEMATECH e-Handbook 7.2.2.2: one deviation, one-sided 5%, power 90%: 11', () => {
   expect(returnsForPower(1, level('0.9'), { level: level95, side: 'above' })).toBe(11);
+});
+
+type Cell = {
+  readonly alpha_two_sided: number;
+  readonly beta: number;
+  readonly shift_in_sd: number;
+  readonly formula: number;
+};
+const table = fixtureJson<{
+  readonly cases: readonly { readonly name: string; readonly cells: readonly Cell[] }[];
+}>('nist-handbook.json').cases.find(({ name }) => name === 'sample_size_table_two_sided');
+
+// The handbook's table (7.2.2.2) is the normal formula. The t test needs more, by about z²/2, and never less.
+test.each(table?.cells ?? [])('NIST sample sizes, $alpha_two_sided $beta $shift_in_sd', (cell) => {
+  const test95 = { level: level((1 - cell.alpha_two_sided).toFixed(3)), side: 'both' } as const;
+  const count = returnsForPower(cell.shift_in_sd, level((1 - cell.beta).toFixed(3)), test95);
+  const shift = normalQuantile(cell.alpha_two_sided / 2) ** 2 / 2;
+  expect(count).toBeGreaterThanOrEqual(cell.formula);
+  // The next term of the expansion is of the order of z⁴/n and small counts feel it most: 2 returns.
+  expect(count).toBeLessThan(cell.formula + shift + 3);
 });
 
 describe('need', () => {
