@@ -60,6 +60,23 @@ describe('a post', () => {
     expect(identifiersOf(platform.posts.all)).toEqual([{ id: 'delivery-1' }]);
   });
 
+  it('is not taken for found where another app has posted under the same id', async () => {
+    const stage = await startBot();
+    const { platform } = stage;
+    const metadata = { event_type: 'leadsman_delivery', event_payload: { id: 'delivery-1' } };
+    platform.faults.next('chat.postMessage', { kind: 'dropped', accepted: false });
+    const question = platform.mention({ channel: 'C0DESK', text: 'interval KELP' });
+    const desk = platform.workspace.channels.get('C0DESK');
+    if (desk === undefined) throw new Error('no desk');
+    platform.workspace.say(desk, { user: 'U0OTHER', botId: 'B0OTHER', threadTs: question.ts, metadata });
+    await platform.time.timerSet(20_000);
+    platform.time.advance(20_000);
+    await platform.time.timerSet(15_000);
+    platform.time.advance(15_000);
+    await settled(stage, question);
+    expect(platform.posts.all).toHaveLength(1);
+  });
+
   it('is found on whichever page it stands, among the posts of others', async () => {
     const stage = await startBot();
     const { platform } = stage;
