@@ -60,3 +60,10 @@ const workingReply = (answer: Answer): Reply =>
 
 /** The working, posted beneath: the formula with this sample's numbers in it, step by step. */
 export const workingReplies = (answers: Answers): readonly Reply[] => answers.map(workingReply);
+
+/** The answer as data in the conversation: the reply's own words, then the figures as JSON. */
+export const jsonReply = (answers: Answers): Reply => {
+  const given = answersReply(answers);
+  const lines = answers.flatMap(({ figures }) => JSON.stringify(figures, null, 2).split('\n'));
+  return { ...given, table: null, passages: [{ head: 'Figures as JSON', lines }] };
+};

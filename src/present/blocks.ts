@@ -1,4 +1,4 @@
-import type { Button, Reply, Table } from './reply.ts';
+import type { Button, Passage, Reply, Table } from './reply.ts';
 import { furtherWarnings, inWords, shownWarnings } from './words.ts';
 
 /** The platform's plain text object: nothing in it is ever read as markup, a link, a mention or an emoji. */
@@ -34,6 +34,9 @@ const longest = {
   buttonValue: 2000,
 };
 
+/** A message holds 50 blocks; the parts around the passages take at most ten. */
+const mostPassageBlocks = 40;
+
 const emptyCell = '–';
 const zeroWidthJoiner = '\u200d';
 
@@ -53,6 +56,21 @@ const context = (texts: readonly string[]): Block => ({
   type: 'context',
   elements: texts.map((text) => plain(text, longest.contextText)),
 });
+
+/** Lines gathered into as few texts as the room of a section allows. */
+const gathered = (lines: readonly string[]): readonly string[] => {
+  const texts: string[] = [];
+  for (const line of lines) {
+    const last = texts.at(-1);
+    if (last !== undefined && last.length + 1 + line.length <= longest.sectionText)
+      texts[texts.length - 1] = `${last}\n${line}`;
+    else texts.push(line);
+  }
+  return texts;
+};
+
+const passageBlocks = ({ head, lines }: Passage): readonly Block[] =>
+  gathered([...(head === null ? [] : [head]), ...lines]).map(section);
 
 const cell = (text: string) => ({ type: 'raw_text' as const, text: text === '' ? emptyCell : text });
 
@@ -87,8 +105,7 @@ export const toBlocks = (reply: Reply): BlockMessage => {
   const further = furtherWarnings(reply);
   const blocks: Block[] = [section(reply.sentence)];
   if (reply.table !== null) blocks.push(tableBlock(reply.table));
-  for (const { head, lines } of reply.passages)
-    blocks.push(section([...(head === null ? [] : [head]), ...lines].join('\n')));
+  blocks.push(...reply.passages.flatMap(passageBlocks).slice(0, mostPassageBlocks));
   const warnings = shownWarnings(reply).map((warning) => `Caution: ${warning}`);
   if (warnings.length > 0) blocks.push(context(further === null ? warnings : [...warnings, further]));
   if (reply.quietLine !== null) blocks.push(context([reply.quietLine]));

@@ -1,4 +1,3 @@
-import { openFeed } from '../feed/openFeed.ts';
 import { answersToJson, problemToJson } from '../present/json.ts';
 import { toText } from '../present/text.ts';
 import { inWords } from '../present/words.ts';
@@ -9,6 +8,7 @@ import { type Arguments, readArguments } from './arguments.ts';
 import { computeInline } from './compute/inline.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
+import { feedOnce } from './feed.ts';
 import { settingsFor } from './settings.ts';
 
 const usage = 'npm run --silent ask -- [--config FILE] [--feed FILE] [--json] "QUESTION"';
@@ -48,11 +48,12 @@ const ask = async (asked: Arguments): Promise<number> => {
     );
   const reading = settingsFor(asked);
   if (!reading.ok) return refuseWith(reading.problems, asked.json);
-  const feed = await openFeed(reading.settings.feed);
+  const clock = { nowMs: Date.now };
+  const feed = await feedOnce(reading.settings, clock);
   const desk = createDesk({
     settings: reading.settings,
-    clock: { nowMs: Date.now },
-    snapshot: () => feed,
+    clock,
+    ...feed,
     compute: computeInline(),
   });
   const spoken = await createConverse(desk).ask({ text: question, place: 'terminal' });

@@ -2,11 +2,11 @@ import { answeredVerbs } from '../answers/answerQuestion.ts';
 import type { Settings } from '../config/schema.ts';
 import { createVocabulary } from '../questions/vocabulary.ts';
 import type { Clock } from '../terms/clock.ts';
+import type { FeedStatus } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 import type { Desk } from '../workspaces/converse.ts';
 import type { Compute } from './compute/compute.ts';
-import { feedStateOf, tickerStateOf } from './feedStates.ts';
 import { helpPageOf } from './helpPages.ts';
 import { dayAt } from './today.ts';
 
@@ -14,6 +14,7 @@ export type DeskParts = {
   readonly settings: Settings;
   readonly clock: Clock;
   readonly snapshot: () => Result<PriceSnapshot>;
+  readonly feedStatus: () => FeedStatus;
   readonly compute: Compute;
 };
 
@@ -26,14 +27,15 @@ const vocabularies = () => {
   const made = new WeakMap<PriceSnapshot, ReturnType<typeof createVocabulary>>();
   return (snapshot: PriceSnapshot | null) => {
     if (snapshot === null) return noVocabulary;
-    const known = made.get(snapshot) ?? createVocabulary(snapshot.tickers);
+    const known =
+      made.get(snapshot) ?? createVocabulary([...snapshot.tickers, ...snapshot.quarantined.keys()]);
     made.set(snapshot, known);
     return known;
   };
 };
 
 /** The desk as a conversation sees it, wired from settings, feed and machinery. */
-export const createDesk = ({ settings, clock, snapshot, compute }: DeskParts): Desk => {
+export const createDesk = ({ settings, clock, snapshot, feedStatus, compute }: DeskParts): Desk => {
   const vocabularyOf = vocabularies();
   const { periodsPerYear, smallestMeanThatMatters } = settings;
   return {
@@ -46,8 +48,8 @@ export const createDesk = ({ settings, clock, snapshot, compute }: DeskParts): D
     }),
     compute: (job, progress) =>
       compute.answer({ ...job, policy: { periodsPerYear, smallestMeanThatMatters } }, progress),
-    feedState: feedStateOf,
-    tickerState: tickerStateOf,
+    feedStatus,
+    timeZone: settings.deskTimeZone,
     helpPage: helpPageOf(builtVerbs),
   };
 };

@@ -9,3 +9,6 @@ export const operatorLog = () => {
     error: (message: string) => log.error(message),
   };
 };
+
+/** In the terminal the person who asks is the operator, and what is wrong is said in the replies. */
+export const silentLog = { info: () => {}, warn: () => {}, error: () => {} } as const;

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { readTokens, type WorkspaceToStart } from '../config/tokens.ts';
-import { openFeed } from '../feed/openFeed.ts';
+import type { LiveFeed } from '../feed/live/liveFeed.ts';
 import type { Problem } from '../terms/problem.ts';
 import { problem } from '../terms/problem.ts';
 import { type Converse, createConverse } from '../workspaces/converse.ts';
@@ -9,8 +9,9 @@ import { readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
+import { eventInWords, feedLive } from './feed.ts';
 import { startHeartbeat } from './heartbeat.ts';
-import { operatorLog } from './log.ts';
+import { operatorLog, silentLog } from './log.ts';
 import { settingsFor } from './settings.ts';
 import { thisTerminal } from './terminal.ts';
 
@@ -26,14 +27,19 @@ type Serving = { readonly converse: Converse; readonly tickers: () => readonly s
 const serveSlack = async (
   workspace: WorkspaceToStart & { kind: 'slack' },
   serving: Serving,
+  log: ReturnType<typeof operatorLog>,
 ): Promise<number> => {
-  const log = operatorLog();
   // The chat library is slow to load; nobody in the terminal should wait for it.
   const { runSlack } = await import('./slack.ts');
   const stopBeating = startHeartbeat(() => 'running', log.warn);
   const problemFound = await runSlack(workspace, serving.converse, serving.tickers, log, randomUUID);
   stopBeating();
   return problemFound === null ? exitCodes.answered : refuseWith([problemFound]);
+};
+
+const tickersOf = (feed: LiveFeed): readonly string[] => {
+  const live = feed.snapshot();
+  return live.ok ? live.value.tickers : [];
 };
 
 const serveTerminal = async ({ converse }: Serving): Promise<number> => {
@@ -49,16 +55,22 @@ const main = async (): Promise<number> => {
   const { settings } = reading;
   const workspace = readTokens(process.env, settings);
   if (!workspace.ok) return refuseWith([workspace.problem]);
-  const feed = await openFeed(settings.feed);
-  if (!feed.ok) return refuseWith([feed.problem]);
+  const clock = { nowMs: Date.now };
+  const log = workspace.value.kind === 'slack' ? operatorLog() : silentLog;
+  const feed = await feedLive(settings, clock, (event) =>
+    log[event.kind === 'refused' ? 'error' : 'info'](eventInWords(event)),
+  );
+  const first = feed.snapshot();
+  if (!first.ok) return refuseWith([first.problem]);
   const compute = computeInPool();
-  const desk = createDesk({ settings, clock: { nowMs: Date.now }, snapshot: () => feed, compute });
-  const serving = { converse: createConverse(desk), tickers: () => feed.value.tickers };
+  const desk = createDesk({ settings, clock, snapshot: feed.snapshot, feedStatus: feed.status, compute });
+  const serving = { converse: createConverse(desk), tickers: () => tickersOf(feed) };
   try {
     return workspace.value.kind === 'slack'
-      ? await serveSlack(workspace.value, serving)
+      ? await serveSlack(workspace.value, serving, log)
       : await serveTerminal(serving);
   } finally {
+    feed.close();
     await compute.close();
   }
 };

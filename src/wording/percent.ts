@@ -30,15 +30,17 @@ export const percent = (fraction: number, decimals?: number, options: DigitOptio
 /** Basis points with three significant digits: `35.8bp`. */
 export const basisPoints = (fraction: number): string => `${threeDigits(fraction * 10_000)}bp`;
 
-/** A size that a person typed, with all the digits it was typed with: `20bp`, `12.34bp`. */
-export const typedBasisPoints = (fraction: number): string => {
-  const value = Number((fraction * 10_000).toPrecision(10));
-  const decimals = String(value).split('.')[1]?.length ?? 0;
-  return `${digits(value, decimals)}bp`;
+/** The digits that a person typed, no more and no fewer. */
+const typedDigits = (value: number): string => {
+  const exact = Number(value.toPrecision(10));
+  return digits(exact, String(exact).split('.')[1]?.length ?? 0);
 };
 
+/** A size that a person typed: `20bp`, `12.34bp`. */
+export const typedBasisPoints = (fraction: number): string => `${typedDigits(fraction * 10_000)}bp`;
+
+/** A share that a person typed: `4%`, `97.5%`. */
+export const typedPercent = (fraction: number): string => `${typedDigits(inPercent(fraction))}%`;
+
 /** A level with just the digits it was asked with: `95%`, `97.5%`, `99.9%`. */
-export const levelInWords = (level: number): string => {
-  const text = String(Math.round(inPercent(level) * 1e8) / 1e8);
-  return `${text}%`;
-};
+export const levelInWords = typedPercent;

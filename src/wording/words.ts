@@ -29,3 +29,18 @@ export const possessive = (name: string): string => (/s$/i.test(name) ? `${name}
 
 /** The first letter in upper case, the rest as it is. */
 export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+
+/** `2026-11-30 18:03 UTC`: an instant as a clock in that IANA time zone shows it. */
+export const instantInWords = (instantMs: number, timeZone: string): string => {
+  const parts = new Intl.DateTimeFormat('en-GB', {
+    timeZone,
+    hourCycle: 'h23',
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+    hour: '2-digit',
+    minute: '2-digit',
+  }).formatToParts(instantMs);
+  const part = (type: string): string => parts.find((each) => each.type === type)?.value ?? '';
+  return `${part('year')}-${part('month')}-${part('day')} ${part('hour')}:${part('minute')} ${timeZone}`;
+};

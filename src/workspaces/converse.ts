@@ -1,15 +1,16 @@
 import type { Answers } from '../answers/answer.ts';
 import type { AnswerJob } from '../answers/answerQuestion.ts';
-import { answersReply, workingReplies } from '../present/answerReply.ts';
-import { type FeedState, feedReply, type TickerState, tickerReply } from '../present/compose/feed.ts';
+import { answersReply, jsonReply, workingReplies } from '../present/answerReply.ts';
+import { feedReply, stalenessInWords, tickerReply } from '../present/compose/feed.ts';
 import { type HelpPage, helpReply } from '../present/compose/help.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
 import { type Button, type Reply, reply } from '../present/reply.ts';
 import type { Question, ReadQuestion, StatisticalQuestion } from '../questions/question.ts';
 import { type ReadContext, type ReadOutcome, readMessage } from '../questions/readMessage.ts';
+import type { FeedStatus, Freshness } from '../terms/feedReport.ts';
 import type { PriceSeries, PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
-import { type Result, refuse, succeed } from '../terms/result.ts';
+import { type Refusal, type Result, refuse, succeed } from '../terms/result.ts';
 import { recentAnswers } from './recentAnswers.ts';
 
 /** A message that was addressed to the bot. `progress` is told, in words, how far a long answer has come. */
@@ -36,14 +37,15 @@ export type Desk = {
     job: Pick<AnswerJob, 'read' | 'series'>,
     progress?: (words: string) => void,
   ) => Promise<Result<Answers>>;
-  readonly feedState: (snapshot: PriceSnapshot) => FeedState;
-  readonly tickerState: (snapshot: PriceSnapshot, ticker: string) => Result<TickerState>;
+  readonly feedStatus: () => FeedStatus;
+  /** IANA zone in which instants are shown. */
+  readonly timeZone: string;
   readonly helpPage: (topic: string | null) => HelpPage;
 };
 
 const said = (spokenReply: Reply): Spoken => ({ reply: spokenReply, outcome: null });
 
-const refused = (outcome: Result<never> & { ok: false }): Spoken => ({
+const refused = (outcome: Refusal): Spoken => ({
   reply: refusalReply(outcome.problem),
   outcome,
 });
@@ -59,6 +61,8 @@ const seriesOf = (snapshot: PriceSnapshot, tickers: readonly string[]): Result<r
   const found: PriceSeries[] = [];
   for (const ticker of tickers) {
     const series = snapshot.series(ticker);
+    const reason = snapshot.quarantined.get(ticker);
+    if (series === null && reason !== undefined) return refuse(problem('quarantined', reason));
     if (series === null)
       return refuse(
         problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`),
@@ -66,6 +70,26 @@ const seriesOf = (snapshot: PriceSnapshot, tickers: readonly string[]): Result<r
     found.push(series);
   }
   return succeed(found);
+};
+
+/** A picture cannot be had yet, and that is said beside the figures rather than instead of them. */
+const withoutPicture = (given: Reply): Reply => ({
+  ...given,
+  passages: [
+    ...given.passages,
+    { head: null, lines: ['A picture cannot be drawn yet; these are the figures.'] },
+  ],
+});
+
+const asWished = ({ wishes }: ReadQuestion, answers: Answers): Reply => {
+  const given = wishes.includes('json') ? jsonReply(answers) : answersReply(answers);
+  return wishes.includes('picture') ? withoutPicture(given) : given;
+};
+
+/** Old prices are said before anything else is warned of. It hangs on the hour of asking, so it is no part of the answer. */
+const withStaleness = (given: Reply, freshness: Freshness | null): Reply => {
+  const stale = stalenessInWords(freshness);
+  return stale === null ? given : { ...given, warnings: [stale, ...given.warnings] };
 };
 
 /** One conversation for every workspace: text in, replies out. */
@@ -83,7 +107,20 @@ export const createConverse = (desk: Desk): Converse => {
     const outcome = await desk.compute({ read, series: series.value }, progress);
     if (!outcome.ok) return refused(outcome);
     recent.keep(outcome.value);
-    return { reply: answersReply(outcome.value), outcome };
+    return { reply: withStaleness(asWished(read, outcome.value), desk.feedStatus().freshness), outcome };
+  };
+
+  const answerFeed = (ticker: string | null): Spoken => {
+    const status = desk.feedStatus();
+    if (ticker === null) return said(feedReply(status, desk.timeZone));
+    const report = status.report?.tickers.find((each) => each.ticker === ticker);
+    return report === undefined
+      ? refused(
+          refuse(
+            problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`),
+          ),
+        )
+      : said(tickerReply(report, status.freshness));
   };
 
   const answerOne = async (
@@ -93,19 +130,18 @@ export const createConverse = (desk: Desk): Converse => {
   ): Promise<Spoken> => {
     const { question } = read;
     if (question.verb === 'help') return said(helpReply(desk.helpPage(question.topic)));
-    if (!live.ok) return refused(live);
-    if (isStatistical(question)) return answerStatistical(read, question, live.value, progress);
-    if (question.ticker === null) return said(feedReply(desk.feedState(live.value)));
-    const state = desk.tickerState(live.value, question.ticker);
-    return state.ok ? said(tickerReply(state.value)) : refused(state);
+    if (isStatistical(question))
+      return live.ok ? answerStatistical(read, question, live.value, progress) : refused(live);
+    return answerFeed(question.ticker);
   };
 
   const ask = async ({ text, progress }: Asking): Promise<readonly Spoken[]> => {
     const live = desk.snapshot();
     const { questions } = readMessage(text, desk.contextFor(live.ok ? live.value : null));
-    const asksForHelp = (outcome: ReadOutcome) => outcome.ok && outcome.value.question.verb === 'help';
+    const needsNoPrices = (outcome: ReadOutcome) =>
+      outcome.ok && ['help', 'feed'].includes(outcome.value.question.verb);
     // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
-    if (!live.ok && !questions.some(asksForHelp)) return questions.length === 0 ? [] : [refused(live)];
+    if (!live.ok && !questions.some(needsNoPrices)) return questions.length === 0 ? [] : [refused(live)];
     const spoken: Spoken[] = [];
     for (const outcome of questions)
       spoken.push(outcome.ok ? await answerOne(outcome.value, live, progress) : refused(outcome));

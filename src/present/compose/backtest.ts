@@ -72,7 +72,7 @@ const bestWords = (models: readonly JudgedModel[]): string => {
   const best = ranked.reduce((one, other) =>
     (other.meanJointLoss ?? 0) < (one.meanJointLoss ?? 0) ? other : one,
   );
-  return ` ${best.model} had the lowest loss of the league.`;
+  return ` Over the same days ${best.model} had the lowest loss.`;
 };
 
 const datesPassage = (models: readonly JudgedModel[]): readonly Passage[] => {

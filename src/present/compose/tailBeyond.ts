@@ -1,10 +1,16 @@
 import type { TailBeyondAnswer } from '../../answers/answer.ts';
 import type { BeyondModelFigures } from '../../answers/tail/figures.ts';
 import { significant } from '../../wording/digits.ts';
-import { levelInWords, percent, percentBounds, percentDecimals } from '../../wording/percent.ts';
+import {
+  levelInWords,
+  percent,
+  percentBounds,
+  percentDecimals,
+  typedPercent,
+} from '../../wording/percent.ts';
 import { counted, listed } from '../../wording/words.ts';
 import type { Reply } from '../reply.ts';
-import { framed, windowInWords } from './parts.ts';
+import { framed } from './parts.ts';
 import { refusedPassage } from './tail.ts';
 
 const mostDaysShown = 10;
@@ -25,6 +31,15 @@ const row = (each: BeyondModelFigures): readonly string[] => {
   ];
 };
 
+const once = (count: number | null): string =>
+  count === null ? 'never' : `once in ${significant(count, 2)} sessions`;
+
+const chanceWords = (leading: BeyondModelFigures): string =>
+  `the ${leading.model} model expects it ${once(leading.meanReturnSessions)}`;
+
+const runWords = (models: readonly BeyondModelFigures[]): string =>
+  models.length < 2 ? '' : `, and the models run from ${once(minimum(models))} to ${once(maximum(models))}`;
+
 const daysInWords = (days: readonly string[]): string => {
   if (days.length === 0) return 'It did not happen in the window.';
   const shown = days.slice(-mostDaysShown);
@@ -37,16 +52,12 @@ export const tailBeyondReply = (answer: TailBeyondAnswer): Reply => {
   const { figures } = answer;
   const models = given(answer);
   const leading = models.find(({ model }) => model === 'student') ?? models[0];
-  const loss = percent(figures.threshold);
   const short = figures.position === 'short' ? ' short' : '';
-  const chance =
-    leading === undefined
-      ? ''
-      : ` the ${leading.model} model expects it once in ${sessions(leading.meanReturnSessions)} sessions;`;
+  const loss = typedPercent(figures.threshold);
+  const happened = `${figures.days.length} of ${counted(answer.returnCount, 'day')}`;
   const sentence =
-    `${answer.subject[0] ?? ''}${short}: a daily loss of ${loss} or more happened on ${figures.days.length} of ${counted(answer.returnCount, 'day')} ` +
-    `${windowInWords(answer).startsWith('over ') ? '' : windowInWords(answer)}`.trimEnd() +
-    `;${chance} the models run from once in ${sessions(minimum(models))} to once in ${sessions(maximum(models))}.`;
+    `${answer.subject[0] ?? ''}${short}: a daily loss of ${loss} or more happened on ${happened} to ${answer.asOf}; ` +
+    (leading === undefined ? 'no model gives its chance.' : `${chanceWords(leading)}${runWords(models)}.`);
   return framed(answer, sentence, {
     table: {
       columns: [

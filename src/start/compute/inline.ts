@@ -3,6 +3,6 @@ import type { Compute } from './compute.ts';
 
 /** Works answers out on the calling thread: for one-shot use, where nobody else waits. */
 export const computeInline = (): Compute => ({
-  answer: async (job) => answerQuestion(job),
+  answer: async (job, progress) => answerQuestion(job, progress),
   close: async () => {},
 });
