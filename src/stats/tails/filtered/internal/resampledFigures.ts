@@ -56,7 +56,7 @@ const tooFewBeyond = (count: number, { tailLevel }: TailInput): TailNote | null 
 
 /** Percentile intervals of the figures over rebuilt paths, and why an end or an interval is missing. */
 export const resampledFigures = (source: FilterSource, input: TailInput): ResampledFigures => {
-  const { replicates } = source;
+  const replicates = input.replicates ?? source.replicates;
   const ranks = endRanks(input.confidence, 'both', replicates);
   if (!ranks.ok) return withoutAny([note('varInterval', 'levelBeyondResamples', ranks.problem.message)]);
   const vars = new Float64Array(replicates);
