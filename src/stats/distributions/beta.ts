@@ -30,7 +30,7 @@ export const betaCdf = (x: number, a: number, b: number): number => {
  * Convention: I_{1−x}(b, a); small figures are never formed as 1 minus something.
  * Domain, unit and source: as {@link betaCdf}.
  * Edges: 1 at x = 0, 0 at x = 1.
- * Example: `betaUpperTail(0.9, 1, 3)` is 0.001 to 15 digits.
+ * Example: `betaUpperTail(0.9, 1, 3)` is 0.001.
  */
 export const betaUpperTail = (x: number, a: number, b: number): number => {
   mustBeInDomain('betaUpperTail', x, a, b);
@@ -47,7 +47,7 @@ export const betaUpperTail = (x: number, a: number, b: number): number => {
  * Edges: 0 at p = 0, 1 at p = 1; 0 where the share is below the smallest double. Relative error below 1e-12.
  * Source: Clopper & Pearson 1934, Biometrika 26, 404-413, for the use; jStat 1.9.6 gives the start, Newton's method on
  * our own tails the figure.
- * Example: `betaQuantile(0.025, 3, 248)` is 0.002481558254703.
+ * Example: `betaQuantile(0.025, 3, 248)` is 0.00248155825470304.
  */
 export const betaQuantile = (p: number, a: number, b: number): number => {
   mustBeInDomain('betaQuantile', p, a, b);

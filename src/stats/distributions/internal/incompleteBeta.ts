@@ -39,7 +39,8 @@ const betaFraction = (a: number, b: number, x: number, y: number): number => {
 export const lowerBetaShare = (a: number, b: number, x: number, y: number): number => {
   if (x <= 0) return 0;
   if (y <= 0) return 1;
-  return a * y > b * x
-    ? betaKernel(a, b, x, y) * betaFraction(a, b, x, y)
-    : 1 - betaKernel(b, a, y, x) * betaFraction(b, a, y, x);
+  return a * y > b * x ? belowMean(a, b, x, y) : 1 - belowMean(b, a, y, x);
 };
+
+const belowMean = (a: number, b: number, x: number, y: number): number =>
+  Math.min(1, betaKernel(a, b, x, y) * betaFraction(a, b, x, y));

@@ -36,9 +36,12 @@ const upperFraction = (a: number, x: number): number => {
   return value;
 };
 
-/** Both regularised incomplete gamma functions; the smaller side is computed, the other is its complement. */
+/** P(a, x): the side that is smaller is computed, the other is its complement. */
 export const lowerGammaShare = (a: number, x: number): number =>
-  x < a + 1 ? gammaKernel(a, x) * lowerSeries(a, x) : 1 - gammaKernel(a, x) * upperFraction(a, x);
+  x < a + 1 ? lowerBySeries(a, x) : 1 - gammaKernel(a, x) * upperFraction(a, x);
 
+/** Q(a, x) = 1 − P(a, x), the small side never by that subtraction. */
 export const upperGammaShare = (a: number, x: number): number =>
-  x < a + 1 ? 1 - gammaKernel(a, x) * lowerSeries(a, x) : gammaKernel(a, x) * upperFraction(a, x);
+  x < a + 1 ? 1 - lowerBySeries(a, x) : gammaKernel(a, x) * upperFraction(a, x);
+
+const lowerBySeries = (a: number, x: number): number => Math.min(1, gammaKernel(a, x) * lowerSeries(a, x));

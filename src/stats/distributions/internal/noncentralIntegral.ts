@@ -43,7 +43,10 @@ export const noncentralIntegral = (t: number, nu: number, delta: number, upper: 
     const hazard = away > 0 ? 1 / millsRatio(away) : density;
     return -nu * Math.expm1(2 * y) + (upper ? -1 : 1) * t * s * hazard;
   };
-  const bracket = expandBracket(slope, upper ? -1 : 0, upper ? 0 : 1);
+  // the chi density alone has its top at y = 0; the normal side pulls it up for the lower tail, down for the upper one
+  const bracket = upper
+    ? expandBracket(slope, -1, 0, { greatest: 0 })
+    : expandBracket(slope, 0, 1, { least: 0 });
   const top =
     bracket === null ? null : findRoot(slope, bracket.low, bracket.high, { absoluteTolerance: 1e-9 });
   if (top === null || !top.found)
@@ -54,7 +57,7 @@ export const noncentralIntegral = (t: number, nu: number, delta: number, upper: 
   const hill = (y: number): number => Math.exp(logHill(y) - height);
   const area = integrate(hill, low, top.root) + integrate(hill, top.root, high);
   const constant = Math.sqrt(nu / Math.PI) * Math.exp(-stirlingRemainder(nu / 2));
-  return area * constant * Math.exp(height);
+  return Math.min(1, area * constant * Math.exp(height));
 };
 
 /** Where the hill has fallen by e^−40, not much farther. */
