@@ -4,7 +4,7 @@ import { laggedProducts } from './autocovariance.ts';
 
 export type NeweyWest = { readonly standardError: number; readonly bandwidth: number };
 
-/** ⌊4·(n/100)^(2/9)⌋ lags: 3 from 28 values on, 4 from 100. */
+/** ⌊4·(n/100)^(2/9)⌋ lags: 1 from 2 values on, 3 from 28, 4 from 100. */
 export const neweyWestBandwidth = (count: number): number => Math.floor(4 * (count / 100) ** (2 / 9));
 
 /** The standard error of the mean with Bartlett weights over a stated number of lags; see neweyWest. */
@@ -32,6 +32,6 @@ export const neweyWestStandardError = (values: ArrayLike<number>, bandwidth: num
  * Example: neweyWest(returns).standardError beside s/√n shows what autocorrelation costs.
  */
 export const neweyWest = (values: ArrayLike<number>): NeweyWest => {
-  const bandwidth = Math.min(neweyWestBandwidth(values.length), values.length - 1);
+  const bandwidth = neweyWestBandwidth(values.length);
   return { standardError: neweyWestStandardError(values, bandwidth), bandwidth };
 };

@@ -12,23 +12,17 @@ export type Centred = {
  * not put into the mean. Without that second step data near 1e7 with a spread of 0.1 would lose half of their digits.
  * Domain: at least 1 finite value; an empty array throws.
  * Units: those of the data.
- * Edges: values that are all equal have deviations of exactly 0.
+ * Edges: values that are all equal are their own mean and have deviations of exactly 0, even where their sum over their
+ * count is not that value: what is missing is a few units in the last place, and so comes back without rounding.
  * Source: Chan, Golub & LeVeque 1983, The American Statistician 37(3), "corrected two-pass" (here of the mean as well).
  * Example: centre([1, 2, 6]) is mean 3 with deviations −2, −1, 3.
  */
 export const centre = (values: ArrayLike<number>): Centred => {
   const count = values.length;
   if (count === 0) throw new RangeError('centre: expected at least 1 value, got none');
-  const first = values[0] as number;
-  const deviations = new Float64Array(count);
   const provisional = compensatedSum(values) / count;
-  let equal = true;
-  for (let index = 0; index < count; index += 1) {
-    const value = values[index] as number;
-    if (value !== first) equal = false;
-    deviations[index] = value - provisional;
-  }
-  if (equal) return { mean: first, deviations: deviations.fill(0) };
+  const deviations = new Float64Array(count);
+  for (let index = 0; index < count; index += 1) deviations[index] = (values[index] as number) - provisional;
   const correction = compensatedSum(deviations) / count;
   for (let index = 0; index < count; index += 1)
     deviations[index] = (deviations[index] as number) - correction;

@@ -42,6 +42,14 @@ describe('independentDraw', () => {
     expect([...picks]).toEqual([0, 0, 0]);
   });
 
+  test('words left over by the cells are rejected', () => {
+    // 2^32 mod 3,600 = 1,696 words are left over, so the largest word is one of them; the next one, 0, is not.
+    const words = [2 ** 32 - 1, 0];
+    const picks = new Uint32Array(2).fill(9);
+    independentDraw(60).fill({ nextUint32: () => words.shift() ?? 0 }, picks);
+    expect([...picks]).toEqual([0, 0]);
+  });
+
   test('neighbouring picks share a word and nothing else', () => {
     const pairs = new Float64Array(49);
     const picks = new Uint32Array(2);
@@ -82,6 +90,15 @@ describe('stationaryDraw', () => {
     const p = (1 / blockLength) * (1 - 1 / 1_000);
     const steps = 200 * 999;
     expect(Math.abs(starts / steps - p)).toBeLessThan(4 * Math.sqrt((p * (1 - p)) / steps));
+  });
+
+  test('a block whose word is left over by the cells starts at a place drawn anew', () => {
+    // Blocks of 1.5 start below round(2^32/1.5) = 2,863,311,531, which is one more than ten cells; the last word below
+    // it starts a block, and the place comes from the next word: ⌊0.625·10⌋ = 6, as the first came from ⌊0.25·10⌋ = 2.
+    const words = [2 ** 30, 2_863_311_530, 0.625 * 2 ** 32];
+    const picks = new Uint32Array(2);
+    stationaryDraw(10, 1.5).fill({ nextUint32: () => words.shift() ?? 0 }, picks);
+    expect([...picks]).toEqual([2, 6]);
   });
 
   test('the first value follows the last', () => {
