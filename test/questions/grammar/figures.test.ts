@@ -77,6 +77,7 @@ test.each([
   ],
   ['claim KELP 20bp 95', 'ambiguous', ['claim KELP 20bp 60d at 95%', 'claim KELP 20bp 95d at 95%']],
   ['claim KELP 0.2% 95%', 'ambiguous', ['claim KELP 20bp 60d at 95%', 'claim KELP 95% 60d at 0.2%']],
+  ['claim KELP 0.2% 5% at 95%', 'repeated', ['claim KELP 20bp 60d at 95%', 'claim KELP 5% 60d at 95%']],
   ['interval KELP 20260504', 'ambiguous', ['interval KELP since 2026-05-04 at 95%']],
   // the feed has a ticker 700
   ['interval 700 60d', 'ambiguous', ['interval `700` 60d at 95%']],

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest';
 import { readMessage } from '../../../src/questions/readMessage.ts';
+import { createVocabulary } from '../../../src/questions/vocabulary.ts';
 import { canonicalsOf, context, problemIn, questionIn, questionsIn } from '../asking.ts';
 
 test.each([
@@ -122,6 +123,20 @@ test.each([
 
 test('a suggestion keeps the form that was wished for', () => {
   expect(problemIn('interval KELQ as picture').suggestion).toBe('interval KELP 60d at 95% as picture');
+});
+
+test('a word is shown back up to 40 characters, a mention and a bare mark not at all', () => {
+  const long = problemIn(`interval KELP ${'x'.repeat(300)}`).message;
+  expect(long).toContain(`“${'x'.repeat(39)}…” (word 3)`);
+  expect(problemIn('interval KELP <@U2>').message).toMatch(/^A mention \(word 3\) cannot be read/);
+  expect(problemIn('interval KELP #general').message).toMatch(/^A mention \(word 3\) cannot be read/);
+  expect(problemIn('interval KELP * 5').message).toMatch(/^A sign \(word 3\) cannot be read/);
+  expect(problemIn('interval KELP _<b>|x|~1~').message).toMatch(/^“bx1” \(word 3\) cannot be read/);
+});
+
+test('a ticker of the feed is no request for something that is not answered', () => {
+  const given = { ...context, vocabulary: createVocabulary(['UP', 'KELP']) };
+  expect(problemIn('UP 60d', given)).toMatchObject({ code: 'noVerb', suggestion: 'interval UP 60d at 95%' });
 });
 
 test('further lines that begin with a verb are answered in order, three in all', () => {

@@ -32,7 +32,9 @@ const prefixed = (line: Line): readonly Repair[] =>
     : [];
 
 export const noVerb = (line: Line): Fault => {
-  const at = line.words.findIndex((word) => !word.quoted && notAsked(word.lower) !== null);
+  const at = line.words.findIndex(
+    ({ lower }, index) => notAsked(lower) !== null && recogniseAt(line, index) === null,
+  );
   const topic = notAsked(line.words[at]?.lower ?? '');
   if (topic !== null) return notAskedFault(line, at, topic);
   const misspelt = misspeltVerbs(line);

@@ -55,8 +55,12 @@ export const settleLevels: Settle = (line, pieces) => {
   return attained(settled);
 };
 
-const percentAsSize = (pieces: readonly Placed[], placed: PlacedPercent): readonly Placed[] =>
-  replacePiece(pieces, placed, { kind: 'size', fraction: scaledDecimal(placed.piece.decimal, -2) });
+const percentsAsSizes = (pieces: readonly Placed[]): readonly Placed[] =>
+  pieces.map((placed) =>
+    placed.piece.kind === 'percent'
+      ? { ...placed, piece: { kind: 'size', fraction: scaledDecimal(placed.piece.decimal, -2) } }
+      : placed,
+  );
 
 /** Which of two percentages is the size is told by neither; both readings are offered. */
 const twoPercentages = (line: Line, first: PlacedPercent, second: PlacedPercent): Fault => ({
@@ -91,6 +95,6 @@ export const settleSize = (
   const [first, second] = allOf(pieces, 'percent');
   if (first === undefined) return attained(pieces);
   if (has(pieces, 'size')) return settleLevels(line, pieces);
-  if (second === undefined || has(pieces, 'level')) return attained(percentAsSize(pieces, first));
+  if (second === undefined || has(pieces, 'level')) return attained(percentsAsSizes(pieces));
   return faulty(twoPercentages(line, first, second));
 };
