@@ -82,7 +82,7 @@ export const answerIn = async (
 
   const [first, ...others] = replies;
   const takesItsPlace = first !== undefined && !(first.private && !place.direct) && tookMs < editLimitMs;
-  if (takesItsPlace && (await voice.update(standing, first))) {
+  if (takesItsPlace && (await voice.updateNow(standing, first))) {
     return [{ ...standing, reply: first }, ...(await sayAll(speaking, place, others))];
   }
   const posted = await sayAll(speaking, place, replies);

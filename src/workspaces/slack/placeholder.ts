@@ -48,7 +48,7 @@ export const startPlaceholder = (voice: Voice, time: Time, log: Logger, to: Dest
     if (ended || busy || shown === null || words === shown.words) return;
     const { at, sinceMs } = shown;
     later(Math.max(0, sinceMs + progressMs - time.nowMs()), async (said) => {
-      await voice.updateIfFree(at, { text: said, blocks: [] });
+      await voice.updateNow(at, { text: said, blocks: [] });
       return at;
     });
   };

@@ -12,10 +12,10 @@ export type Voice = {
   readonly post: (to: Destination, content: Content) => Promise<Delivered>;
   /** Only for one person; not kept, and not shown in a thread where nobody has replied. */
   readonly whisper: (to: Destination & { readonly user: string }, content: Content) => Promise<void>;
-  /** False where the message could not be changed. */
-  readonly update: (at: At, content: Content) => Promise<boolean>;
-  /** An edit that may be left out where the workspace has had its share of edits. */
-  readonly updateIfFree: (at: At, content: Content) => Promise<void>;
+  /** Waits for its turn where the workspace has had its share of edits. */
+  readonly update: (at: At, content: Content) => Promise<void>;
+  /** Changes the message now or not at all: whether it did. */
+  readonly updateNow: (at: At, content: Content) => Promise<boolean>;
   readonly remove: (at: At) => Promise<void>;
 };
 
@@ -86,13 +86,14 @@ export const makeVoice = (desk: Delivering, edits: Pace): Voice => {
       const outcome = await withLooks(content, (shown) =>
         persist(edits, editLane, true, () => edit(at, shown)),
       );
-      return outcome.kind === 'done';
+      if (outcome.kind !== 'done') log.warn(`A message in ${at.channel} was not changed: ${outcome.kind}.`);
     },
 
-    updateIfFree: async (at, content) => {
-      if (!edits.tryTurn(editLane)) return;
-      const outcome = await edit(at, content);
+    updateNow: async (at, content) => {
+      if (!edits.tryTurn(editLane)) return false;
+      const outcome = await withLooks(content, (shown) => edit(at, shown));
       if (outcome.kind === 'limited') edits.hold(editLane, outcome.retryAfterMs);
+      return outcome.kind === 'done';
     },
 
     remove: async (at) => {

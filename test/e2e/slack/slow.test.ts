@@ -55,14 +55,42 @@ describe('an answer that takes long', () => {
     expect((await platform.deletions.next()).ts).toBe(placeholder.ts);
   });
 
-  it('whose placeholder cannot be edited becomes a new reply', async () => {
+  it.each([
+    ['cannot be edited', { kind: 'refused', error: 'edit_window_closed' }],
+    ['may or may not have been edited', { kind: 'dropped', accepted: true }],
+  ] as const)('whose placeholder %s becomes a new reply', async (_, fault) => {
     const { platform, asked } = await askSlowly();
     platform.time.advance(1_500);
     await platform.posts.next();
-    platform.faults.next('chat.update', { kind: 'refused', error: 'edit_window_closed' });
+    platform.faults.next('chat.update', fault);
     asked.answer(spoken('new then'));
     expect((await platform.posts.next()).text).toBe('new then');
     await platform.deletions.next();
+  });
+
+  it('does not wait for leave to edit the placeholder', async () => {
+    const { platform, asked } = await askSlowly();
+    platform.time.advance(1_500);
+    await platform.posts.next();
+    platform.faults.next('chat.update', { kind: 'limited', retryAfterSeconds: 30 });
+    asked.answer(spoken('new then'));
+    expect((await platform.posts.next()).text).toBe('new then');
+    await platform.time.timerSet(30_000);
+    platform.time.advance(30_000);
+    await platform.deletions.next();
+  });
+
+  it('whose blocks are refused takes the place of the placeholder as text alone', async () => {
+    const { platform, asked, log } = await askSlowly();
+    platform.time.advance(1_500);
+    const placeholder = await platform.posts.next();
+    asked.answer(spoken('plain words', { blocks: [{ type: 'banner' }] }));
+    expect(await platform.updates.next()).toMatchObject({
+      ts: placeholder.ts,
+      text: 'plain words',
+      blocks: [],
+    });
+    expect(log).toMatchObject([{ level: 'error' }]);
   });
 
   it('says how far it has come at most every five seconds', async () => {

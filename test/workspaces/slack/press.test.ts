@@ -20,8 +20,8 @@ const setUp = () => {
       return Promise.resolve({ ok: true, ts: '9.000001' });
     },
     whisper: () => Promise.resolve(),
-    update: () => Promise.resolve(true),
-    updateIfFree: () => Promise.resolve(),
+    update: () => Promise.resolve(),
+    updateNow: () => Promise.resolve(true),
     remove: () => Promise.resolve(),
   };
   return {
