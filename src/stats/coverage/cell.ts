@@ -17,6 +17,7 @@ export type CoveredInterval =
   | `mean.${'plain' | 'normal' | 'neweyWest' | 'studentised' | 'stationary' | 'trusted' | 'prediction'}`
   | `deviation.${'chiSquare' | 'bonett' | 'block' | 'trusted'}`
   | 'ratio.noncentralT'
+  | 'tail.student.nu'
   | `tail.${TailModelName}.${'var' | 'es'}.${string}`;
 
 /**
