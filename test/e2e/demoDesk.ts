@@ -1,0 +1,22 @@
+import { readSettings } from '../../src/config/read.ts';
+import type { Settings } from '../../src/config/schema.ts';
+import { computeInline } from '../../src/start/compute/inline.ts';
+import { createDesk } from '../../src/start/desk.ts';
+import { feedOnce } from '../../src/start/feed.ts';
+import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
+
+const example = new URL('../../config/example-settings.yaml', import.meta.url).pathname;
+
+export const exampleSettings = (): Settings => {
+  const reading = readSettings(example);
+  if (!reading.ok) throw new Error(reading.problems.map(({ message }) => message).join('\n'));
+  return reading.settings;
+};
+
+/** The whole bot on the demonstration prices, on the morning after they end, without a workspace around it. */
+export const demoConverse = async (): Promise<Converse> => {
+  const settings = exampleSettings();
+  const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
+  const feed = await feedOnce(settings, clock);
+  return createConverse(createDesk({ settings, clock, ...feed, compute: computeInline() }));
+};
