@@ -24,7 +24,8 @@ export type IntervalMethod =
   | 'profileLikelihood'
   | 'parametricBootstrap'
   | 'percentileBootstrap'
-  | 'residualBootstrap';
+  | 'residualBootstrap'
+  | 'parameterDraws';
 
 /** Why a figure is null, one-sided or to be read with care; `needs` is the count of returns that would be enough. */
 export type TailNote = {
@@ -56,6 +57,7 @@ export const tailNoteCodes = {
   noClustering: 'no volatility clustering was found',
   profileNotConverged: 'an interval search did not reach its stopping rule',
   resamplesLeftOut: 'some resamples could not be refitted and were left out',
+  horizonTooLong: 'a horizon over which the draws of an interval would take too long',
   exactInterval: 'the interval is the exact one named in its text',
 } as const;
 
