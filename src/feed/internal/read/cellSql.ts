@@ -6,29 +6,37 @@ export type SourceColumn = { readonly name: string; readonly cell: string; reado
 
 const isText = ({ type }: SourceColumn): boolean => type === 'VARCHAR' || type.startsWith('ENUM');
 
-const patterns: Readonly<Record<Exclude<DateFormat, 'spreadsheet number'>, string>> = {
-  'YYYY-MM-DD': '%Y-%m-%d',
-  'YYYY/MM/DD': '%Y/%m/%d',
-  YYYYMMDD: '%Y%m%d',
-  'DD/MM/YYYY': '%d/%m/%Y',
-  'MM/DD/YYYY': '%m/%d/%Y',
-  'DD.MM.YYYY': '%d.%m.%Y',
-  'DD-MM-YYYY': '%d-%m-%Y',
-  'MM-DD-YYYY': '%m-%d-%Y',
-  'DD-MMM-YYYY': '%d-%b-%Y',
-  'DD MMM YYYY': '%d %b %Y',
+type WrittenDate = Exclude<DateFormat, 'spreadsheet number'>;
+
+/** How each format is parsed, and the only shape that is let through to the parser: alone it takes words too. */
+const patterns: Readonly<Record<WrittenDate, readonly [parse: string, shape: string]>> = {
+  'YYYY-MM-DD': ['%Y-%m-%d', '[0-9]{4}-[0-9]{2}-[0-9]{2}'],
+  'YYYY/MM/DD': ['%Y/%m/%d', '[0-9]{4}/[0-9]{1,2}/[0-9]{1,2}'],
+  YYYYMMDD: ['%Y%m%d', '[0-9]{8}'],
+  'DD/MM/YYYY': ['%d/%m/%Y', '[0-9]{1,2}/[0-9]{1,2}/[0-9]{4}'],
+  'MM/DD/YYYY': ['%m/%d/%Y', '[0-9]{1,2}/[0-9]{1,2}/[0-9]{4}'],
+  'DD.MM.YYYY': ['%d.%m.%Y', '[0-9]{1,2}[.][0-9]{1,2}[.][0-9]{4}'],
+  'DD-MM-YYYY': ['%d-%m-%Y', '[0-9]{1,2}-[0-9]{1,2}-[0-9]{4}'],
+  'MM-DD-YYYY': ['%m-%d-%Y', '[0-9]{1,2}-[0-9]{1,2}-[0-9]{4}'],
+  'DD-MMM-YYYY': ['%d-%b-%Y', '[0-9]{1,2}-[A-Za-z]{3}-[0-9]{4}'],
+  'DD MMM YYYY': ['%d %b %Y', '[0-9]{1,2} [A-Za-z]{3} [0-9]{4}'],
 };
 
 /** Days from the day that a spreadsheet counts as 0 to 1970-01-01. */
 const spreadsheetEpoch = 25_569;
 
-const dateOfText = (cell: string, format: Exclude<DateFormat, 'spreadsheet number'>): string =>
-  format === 'YYYY-MM-DD'
-    ? // a cast is twice as fast as a pattern but takes other separators and times of day too
-      `CASE WHEN ${cell} LIKE '____-__-__' THEN TRY_CAST(${cell} AS DATE) END`
-    : `CAST(try_strptime(${cell}, ${sqlText(patterns[format])}) AS DATE)`;
+const dateOfText = (cell: string, format: WrittenDate): string => {
+  if (format === 'YYYY-MM-DD') {
+    // faster than the pattern, and held to the very text: alone the cast takes even signs among the digits
+    return `CASE WHEN CAST(TRY_CAST(${cell} AS DATE) AS VARCHAR) = ${cell} THEN TRY_CAST(${cell} AS DATE) END`;
+  }
+  const [parse, shape] = patterns[format];
+  return `CASE WHEN regexp_full_match(${cell}, ${sqlText(shape)}) THEN CAST(try_strptime(${cell}, ${sqlText(parse)}) AS DATE) END`;
+};
 
-const dayOfDate = (date: string): string => `CAST(date_diff('day', DATE '1970-01-01', ${date}) AS INTEGER)`;
+/** Years of four digits alone: other calendars of the reader reach beyond what a day can be shown for. */
+const dayOfDate = (date: string): string =>
+  `CAST(CASE WHEN (${date}) BETWEEN DATE '0001-01-01' AND DATE '9999-12-31' THEN date_diff('day', DATE '1970-01-01', ${date}) END AS INTEGER)`;
 
 /** The day number of a cell, null where it is blank or no date in the format. */
 export const daySql = (column: SourceColumn, { dateFormat }: TextFormat): string => {
@@ -37,7 +45,7 @@ export const daySql = (column: SourceColumn, { dateFormat }: TextFormat): string
     if (dateFormat !== 'spreadsheet number') return dayOfDate(dateOfText(cell, dateFormat));
     return `TRY_CAST(CASE WHEN regexp_full_match(${cell}, '[0-9]{1,6}') THEN CAST(${cell} AS INTEGER) - ${spreadsheetEpoch} END AS INTEGER)`;
   }
-  if (type === 'DATE') return dayOfDate(`CASE WHEN isfinite(${cell}) THEN ${cell} END`);
+  if (type === 'DATE') return dayOfDate(cell);
   // an instant within a day is not a trading day
   if (type.startsWith('TIMESTAMP') && !type.endsWith('TIME ZONE')) {
     return dayOfDate(
