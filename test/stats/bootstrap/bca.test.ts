@@ -1,7 +1,13 @@
 import { describe, expect, test } from 'vitest';
 import { bcaInterval } from '../../../src/stats/bootstrap/bca.ts';
-import type { Picks, ResampledStatistic } from '../../../src/stats/bootstrap/replicates.ts';
+import { independentDraw } from '../../../src/stats/bootstrap/draws.ts';
+import {
+  type Picks,
+  type ResampledStatistic,
+  sortedReplicates,
+} from '../../../src/stats/bootstrap/replicates.ts';
 import { writeResampledMoments } from '../../../src/stats/bootstrap/resampledMoments.ts';
+import { normalCdf } from '../../../src/stats/distributions/normal.ts';
 import { centre } from '../../../src/stats/moments/centre.ts';
 import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
@@ -62,6 +68,24 @@ describe('ratio of two standard deviations', () => {
   });
 });
 
+describe('bias and acceleration', () => {
+  test('move the ends to other ranks of the same resamples', () => {
+    // A mean of squares is lopsided enough for both corrections to move the ends by many ranks.
+    const values = [1, 2, 4, 8, 9, 12, 13, 17, 18, 30];
+    const statistic: ResampledStatistic = ([picks]) =>
+      picks.reduce((sum, pick) => sum + (values[pick] ?? Number.NaN) ** 2, 0) / picks.length;
+    const found = accepted(bcaInterval({ counts: [10], statistic, level: level95, streams }));
+    const sorted = sortedReplicates({ draws: [independentDraw(10)], statistic, streams, replicates: 9_999 });
+    const { biasCorrection: z0, acceleration: a } = found;
+    // Efron 1987, written out anew: the share of the resamples below each end. 1.95996… is the 97.5% normal quantile.
+    const shareBelow = (z: number) => normalCdf(z0 + (z0 + z) / (1 - a * (z0 + z)));
+    expect(z0).toBeGreaterThan(0.02);
+    expect(a).toBeGreaterThan(0.05);
+    expect(found.lower).toBe(sorted[Math.floor(10_000 * shareBelow(-1.959963984540054)) - 1]);
+    expect(found.upper).toBe(sorted[9_999 - Math.floor(10_000 * (1 - shareBelow(1.959963984540054)))]);
+  });
+});
+
 describe('refusals', () => {
   test('a level that the resamples cannot reach', () => {
     const statistic = logRatio(dax, smi);
@@ -70,13 +94,11 @@ describe('refusals', () => {
     expect(accepted(bcaInterval({ ...asked, level: level('0.8') })).estimate).toBeGreaterThan(0);
   });
 
-  test('resamples that all lie on one side', () => {
-    const largest: ResampledStatistic = ([picks]) => (picks.length < 10 ? 0 : Math.max(...picks) - 100);
-    const above: ResampledStatistic = (picks) =>
-      picks[0].every((pick, place) => pick === place) ? -1e6 : largest(picks);
-    expect(
-      refusalCode(bcaInterval({ counts: [12], statistic: above, level: level95, streams, replicates: 99 })),
-    ).toBe('resamplesUnusable');
+  test.each([-1e6, 1e6])('resamples that all lie on one side of an estimate of %d', (estimate) => {
+    const statistic: ResampledStatistic = ([picks]) =>
+      picks.length === 12 && picks.every((pick, place) => pick === place) ? estimate : Math.max(...picks);
+    const asked = { counts: [12], statistic, level: level95, streams, replicates: 99 } as const;
+    expect(refusalCode(bcaInterval(asked))).toBe('resamplesUnusable');
   });
 
   test('a statistic that does not exist when one value is left out', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { nextNormal } from '../../../src/stats/random/draws.ts';
+import { nextIndex, nextNormal } from '../../../src/stats/random/draws.ts';
 import { deviationTrust } from '../../../src/stats/spread/trust.ts';
 import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { level, level95 } from '../levels.ts';
@@ -19,6 +19,13 @@ const fat = (count: number): Float64Array =>
 const clustered = (count: number): Float64Array =>
   normals(count).map((value, index) => (Math.floor(index / 20) % 2 === 0 ? 0.5 : 2) * value);
 
+/** The same values in an order without clusters. */
+const shuffled = (values: readonly number[]): number[] => {
+  const random = testStreams(53).stream(0);
+  const left = [...values];
+  return values.map(() => left.splice(nextIndex(random, left.length), 1)[0] ?? Number.NaN);
+};
+
 const trusted = (returns: ArrayLike<number>, more: object = {}) =>
   accepted(deviationTrust({ returns, level: level95, streams, replicates: 999, ...more }));
 
@@ -33,6 +40,23 @@ describe('which interval of the standard deviation to believe', () => {
     const found = trusted(fat(120));
     expect(found).toMatchObject({ trust: 'bonett', reason: 'fatTailed' });
     expect(found.jarqueBera?.p).toBeLessThan(0.05);
+  });
+
+  test('kurtosis alone is enough', () => {
+    // Even steps and one large value on each side: g2 = 1.46 lies between 2·√(24/60) = 1.26 and what Jarque-Bera needs.
+    const steps = Array.from({ length: 29 }, (_, index) => (index + 1) / 100);
+    const found = trusted(shuffled([...steps, ...steps.map((step) => -step), 0.68, -0.68]));
+    expect(found.clustering.p).toBeGreaterThan(0.05);
+    expect(found.jarqueBera?.p).toBeGreaterThan(0.05);
+    expect(found).toMatchObject({ trust: 'bonett', reason: 'fatTailed' });
+  });
+
+  test('Jarque-Bera alone is enough', () => {
+    // Lopsided and with less kurtosis than the bell curve.
+    const found = trusted(shuffled(Array.from({ length: 60 }, (_, index) => ((index + 0.5) / 60) ** 2.2)));
+    expect(found.clustering.p).toBeGreaterThan(0.05);
+    expect(found.excessKurtosis).toBeLessThan(0);
+    expect(found).toMatchObject({ trust: 'bonett', reason: 'fatTailed' });
   });
 
   test('clusters: blocks', () => {
