@@ -50,8 +50,9 @@ export const standings = (models: readonly JudgedDays[], tailLevel: Level): Stan
   const bestLosses = best === null ? null : (joint[best] ?? null);
   const dayCount = models[0]?.losses.length ?? 0;
   const testable = expectedBeyond(dayCount, tailLevel) >= leastExpected;
-  const pValues = joint.map((losses, index) =>
-    testable && index !== best && losses !== null && bestLosses !== null
+  // The best model's losses are identical to its own, which is no test.
+  const pValues = joint.map((losses) =>
+    testable && losses !== null && bestLosses !== null
       ? (dieboldMariano(losses, bestLosses)?.p ?? null)
       : null,
   );

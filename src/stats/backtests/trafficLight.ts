@@ -29,6 +29,6 @@ export const trafficLight = (exceedances: number, days: number, tailLevel: Level
   if (expectedBeyond(days, tailLevel) < leastExpected) return null;
   const ourExtension = !isSupervisory(days, tailLevel);
   const cumulative = binomialCdf(exceedances, days, tailFraction(tailLevel));
-  if (exceedances === 0 || cumulative < yellowFrom) return { zone: 'green', ourExtension };
+  if (cumulative < yellowFrom) return { zone: 'green', ourExtension };
   return { zone: cumulative < redFrom ? 'yellow' : 'red', ourExtension };
 };

@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { adjustedForSeveral, type CompareQuestion, compare } from '../../../src/stats/comparisons/compare.ts';
 import { deviationRatio } from '../../../src/stats/comparisons/deviationRatio.ts';
+import { nextNormal } from '../../../src/stats/random/draws.ts';
 import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level95 } from '../levels.ts';
@@ -68,6 +69,21 @@ test('clustered squares are drawn in blocks', () => {
   expect(ratio.method).toBe('stationary');
   expect(ratio.lower).toBeLessThan(ratio.ratio);
   expect(ratio.upper).toBeGreaterThan(ratio.ratio);
+});
+
+test('of a clustered and an unclustered series the longer blocks are taken', () => {
+  // Fifty calm days, fifty wild ones, beside independent days; then the same values with calm and wild alternating.
+  const random = testStreams(31).stream(0);
+  const steady = Float64Array.from({ length: 500 }, () => nextNormal(random));
+  const sizes = Float64Array.from({ length: 500 }, () => nextNormal(random));
+  const runs = sizes.map((size, day) => (day % 100 < 50 ? 1 : 4) * size);
+  const alternating = sizes.map((size, day) => (day % 2 === 0 ? 1 : 4) * size);
+  const width = (first: Float64Array) => {
+    const { lower, upper } = accepted(deviationRatio(question({ first, second: steady, replicates: 999 })));
+    return Math.log(upper / lower);
+  };
+  // Blocks of one day would leave the width as it is for alternating days, near 0.3.
+  expect(width(runs)).toBeGreaterThan(1.5 * width(alternating));
 });
 
 describe('compare', () => {
