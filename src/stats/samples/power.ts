@@ -50,5 +50,5 @@ export const detectableNoncentrality = (power: Level, degreesOfFreedom: number, 
   return outcome.root;
 };
 
-/** The power at which a claim's reach is stated: trade practice of planned trials, 80%. */
+/** The power at which a claim's reach is stated: 80%, the usual power of planned trials. */
 export const claimPower: Level = { digits: 8, places: 1 };

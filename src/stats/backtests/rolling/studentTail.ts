@@ -7,11 +7,11 @@ import { nextOpenDouble } from '../../random/draws.ts';
  * Convention: exact, by rejection. X = nu/(nu + t²) is Beta(nu/2, ½) and t > q means X < x = nu/(nu + q²). X is proposed
  * as x·U^(2/nu), whose density lacks the factor (1 − X)^(−½) only, and kept with chance √((1 − x)/(1 − X)). In the limit
  * t² = q² − 2·ln U is kept with chance q/t.
- * Domain: point > 0, degrees of freedom > 0, Infinity allowed.
+ * Domain: point > 0, degrees of freedom ≥ 0.5, Infinity allowed.
  * Units: standard units in and out.
  * Edges: heavy tails give very large but finite values; a point near 0 makes many proposals fail.
  * Source: the normal limit is Marsaglia 1964, Technometrics 6, 101-102; the extension to nu is ours.
- * Example: beyond 2.33 at nu = 4 the draws average the conditional tail mean 3.60.
+ * Example: beyond 2.33 at nu = 4 the draws average the conditional tail mean, 3.443.
  */
 export const drawStudentBeyond = (point: number, degreesOfFreedom: number, random: Random): number => {
   const pointSquared = point * point;
