@@ -9,6 +9,7 @@ import { levelFraction } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import type { MeanAnswer, Note, Warning } from '../answer.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { coverageWarnings } from '../measured.ts';
 import type { MeanFigures } from './figures.ts';
 import { meanWarnings } from './meanWarnings.ts';
 import { meanWorking } from './meanWorking.ts';
@@ -30,6 +31,17 @@ type Prediction = {
 /** The interval that leads: the dependence-proof one where it was asked for and can be had. */
 const leading = (trusted: TrustedMeanInterval, robustAsked: boolean): MeanFigures['trust'] =>
   robustAsked && trusted.neweyWest !== null ? 'neweyWest' : trusted.trust;
+
+const leadingName = {
+  plain: 'the plain interval',
+  neweyWest: 'the Newey–West interval',
+  bootstrap: 'the bootstrap interval',
+} as const;
+
+const coveredAs = (leads: MeanFigures['trust'], { bootstrap }: TrustedMeanInterval) =>
+  leads === 'bootstrap'
+    ? (`mean.${bootstrap?.method ?? 'studentised'}` as const)
+    : (`mean.${leads}` as const);
 
 const evidenceFigures = ({ evidence }: TrustedMeanInterval) => ({
   lag1Autocorrelation: evidence.lag1Autocorrelation,
@@ -130,7 +142,11 @@ export const answerMean = (asked: Asked, question: IntervalQuestion): Result<Mea
       kind: 'interval mean',
       verb: 'interval',
       figures,
-      warnings: [...meanWarnings(trusted, leads), ...predictionWarnings(prediction.value)],
+      warnings: [
+        ...meanWarnings(trusted, leads),
+        ...coverageWarnings(coveredAs(leads, trusted), leadingName[leads], returns, level),
+        ...predictionWarnings(prediction.value),
+      ],
       notes: notesFor(trusted),
       method: 'Student’s t interval of the mean',
       sources,

@@ -9,6 +9,7 @@ import { workingDigits } from '../../wording/digits.ts';
 import { probabilityValue } from '../../wording/words.ts';
 import type { Note, VolAnswer, Warning, WorkingStep } from '../answer.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { coverageWarnings } from '../measured.ts';
 import { endsText, returnsStep } from '../working.ts';
 import type { VolFigures } from './figures.ts';
 
@@ -24,6 +25,12 @@ type Leading = VolFigures['trust'];
 /** The interval that leads: the resampled blocks where they were asked for and can be had. */
 const leadingOf = (trust: DeviationTrust, robustAsked: boolean): Leading =>
   robustAsked && trust.block !== null ? 'block' : trust.trust;
+
+const leadingName = {
+  chiSquare: 'the chi-square interval',
+  bonett: 'Bonett’s interval',
+  block: 'the interval by resampled blocks',
+} as const;
 
 const leadingEnds = (trust: DeviationTrust, leading: Leading) => trust[leading] ?? trust.chiSquare;
 
@@ -143,7 +150,10 @@ export const answerVol = (asked: Asked, question: IntervalQuestion): Result<VolA
       kind: 'interval vol',
       verb: 'interval',
       figures,
-      warnings: warningsFor(trust, leading),
+      warnings: [
+        ...warningsFor(trust, leading),
+        ...coverageWarnings(`deviation.${leading}`, leadingName[leading], returns, question.level),
+      ],
       notes: notesFor(trust),
       method: 'interval of the standard deviation',
       sources,

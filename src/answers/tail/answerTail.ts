@@ -7,12 +7,20 @@ import { type Result, succeed } from '../../terms/result.ts';
 import type { TailAnswer, TailBeyondAnswer } from '../answer.ts';
 import { askOne } from '../askOne.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { nearestProcess } from '../measured.ts';
 import type { AnswerPolicy } from '../policy.ts';
 import { answerBeyond } from './beyond.ts';
 import { type Position, positionOf } from './exposure.ts';
 import type { RefusedModel, TailModelFigures } from './figures.ts';
-import { modelFigures, nearestProcess } from './modelFigures.ts';
-import { leadingOf, modelNotes, modelsOf, refusedAltogether, returnsOfPosition } from './models.ts';
+import { modelFigures } from './modelFigures.ts';
+import {
+  horizonNotes,
+  leadingOf,
+  modelNotes,
+  modelsOf,
+  refusedAltogether,
+  returnsOfPosition,
+} from './models.ts';
 import { runTails } from './runModels.ts';
 import { tailWarnings } from './warnings.ts';
 import { tailWorking } from './working.ts';
@@ -37,7 +45,11 @@ const answerFigures = (
     confidence: question.confidence,
     streams: createStreams(identity.seedBytes),
   };
-  const ran = runTails(modelsOf(question), input);
+  const ran = runTails(modelsOf(question), input, {
+    horizonDays: question.horizonDays,
+    returnType: question.returnType,
+    position: position.position,
+  });
   const refused = refusedAltogether(ran);
   if (refused !== null) return refused;
   const quoting = {
@@ -62,8 +74,16 @@ const answerFigures = (
         ...position,
         models,
       },
-      warnings: tailWarnings({ models, leading, sample, input, meaning: series.meaning, confidenceLevel }),
-      notes: modelNotes(ran),
+      warnings: tailWarnings({
+        models,
+        leading,
+        sample,
+        input,
+        meaning: series.meaning,
+        confidence: question.confidence,
+        oneDay: question.horizonDays === 1,
+      }),
+      notes: [...modelNotes(ran), ...horizonNotes(ran)],
       method: question.model === null ? 'five tail models' : `the ${question.model} tail model`,
       sources,
       working: tailWorking(asked, question, ran),

@@ -1,14 +1,11 @@
 import type { CoverageProcess } from '../../stats/coverage/cell.ts';
 import { measuredCoverage } from '../../stats/coverage/measuredCoverage.ts';
-import { coverageProcessFor } from '../../stats/coverage/process.ts';
-import { robustAutocorrelation } from '../../stats/dependence/autocorrelation.ts';
-import { dependenceFoundBelow, volatilityClustering } from '../../stats/dependence/clustering.ts';
-import { jarqueBera } from '../../stats/moments/jarqueBera.ts';
+import type { HorizonFigures } from '../../stats/tails/horizon/horizonTail.ts';
 import { type Level, levelFraction } from '../../terms/level.ts';
 import type { ReturnType } from '../../terms/returns.ts';
 import { moneyLoss, type Position } from './exposure.ts';
 import type { MeasuredShare, ParameterValue, RefusedModel, TailModelFigures } from './figures.ts';
-import type { AnyTailFigures, RanModel } from './runModels.ts';
+import type { AnyTailFigures, RanTail } from './runModels.ts';
 
 export const orInfinity = (value: number): number | 'infinity' =>
   value === Number.POSITIVE_INFINITY ? 'infinity' : value;
@@ -50,14 +47,6 @@ const parametersOf = (figures: AnyTailFigures): Readonly<Record<string, Paramete
   }
 };
 
-/** Which simulated process comes nearest to these returns: whose measured coverage is quoted. */
-export const nearestProcess = (returns: Float64Array): CoverageProcess =>
-  coverageProcessFor({
-    dependent: robustAutocorrelation(returns).p < dependenceFoundBelow,
-    clustered: volatilityClustering(returns).p < dependenceFoundBelow,
-    fatTailed: returns.length >= 4 && jarqueBera(returns).p < 0.05,
-  });
-
 export type Quoting = {
   readonly process: CoverageProcess;
   readonly count: number;
@@ -79,34 +68,68 @@ const measuredShare = (
   return { var: share('var'), es: share('es') };
 };
 
+/** Figures of one day, from the model itself. */
+const oneDayFigures = (
+  figures: AnyTailFigures,
+  position: Position,
+  returnType: ReturnType,
+  quoting: Quoting,
+) => ({
+  var: figures.var,
+  varLower: figures.varInterval?.lower ?? null,
+  varUpper: figures.varInterval?.upper ?? null,
+  varIntervalMethod: figures.varIntervalMethod,
+  varAttainedLevel: figures.varAttainedLevel,
+  es: figures.es,
+  esLower: figures.esInterval?.lower ?? null,
+  esUpper: figures.esInterval?.upper ?? null,
+  esIntervalMethod: figures.esIntervalMethod,
+  measuredCoverage: measuredShare(figures.model, quoting),
+  monteCarloError: null,
+  shortcutVar: null,
+  varMoney: moneyLoss(figures.var, position, returnType),
+  esMoney: moneyLoss(figures.es, position, returnType),
+});
+
+/** Figures of several days, simulated; the coverage of their intervals is not measured. */
+const horizonFigures = (horizon: HorizonFigures, { amount }: Position) => {
+  const inMoney = (fraction: number | null) =>
+    amount === null || fraction === null ? null : Math.abs(amount.amount) * fraction;
+  return {
+    var: horizon.var,
+    varLower: horizon.varInterval?.lower ?? null,
+    varUpper: horizon.varInterval?.upper ?? null,
+    varIntervalMethod: horizon.intervalMethod,
+    varAttainedLevel: null,
+    es: horizon.es,
+    esLower: horizon.esInterval?.lower ?? null,
+    esUpper: horizon.esInterval?.upper ?? null,
+    esIntervalMethod: horizon.esInterval === null ? null : horizon.intervalMethod,
+    measuredCoverage: { var: null, es: null },
+    monteCarloError: horizon.monteCarloError,
+    shortcutVar: horizon.shortcutVar,
+    varMoney: inMoney(horizon.moneyFraction.var),
+    esMoney: inMoney(horizon.moneyFraction.es),
+  };
+};
+
 /** A model's figures under the names of the answer, or its reason for having none. */
 export const modelFigures = (
-  { model, result }: RanModel<AnyTailFigures>,
+  { model, result, horizon }: RanTail,
   position: Position,
   returnType: ReturnType,
   quoting: Quoting,
 ): TailModelFigures | RefusedModel => {
   if (!result.ok) return refusedModel(model, result.problem);
-  const figures = result.value;
+  if (horizon !== null && !horizon.ok) return refusedModel(model, horizon.problem);
   return {
     model,
     ok: true,
-    var: figures.var,
-    varLower: figures.varInterval?.lower ?? null,
-    varUpper: figures.varInterval?.upper ?? null,
-    varIntervalMethod: figures.varIntervalMethod,
-    varAttainedLevel: figures.varAttainedLevel,
-    es: figures.es,
-    esLower: figures.esInterval?.lower ?? null,
-    esUpper: figures.esInterval?.upper ?? null,
-    esIntervalMethod: figures.esIntervalMethod,
-    target: figures.target,
-    measuredCoverage: measuredShare(model, quoting),
-    monteCarloError: null,
-    shortcutVar: null,
-    varMoney: moneyLoss(figures.var, position, returnType),
-    esMoney: moneyLoss(figures.es, position, returnType),
-    parameters: parametersOf(figures),
+    target: result.value.target,
+    ...(horizon === null
+      ? oneDayFigures(result.value, position, returnType, quoting)
+      : horizonFigures(horizon.value, position)),
+    parameters: parametersOf(result.value),
   };
 };
 

@@ -3,7 +3,7 @@ import { type Result, refuse } from '../../terms/result.ts';
 import type { Note } from '../answer.ts';
 import type { Position } from './exposure.ts';
 import type { RefusedModel } from './figures.ts';
-import type { AnyTailFigures, RanModel } from './runModels.ts';
+import type { AnyTailFigures, RanModel, RanTail } from './runModels.ts';
 
 const allModels: readonly TailModel[] = ['historical', 'normal', 'student', 'filtered', 'peaks'];
 /** Which figure leads where none was asked for: the one that allows for fat tails with the fewest returns first. */
@@ -47,3 +47,7 @@ export const modelNotes = (
 /** Returns as the holder of the position has them: a short position loses when the price rises. */
 export const returnsOfPosition = (returns: Float64Array, { position }: Position): Float64Array =>
   position === 'long' ? returns : returns.map((value) => -value);
+
+/** What the simulation of several days has to say beside its figures. */
+export const horizonNotes = (ran: readonly RanTail[]): readonly Note[] =>
+  modelNotes(ran.flatMap(({ model, horizon }) => (horizon === null ? [] : [{ model, result: horizon }])));

@@ -4,6 +4,11 @@ import { filteredKinds } from '../../stats/tails/filtered/filteredKinds.ts';
 import { type FilteredTailFigures, filteredTail } from '../../stats/tails/filtered/filteredTail.ts';
 import { historicalBeyond } from '../../stats/tails/historicalBeyond.ts';
 import { type HistoricalTailFigures, historicalTail } from '../../stats/tails/historicalTail.ts';
+import {
+  type HorizonFigures,
+  type HorizonInput,
+  horizonTail,
+} from '../../stats/tails/horizon/horizonTail.ts';
 import { normalBeyond } from '../../stats/tails/normalBeyond.ts';
 import { type NormalTailFigures, normalTail } from '../../stats/tails/normalTail.ts';
 import { peaksBeyond } from '../../stats/tails/peaks/peaksBeyond.ts';
@@ -19,6 +24,9 @@ export type AnyTailFigures =
   | StudentTailFigures
   | FilteredTailFigures
   | PeaksTailFigures;
+
+/** A model's one-day figures and, where more days were asked, the simulated ones. */
+export type RanTail = RanModel<AnyTailFigures> & { readonly horizon: Result<HorizonFigures> | null };
 
 export type RanModel<Figures> = { readonly model: TailModel; readonly result: Result<Figures> };
 
@@ -39,11 +47,23 @@ const beyondModels: Readonly<Record<TailModel, (input: BeyondInput) => Result<Be
   peaks: peaksBeyond,
 };
 
+export type HorizonAsked = Pick<HorizonInput, 'horizonDays' | 'returnType' | 'position'>;
+
+const horizonOf = (
+  result: Result<AnyTailFigures>,
+  input: TailInput,
+  asked: HorizonAsked,
+): Result<HorizonFigures> | null =>
+  result.ok && asked.horizonDays > 1 ? horizonTail(result.value, { ...input, ...asked }) : null;
+
 export const runTails = (
   models: readonly TailModel[],
   input: TailInput,
-): readonly RanModel<AnyTailFigures>[] =>
-  models.flatMap((model) => tailModels[model](input).map((result) => ({ model, result })));
+  asked: HorizonAsked,
+): readonly RanTail[] =>
+  models.flatMap((model) =>
+    tailModels[model](input).map((result) => ({ model, result, horizon: horizonOf(result, input, asked) })),
+  );
 
 export const runBeyond = (
   models: readonly TailModel[],

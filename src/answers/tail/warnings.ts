@@ -1,9 +1,11 @@
 import { historicalTail } from '../../stats/tails/historicalTail.ts';
 import type { TailInput } from '../../stats/tails/tailFigures.ts';
 import { isoFromDay } from '../../terms/day.ts';
+import { type Level, levelFraction } from '../../terms/level.ts';
 import type { PriceMeaning } from '../../terms/prices.ts';
-import { levelInWords, percent } from '../../wording/percent.ts';
+import { percent } from '../../wording/percent.ts';
 import type { Warning } from '../answer.ts';
+import { coverageWarnings } from '../measured.ts';
 import type { ReturnSample } from '../sample.ts';
 import type { RefusedModel, TailModelFigures } from './figures.ts';
 
@@ -11,8 +13,6 @@ import type { RefusedModel, TailModelFigures } from './figures.ts';
 const clusteringShows = 1 / 3;
 /** The largest loss carries the figure where taking it out changes the expected shortfall by more than this share. */
 const carriedShare = 1 / 4;
-/** A measured coverage further off its level than this is said. */
-const coverageMiss = 0.03;
 
 type Figures = readonly (TailModelFigures | RefusedModel)[];
 
@@ -94,25 +94,15 @@ const wideWarning = (leading: TailModelFigures | null): readonly Warning[] => {
     : [];
 };
 
-/** Where simulations found an interval of this kind to miss its level, the reply says what it really held. */
-const coverageWarning = (leading: TailModelFigures | null, confidence: number): readonly Warning[] => {
-  const share = leading?.measuredCoverage.var ?? null;
-  if (leading === null || share === null || share >= confidence - coverageMiss) return [];
-  return [
-    {
-      code: 'coverageMisses',
-      text: `in simulations of returns like these this ${levelInWords(confidence)} interval of the ${leading.model} VaR held the truth ${percent(share, 0)} of the time.`,
-    },
-  ];
-};
-
 export type Warned = {
   readonly models: Figures;
   readonly leading: TailModelFigures | null;
   readonly sample: ReturnSample;
   readonly input: TailInput;
   readonly meaning: PriceMeaning;
-  readonly confidenceLevel: number;
+  readonly confidence: Level;
+  /** Coverage is measured for figures of one day. */
+  readonly oneDay: boolean;
 };
 
 /** The warnings of a tail answer, those that can change its figure first. */
@@ -122,12 +112,20 @@ export const tailWarnings = ({
   sample,
   input,
   meaning,
-  confidenceLevel,
+  confidence,
+  oneDay,
 }: Warned): readonly Warning[] => [
   ...clusteringWarning(models),
   ...outlierWarning(sample, input),
   ...wideWarning(leading),
-  ...coverageWarning(leading, confidenceLevel),
+  ...(leading === null || !oneDay
+    ? []
+    : coverageWarnings(
+        `tail.${leading.model}.var.${levelFraction(input.tailLevel)}`,
+        `this interval of the ${leading.model} VaR`,
+        input.returns,
+        confidence,
+      )),
   ...nuWarning(models),
   ...adjustmentWarnings(meaning),
 ];

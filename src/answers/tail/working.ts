@@ -4,7 +4,7 @@ import { workingDigits } from '../../wording/digits.ts';
 import type { WorkingStep } from '../answer.ts';
 import type { Asked } from '../envelope.ts';
 import { endsText, returnsStep } from '../working.ts';
-import type { AnyTailFigures, RanModel } from './runModels.ts';
+import type { AnyTailFigures, RanModel, RanTail } from './runModels.ts';
 
 const parametersText = (figures: AnyTailFigures): string => {
   switch (figures.model) {
@@ -39,11 +39,26 @@ const stepOf = ({ model, result }: RanModel<AnyTailFigures>): WorkingStep => {
   };
 };
 
+const horizonStep = (days: number, model: string, horizon: RanTail['horizon']): readonly WorkingStep[] => {
+  if (horizon === null) return [];
+  if (!horizon.ok) return [{ step: `${model}, ${days} days`, text: horizon.problem.message }];
+  const { var: valueAtRisk, es, varInterval, monteCarloError, shortcutVar } = horizon.value;
+  return [
+    {
+      step: `${model}, ${days} days`,
+      text:
+        `100,000 simulated paths: VaR ${workingDigits(valueAtRisk)} ± ${workingDigits(monteCarloError.var)} (error of the simulation)` +
+        `${varInterval === null ? '' : `, ${endsText(varInterval)}`}; ES ${es === null ? 'none' : workingDigits(es)}; ` +
+        `the trade’s shortcut √h·(VaR + m) − h·m gives ${workingDigits(shortcutVar)}`,
+    },
+  ];
+};
+
 /** Each model with its parameters and figures. */
 export const tailWorking = (
   asked: Asked,
   question: TailQuestion,
-  ran: readonly RanModel<AnyTailFigures>[],
+  ran: readonly RanTail[],
 ): readonly WorkingStep[] => [
   returnsStep(asked.sample, asked.returnType),
   {
@@ -51,4 +66,5 @@ export const tailWorking = (
     text: `n·(1 − level) = ${workingDigits(expectedBeyond(asked.sample.returns.length, question.tailLevel))} returns are expected beyond ${levelText(question.tailLevel)}; losses are −r, positive`,
   },
   ...ran.map(stepOf),
+  ...ran.flatMap(({ model, horizon }) => horizonStep(question.horizonDays, model, horizon)),
 ];

@@ -39,7 +39,8 @@ const verdictSentence = (answer: ClaimAnswer): string => {
   const claim = claimedInWords(figures, periodsPerYear);
   const name = subject[0] ?? '';
   const window = windowInWords(answer);
-  if (figures.verdict === 'contradicted') return `${name}: ${claim} is contradicted ${window}`;
+  if (figures.verdict === 'contradicted')
+    return `${name}: ${claim} is contradicted ${window}, for the true one is ${figures.estimate > figures.claimed ? 'higher' : 'lower'}`;
   if (figures.verdict === 'consistent')
     return `${name}: ${claim} is consistent with the data ${window}, which does not prove it`;
   return figures.claimed === 0

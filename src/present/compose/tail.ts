@@ -23,16 +23,28 @@ const leadingOf = (models: TailFigures['models']): TailModelFigures | null => {
 };
 
 /** One model can stand twice where its two kinds meet; the kind then tells them apart. */
-export const modelName = ({ model, parameters }: TailModelFigures): string =>
+export const modelName = ({ model, parameters, shortcutVar }: TailModelFigures): string =>
   model === 'filtered'
-    ? `filtered, ${String(parameters['kind']) === 'garch' ? 'GARCH' : 'EWMA'}, next day`
+    ? `filtered, ${String(parameters['kind']) === 'garch' ? 'GARCH' : 'EWMA'}, ${shortcutVar === null ? 'next day' : 'from today on'}`
     : model;
 
-const written = (estimate: number, lower: number | null, upper: number | null) => {
-  const bounds = { estimate, lower, upper };
-  return lower === null && upper === null
-    ? { estimate: percent(estimate).slice(0, -1), range: 'no interval' }
-    : rangeOf(percentBounds(bounds, percentDecimals(bounds), unsigned));
+/** Without an interval the error of a simulation rules the digits, and without that three digits stand. */
+const written = (
+  estimate: number,
+  lower: number | null,
+  upper: number | null,
+  simulationError: number | null,
+) => {
+  if (lower !== null || upper !== null) {
+    const bounds = { estimate, lower, upper };
+    return rangeOf(percentBounds(bounds, percentDecimals(bounds), unsigned));
+  }
+  if (simulationError === null) return { estimate: percent(estimate).slice(0, -1), range: 'no interval' };
+  const decimals = percentDecimals(
+    { estimate, lower: estimate - simulationError, upper: estimate + simulationError },
+    [],
+  );
+  return { estimate: percent(estimate, decimals).slice(0, -1), range: 'no interval' };
 };
 
 const rangeOf = ({ estimate, lower, upper }: ReturnType<typeof percentBounds>) => ({
@@ -44,11 +56,16 @@ const moneyCell = (value: number | null, currency: string): string =>
   value === null ? '' : moneyInWords(value, currency);
 
 const modelRow = (figures: TailModelFigures, currency: string | null): readonly string[] => {
-  const value = written(figures.var, figures.varLower, figures.varUpper);
+  const value = written(
+    figures.var,
+    figures.varLower,
+    figures.varUpper,
+    figures.monteCarloError?.var ?? null,
+  );
   const shortfall =
     figures.es === null
       ? { estimate: 'none', range: '' }
-      : written(figures.es, figures.esLower, figures.esUpper);
+      : written(figures.es, figures.esLower, figures.esUpper, figures.monteCarloError?.es ?? null);
   const money =
     currency === null ? [] : [moneyCell(figures.varMoney, currency), moneyCell(figures.esMoney, currency)];
   return [modelName(figures), value.estimate, value.range, shortfall.estimate, shortfall.range, ...money];
@@ -86,7 +103,12 @@ const refusedPassage = (models: readonly (RefusedModel | { readonly ok: true })[
 export { refusedPassage };
 
 const rangeInWords = (leading: TailModelFigures, level: string): string => {
-  const { estimate, range } = written(leading.var, leading.varLower, leading.varUpper);
+  const { estimate, range } = written(
+    leading.var,
+    leading.varLower,
+    leading.varUpper,
+    leading.monteCarloError?.var ?? null,
+  );
   const interval =
     range === 'no interval'
       ? 'no interval can be given'
@@ -95,6 +117,16 @@ const rangeInWords = (leading: TailModelFigures, level: string): string => {
 };
 
 const horizonInWords = (days: number): string => (days === 1 ? 'a day' : `${counted(days, 'day')}`);
+
+/** The trade’s shortcut beside the simulated figure, where more than one day was asked. */
+const shortcutPassage = (models: readonly TailModelFigures[], days: number): readonly Passage[] => {
+  const lines = models.flatMap((each) =>
+    each.shortcutVar === null ? [] : [`${modelName(each)}: ${percent(each.shortcutVar)}`],
+  );
+  return lines.length === 0
+    ? []
+    : [{ head: `By the shortcut √${days}·(VaR + m) − ${days}·m, trade practice`, lines: [lines.join('; ')] }];
+};
 
 const moneyPhrase = ({ figures }: TailAnswer, leading: TailModelFigures): string =>
   figures.amount === null || leading.varMoney === null
@@ -115,13 +147,18 @@ export const tailReply = (answer: TailAnswer): Reply => {
       : '';
   const shortfall = leading.es === null ? '' : `; the average loss beyond it is ${percent(leading.es)}`;
   const window =
-    leading.target === 'nextDay' ? `for the next day, ${windowInWords(answer)}` : windowInWords(answer);
+    leading.target === 'nextDay'
+      ? `${figures.horizonDays === 1 ? 'for the next day' : 'from today on'}, ${windowInWords(answer)}`
+      : windowInWords(answer);
   const sentence =
     `${subject[0] ?? ''}${short}: by the ${leading.model} model ${window}, the ${level} VaR of ${horizonInWords(figures.horizonDays)} is ` +
     `${rangeInWords(leading, levelInWords(figures.confidenceLevel))}${moneyPhrase(answer, leading)}${shortfall}${spread}.`;
   return framed(answer, sentence, {
     table: table(answer),
-    passages: refusedPassage(figures.models),
+    passages: [
+      ...shortcutPassage(given(figures.models), figures.horizonDays),
+      ...refusedPassage(figures.models),
+    ],
     figuresInWords: given(figures.models)
       .map(
         (each) =>

@@ -1,0 +1,36 @@
+import type { CoverageProcess, CoveredInterval } from '../stats/coverage/cell.ts';
+import { measuredCoverage } from '../stats/coverage/measuredCoverage.ts';
+import { coverageProcessFor } from '../stats/coverage/process.ts';
+import { robustAutocorrelation } from '../stats/dependence/autocorrelation.ts';
+import { dependenceFoundBelow, volatilityClustering } from '../stats/dependence/clustering.ts';
+import { jarqueBera } from '../stats/moments/jarqueBera.ts';
+import { leastCounts } from '../stats/returns/leastCounts.ts';
+import { type Level, levelText } from '../terms/level.ts';
+import { percent } from '../wording/percent.ts';
+import type { Warning } from './answer.ts';
+
+/** Which simulated process comes nearest to these returns: its measured coverage is quoted. */
+export const nearestProcess = (returns: Float64Array): CoverageProcess =>
+  coverageProcessFor({
+    dependent: robustAutocorrelation(returns).p < dependenceFoundBelow,
+    clustered: volatilityClustering(returns).p < dependenceFoundBelow,
+    fatTailed: returns.length >= leastCounts.kurtosis && jarqueBera(returns).p < 0.05,
+  });
+
+/** An interval of ours whose simulations missed its level by more than three points says so, with the share. */
+export const coverageWarnings = (
+  interval: CoveredInterval,
+  called: string,
+  returns: Float64Array,
+  level: Level,
+): readonly Warning[] => {
+  const process = nearestProcess(returns);
+  const measured = measuredCoverage({ interval, process, count: returns.length, level });
+  if (measured === null || !measured.misses) return [];
+  return [
+    {
+      code: 'coverageMisses',
+      text: `in simulations of returns like these, ${measured.count} at a time, ${called} at ${levelText(level)} held the truth ${percent(measured.coverage, 0)} of the time.`,
+    },
+  ];
+};
