@@ -13,6 +13,9 @@ COPY --from=build --chown=node:node /app/package.json ./
 COPY --from=build --chown=node:node /app/node_modules ./node_modules
 COPY --from=build --chown=node:node /app/dist ./dist
 COPY --chown=node:node config ./config
+# The heartbeat that the health check reads is written here.
+RUN mkdir .leadsman && chown node:node .leadsman
+VOLUME /app/.leadsman
 USER node
 HEALTHCHECK --interval=30s --timeout=5s --start-period=10s CMD ["node", "dist/start/health.js"]
 # In an image nobody sits at a terminal: without the workspace's tokens this refuses to start and names them.

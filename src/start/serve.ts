@@ -43,7 +43,9 @@ const tickersOf = (feed: LiveFeed): readonly string[] => {
 };
 
 const serveTerminal = async ({ converse }: Serving): Promise<number> => {
-  await startTerminal(thisTerminal(), converse);
+  const terminal = thisTerminal();
+  await startTerminal(terminal, converse);
+  terminal.close();
   return exitCodes.answered;
 };
 

@@ -11,13 +11,34 @@ const leaveQuietlyOnClosedPipe = (): void => {
   });
 };
 
+/** Lines as they come, for piped input. */
+const pipedLines = (): Terminal['nextLine'] => {
+  const lines = createInterface({ input: process.stdin, crlfDelay: Number.POSITIVE_INFINITY })[
+    Symbol.asyncIterator
+  ]();
+  return async () => {
+    const { value, done } = await lines.next();
+    return done === true ? null : value;
+  };
+};
+
+/** A prompt with editing and history, for a person. */
+const promptedLines = (): Terminal['nextLine'] => {
+  const reader = createInterface({ input: process.stdin, output: process.stdout, terminal: true });
+  const closed = new Promise<null>((resolve) => reader.once('close', () => resolve(null)));
+  return (prompt) =>
+    Promise.race([closed, new Promise<string>((resolve) => reader.question(prompt, resolve))]);
+};
+
 /** The terminal that this process runs in. */
-export const thisTerminal = (): Terminal => {
+export const thisTerminal = (): Terminal & { readonly close: () => void } => {
   leaveQuietlyOnClosedPipe();
+  const interactive = process.stdin.isTTY === true && process.stdout.isTTY === true;
   return {
-    lines: createInterface({ input: process.stdin, terminal: false, crlfDelay: Number.POSITIVE_INFINITY }),
+    nextLine: interactive ? promptedLines() : pipedLines(),
     write: (text) => process.stdout.write(text),
     width: () => process.stdout.columns ?? widthWithoutTerminal,
-    interactive: process.stdin.isTTY === true && process.stdout.isTTY === true,
+    interactive,
+    close: () => process.stdin.destroy(),
   };
 };

@@ -5,11 +5,11 @@ import { emptyRoom, promptOf, type Room, readLine } from './room.ts';
 
 /** What the terminal workspace needs of the machine. */
 export type Terminal = {
-  /** Typed lines, one at a time, until the input closes. */
-  readonly lines: AsyncIterable<string>;
+  /** The next typed line, after this prompt where a person is typing; null once the input is closed. */
+  readonly nextLine: (prompt: string) => Promise<string | null>;
   readonly write: (text: string) => void;
   readonly width: () => number;
-  /** A person is typing: prompts and the welcome are shown. */
+  /** A person is typing: the welcome is shown, and what was typed is not repeated. */
   readonly interactive: boolean;
 };
 
@@ -83,16 +83,14 @@ const enterThread = (terminal: Terminal, room: Room, number: number | null): Roo
 export const startTerminal = async (terminal: Terminal, converse: Converse): Promise<number> => {
   let room = emptyRoom;
   let linesRead = 0;
-  const prompt = () => {
-    if (terminal.interactive) terminal.write(promptOf(room));
-  };
   /** Where nobody types, what was read is shown, so that the whole can be read as a conversation. */
   const echo = (typed: string) => {
     if (!terminal.interactive && typed.trim() !== '') say(terminal, `${promptOf(room)}${typed.trim()}`);
   };
   if (terminal.interactive) say(terminal, welcome);
-  prompt();
-  for await (const typed of terminal.lines) {
+  for (;;) {
+    const typed = await terminal.nextLine(promptOf(room));
+    if (typed === null) break;
     linesRead += 1;
     echo(typed);
     const line = readLine(typed);
@@ -101,7 +99,6 @@ export const startTerminal = async (terminal: Terminal, converse: Converse): Pro
     else if (line.kind === 'thread') room = enterThread(terminal, room, line.number);
     else if (line.kind === 'press') room = await press(terminal, converse, room, line.number);
     else if (line.kind === 'message') room = await ask(terminal, converse, room, line.text);
-    prompt();
   }
   if (linesRead === 0 && !terminal.interactive)
     for (const question of demonstrationQuestions) {

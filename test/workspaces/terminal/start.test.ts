@@ -18,14 +18,17 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
     press: async ({ question }) => [reply('working', `Working of ${question}.`)],
   };
   let screen = '';
-  const lines = (async function* () {
-    yield* typed;
-  })();
+  const left = [...typed];
+  const prompts: string[] = [];
+  const nextLine = async (prompt: string) => {
+    prompts.push(prompt);
+    return left.shift() ?? null;
+  };
   const write = (text: string) => {
     screen += text;
   };
-  const count = await startTerminal({ lines, write, width: () => 80, interactive }, converse);
-  return { asked, screen, count };
+  const count = await startTerminal({ nextLine, write, width: () => 80, interactive }, converse);
+  return { asked, screen, count, prompts };
 };
 
 describe('the terminal workspace', () => {
@@ -43,9 +46,10 @@ describe('the terminal workspace', () => {
   });
 
   test('a person who types gets a welcome and prompts, and no demonstration', async () => {
-    const { asked, screen } = await sitDown([], true);
+    const { asked, screen, prompts } = await sitDown(['#risk'], true);
     expect(asked).toEqual([]);
-    expect(screen).toContain('#desk> ');
+    expect(screen).toContain('interval KELP 60d');
+    expect(prompts).toEqual(['#desk> ', '#risk> ']);
   });
 
   test('channels, direct messages and threads are places to be in', async () => {
