@@ -4,7 +4,7 @@ import type { Clock } from '../../terms/clock.ts';
 import { openFiles } from '../openFeed.ts';
 import { type FileState, listPriceFiles, stateOfFile } from '../priceFiles.ts';
 import type { FeedSettings } from '../settings.ts';
-import type { LiveFeedPorts } from './liveFeed.ts';
+import type { LiveFeedPorts } from './ports.ts';
 
 /** The deepest folder of a path whose name holds no wildcard, so that a file that is replaced is noticed too. */
 const folderToWatch = (path: string): string => {

@@ -1,38 +1,14 @@
-import type { InstantMs } from '../../terms/clock.ts';
-import type { FeedStatus, Restatement } from '../../terms/feedReport.ts';
+import type { FeedStatus } from '../../terms/feedReport.ts';
 import { type Problem, problem } from '../../terms/problem.ts';
 import { type Result, refuse, succeed } from '../../terms/result.ts';
 import { freshnessOfFeed } from '../freshness.ts';
 import type { OpenSnapshot } from '../openFeed.ts';
 import { type FileState, signatureOf } from '../priceFiles.ts';
-import { replacementProblem } from './replacement.ts';
-import { restatementsBetween } from './restatements.ts';
+import { emptyState, type FeedState, makeIntake } from './intake.ts';
+import type { LiveFeedPorts } from './ports.ts';
+import { isDoubtful } from './replacement.ts';
 
-/** What the desk is told, once each: new prices, prices that were refused, or that a refusal is over. */
-export type FeedEvent =
-  | {
-      readonly kind: 'swapped';
-      readonly snapshot: OpenSnapshot;
-      readonly restatements: readonly Restatement[];
-    }
-  | { readonly kind: 'refused'; readonly problem: Problem; readonly hasPrices: boolean }
-  | { readonly kind: 'recovered'; readonly snapshot: OpenSnapshot };
-
-/** What a live feed needs of the world. */
-export type LiveFeedPorts = {
-  /** The price files and what else the reading hangs on, as they stand now. */
-  readonly look: () => Promise<{
-    readonly files: readonly FileState[];
-    readonly beside: readonly FileState[];
-  }>;
-  readonly open: (files: readonly FileState[], nowMs: InstantMs) => Promise<Result<OpenSnapshot>>;
-  readonly nowMs: () => InstantMs;
-  /** Calls back after a while, once. */
-  readonly later: (delayMs: number, call: () => void) => { readonly cancel: () => void };
-  /** Calls back whenever something in the place of the files seems to have changed. */
-  readonly watch: (call: () => void) => { readonly close: () => void };
-  readonly tell: (event: FeedEvent) => void;
-};
+export type { FeedEvent } from './ports.ts';
 
 export type LiveFeedSettings = {
   readonly path: string;
@@ -51,62 +27,10 @@ export type LiveFeed = {
 
 /** Files must stand still this long before they are read: whoever writes them has then paused at least. */
 export const settleMs = 500;
+/** A file that may be half a file must stand still for this long before it is taken or told of. */
+export const doubtfulRestMs = 10_000;
 /** After this long without standing still the desk is told that the file is never whole. */
 export const longestUnsettledMs = 60_000;
-
-type State = {
-  live: OpenSnapshot | null;
-  swappedAt: InstantMs | null;
-  restatements: readonly Restatement[];
-  problem: Problem | null;
-  problemAt: InstantMs | null;
-  /** Signature of the files at the last reading, whatever came of it. */
-  readSignature: string | null;
-  seenSignature: string | null;
-  unsettledSince: InstantMs | null;
-};
-
-const sameFlags = (first: OpenSnapshot, second: OpenSnapshot): boolean =>
-  JSON.stringify([first.report.findings, [...first.quarantined]]) ===
-  JSON.stringify([second.report.findings, [...second.quarantined]]);
-
-const says = (first: Problem | null, second: Problem): boolean => first?.message === second.message;
-
-/** Takes in what a reading came to. */
-const makeIntake = (settings: LiveFeedSettings, ports: LiveFeedPorts, state: State) => {
-  const refuseWith = (why: Problem): void => {
-    const isNews = !says(state.problem, why);
-    state.problem = why;
-    if (!isNews) return;
-    state.problemAt = ports.nowMs();
-    ports.tell({ kind: 'refused', problem: why, hasPrices: state.live !== null });
-  };
-  const recover = (snapshot: OpenSnapshot): void => {
-    if (state.problem === null) return;
-    state.problem = null;
-    state.problemAt = null;
-    ports.tell({ kind: 'recovered', snapshot });
-  };
-  const swap = async (next: OpenSnapshot): Promise<void> => {
-    const before = state.live;
-    const restatements = before === null ? [] : await restatementsBetween(before, next);
-    state.live = next;
-    state.swappedAt = ports.nowMs();
-    state.restatements = restatements;
-    state.problem = null;
-    state.problemAt = null;
-    ports.tell({ kind: 'swapped', snapshot: next, restatements });
-  };
-  const take = async (reading: Result<OpenSnapshot>): Promise<void> => {
-    if (!reading.ok) return refuseWith(reading.problem);
-    const next = reading.value;
-    const { live } = state;
-    if (live !== null && live.fingerprint === next.fingerprint && sameFlags(live, next)) return recover(live);
-    const why = live === null ? null : replacementProblem(live, next, settings.path);
-    return why === null ? swap(next) : refuseWith(why);
-  };
-  return { take, refuseWith, recover };
-};
 
 const problemOfUnsettled = (path: string): Problem =>
   problem(
@@ -124,26 +48,31 @@ const brokenReading = (path: string, error: unknown): Result<never> => {
 
 /** Follows price files: reads a change beside the live prices and swaps it in whole, or keeps what there is and says so. */
 export const startLiveFeed = async (settings: LiveFeedSettings, ports: LiveFeedPorts): Promise<LiveFeed> => {
-  const state: State = {
-    live: null,
-    swappedAt: null,
-    restatements: [],
-    problem: null,
-    problemAt: null,
-    readSignature: null,
-    seenSignature: null,
-    unsettledSince: null,
-  };
-  const intake = makeIntake(settings, ports, state);
+  const state = emptyState();
+  const intake = makeIntake(settings.path, ports, state);
 
   const read = async (files: readonly FileState[], signature: string): Promise<void> => {
     const reading = await ports
       .open(files, ports.nowMs())
       .catch((error: unknown) => brokenReading(settings.path, error));
     if (!reading.ok && reading.problem.code === 'fileChanging') return;
+    if (state.live !== null && isDoubtful(state.live, reading, settings.path)) {
+      state.held = { signature, reading, sinceMs: ports.nowMs() };
+      return;
+    }
     state.readSignature = signature;
     state.unsettledSince = null;
     await intake.take(reading);
+  };
+
+  const takeHeldIfRested = async (signature: string): Promise<boolean> => {
+    const { held } = state;
+    if (held === null || ports.nowMs() - held.sinceMs < doubtfulRestMs) return true;
+    state.held = null;
+    state.readSignature = signature;
+    state.unsettledSince = null;
+    await intake.take(held.reading);
+    return false;
   };
 
   /** Whether to look again soon. */
@@ -155,6 +84,8 @@ export const startLiveFeed = async (settings: LiveFeedSettings, ports: LiveFeedP
       state.unsettledSince = null;
       return false;
     }
+    if (signature === state.held?.signature) return takeHeldIfRested(signature);
+    state.held = null;
     const nowMs = ports.nowMs();
     state.unsettledSince ??= nowMs;
     const hasSettled = signature === state.seenSignature;
@@ -171,7 +102,7 @@ export const startLiveFeed = async (settings: LiveFeedSettings, ports: LiveFeedP
 const follow = async (
   settings: LiveFeedSettings,
   ports: LiveFeedPorts,
-  state: State,
+  state: FeedState,
   lookOnce: () => Promise<boolean>,
   read: (files: readonly FileState[], signature: string) => Promise<void>,
 ): Promise<LiveFeed> => {

@@ -1,6 +1,7 @@
 import { isoFromDay } from '../../terms/day.ts';
 import type { PriceSnapshot } from '../../terms/prices.ts';
 import { type Problem, problem } from '../../terms/problem.ts';
+import type { Result } from '../../terms/result.ts';
 import type { OpenSnapshot } from '../openFeed.ts';
 
 /** Share of the served tickers that a new file may lose at once; one may always go. */
@@ -57,3 +58,21 @@ export const replacementProblem = (live: OpenSnapshot, next: OpenSnapshot, path:
     'Write it again as a whole; to take it as it is, restart the bot.';
   return problem('pricesLost', message);
 };
+
+/** Tickers that had the newest price are gone, or lack it now while others have it. */
+const mayEndWithinADay = (live: PriceSnapshot, next: PriceSnapshot): boolean => {
+  const wasCurrent = (ticker: string): boolean => lastDayOf(live, ticker) === live.lastDay;
+  const isCurrent = (ticker: string): boolean => lastDayOf(next, ticker) === next.lastDay;
+  return live.tickers.some(
+    (ticker) => !next.quarantined.has(ticker) && wasCurrent(ticker) && !isCurrent(ticker),
+  );
+};
+
+/**
+ * Whether a reading could be of half a file: one that is refused, one that lost prices, or one that ends between two
+ * rows of its newest day. It can as well be what the desk meant, so it only has to rest longer.
+ */
+export const isDoubtful = (live: OpenSnapshot, reading: Result<OpenSnapshot>, path: string): boolean =>
+  !reading.ok ||
+  replacementProblem(live, reading.value, path) !== null ||
+  mayEndWithinADay(live, reading.value);

@@ -2,12 +2,12 @@ import { renameSync, rmSync, utimesSync, writeFileSync } from 'node:fs';
 import { afterAll, beforeEach, expect, test } from 'vitest';
 import { openDatabase } from '../../../src/feed/internal/read/database.ts';
 import {
-  type FeedEvent,
+  doubtfulRestMs,
   type LiveFeed,
-  type LiveFeedPorts,
   longestUnsettledMs,
   startLiveFeed,
 } from '../../../src/feed/live/liveFeed.ts';
+import type { FeedEvent, LiveFeedPorts } from '../../../src/feed/live/ports.ts';
 import { openFiles } from '../../../src/feed/openFeed.ts';
 import { listPriceFiles } from '../../../src/feed/priceFiles.ts';
 import { head, longCsv, pricesOf, temporaryFolder } from '../settingsForTests.ts';
@@ -74,6 +74,12 @@ const settle = async (feed: LiveFeed): Promise<void> => {
   await feed.look();
   await feed.look();
 };
+/** The same, and the rest that a doubtful file must keep. */
+const rest = async (feed: LiveFeed): Promise<void> => {
+  await settle(feed);
+  nowMs += doubtfulRestMs;
+  await feed.look();
+};
 const kinds = () => told.map((event) => (event.kind === 'refused' ? event.problem.code : event.kind));
 
 test('the first reading is served, told, and followed by a look every few seconds', async () => {
@@ -138,12 +144,14 @@ test.each([
   const before = feed.snapshot();
   write(text);
   await settle(feed);
-  await settle(feed);
+  expect(kinds()).toEqual(['swapped']);
+  await rest(feed);
+  await rest(feed);
   expect(feed.snapshot()).toEqual(before);
   expect(kinds()).toEqual(['swapped', code]);
   expect(feed.status().problem?.code).toBe(code);
   write(text);
-  await settle(feed);
+  await rest(feed);
   expect(kinds()).toEqual(['swapped', code]);
   write(first);
   await settle(feed);
@@ -161,7 +169,7 @@ test('rename-over, delete and re-create, and a touch without a change', async ()
   await settle(feed);
   expect(lines(feed)).toHaveLength(6);
   rmSync(path);
-  await settle(feed);
+  await rest(feed);
   expect(lines(feed)).toHaveLength(6);
   expect(kinds()).toEqual(['swapped', 'swapped', 'fileUnreadable']);
   write(first + nextDay);
@@ -204,7 +212,7 @@ test('a reader that breaks leaves the live prices and the looking alive', async 
       told.length === 0 ? broken.open(files, now) : Promise.reject(new Error('out of thread')),
   });
   write(first + nextDay);
-  await settle(feed);
+  await rest(feed);
   expect(lines(feed)).toHaveLength(4);
   expect(feed.status().problem?.message).toContain('out of thread');
   expect(waiting()).toHaveLength(1);
@@ -217,4 +225,32 @@ test('after it is closed nothing is looked at any more', async () => {
   expect(waiting()).toEqual([]);
   await feed.look();
   expect(waiting()).toEqual([]);
+});
+
+test('a file that may end in the middle of its newest day has to rest for longer before it is taken', async () => {
+  write(first);
+  const feed = await start();
+  write(`${first}2026-01-07,KELP,1.2\n`);
+  await settle(feed);
+  nowMs += doubtfulRestMs - 1;
+  await feed.look();
+  expect(lines(feed)).toHaveLength(4);
+  expect(waiting().map(({ delayMs }) => delayMs)).toEqual([500]);
+  nowMs += 1;
+  await feed.look();
+  expect(lines(feed)).toHaveLength(5);
+  expect(kinds()).toEqual(['swapped', 'swapped']);
+  write(`${first}2026-01-07,KELP,1.2\n2026-01-08,KELP,1.3\n`);
+  await settle(feed);
+  expect(lines(feed)).toHaveLength(6);
+});
+
+test('a file that is completed while it is held back is taken at once', async () => {
+  write(first);
+  const feed = await start();
+  write(`${first}2026-01-07,KELP,1.2\n`);
+  await settle(feed);
+  write(first + nextDay);
+  await settle(feed);
+  expect(lines(feed)).toHaveLength(6);
 });
