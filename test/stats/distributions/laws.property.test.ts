@@ -49,7 +49,7 @@ describe('normal', () => {
 describe('Student t', () => {
   it('quantile and tail undo each other', () => {
     fc.assert(
-      fc.property(powers(-60, -0.31), powers(-0.3, 9), (p, nu) => {
+      fc.property(powers(-25, -0.301), powers(-1, 9), (p, nu) => {
         const t = studentTQuantile(p, nu);
         expect(relativeError(studentTCdf(t, nu), p)).toBeLessThan(law);
         expect(studentTQuantile(1 - 2 ** -20, nu)).toBe(-studentTQuantile(2 ** -20, nu));

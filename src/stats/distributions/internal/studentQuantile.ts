@@ -5,8 +5,11 @@ import { studentDensity } from './studentDensity.ts';
 import { centralProbability, twoSidedTail } from './studentTail.ts';
 
 /** The point t ≥ 0 with P(T > t) = tail, for 0 < tail ≤ ½. */
-export const upperStudentQuantile = (tail: number, nu: number): number =>
-  tail > 0.3 ? nearCentre(0.5 - tail, nu) : inTail(tail, nu);
+export const upperStudentQuantile = (tail: number, nu: number): number => {
+  const central = 0.5 - tail;
+  const below1 = tail > 0.3 && central < centralProbability(1, nu);
+  return below1 ? nearCentre(central, nu) : inTail(tail, nu);
+};
 
 /** The probability between 0 and t bends downwards, so Newton's steps from its tangent at 0 rise to the answer. */
 const nearCentre = (central: number, nu: number): number => {
