@@ -74,8 +74,6 @@ export const plainReading = (bytes: Buffer, format: PlainFormat): readonly Plain
   } catch {
     return null;
   }
-  const ends = new Set(text.match(/\r\n|\r|\n/g));
-  if (ends.size > 1) return null;
   const records = recordsOf(text.replaceAll(/\r\n|\r/g, '\n'), format.delimiter);
   if (records === null || records.length === 0) return null;
   const [header = [], ...rows] = records;
