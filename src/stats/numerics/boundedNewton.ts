@@ -1,3 +1,11 @@
+import {
+  createWorkspace,
+  factorise,
+  fillErrors,
+  substitute,
+  type Workspace,
+} from './internal/newtonWorkspace.ts';
+
 /**
  * A smooth function to be maximised. Fills the gradient and the row-major second derivatives at `point` and returns
  * the value; −Infinity where the function does not exist, in which case the derivatives are not read.
@@ -24,39 +32,6 @@ export type NewtonMaximum = {
   readonly steps: number;
 };
 
-type Workspace = {
-  readonly size: number;
-  readonly point: Float64Array;
-  readonly gradient: Float64Array;
-  readonly hessian: Float64Array;
-  readonly trial: Float64Array;
-  readonly trialGradient: Float64Array;
-  readonly trialHessian: Float64Array;
-  readonly factor: Float64Array;
-  readonly step: Float64Array;
-  readonly side: Int8Array;
-  readonly errors: Float64Array;
-};
-
-const createWorkspace = (start: Float64Array): Workspace => {
-  const size = start.length;
-  const vector = () => new Float64Array(size);
-  const matrix = () => new Float64Array(size * size);
-  return {
-    size,
-    point: start.slice(),
-    gradient: vector(),
-    hessian: matrix(),
-    trial: vector(),
-    trialGradient: vector(),
-    trialHessian: matrix(),
-    factor: matrix(),
-    step: vector(),
-    side: new Int8Array(size),
-    errors: vector(),
-  };
-};
-
 /** A parameter on a bound stays there while its gradient points outward. */
 const holdBounds = (work: Workspace, settings: NewtonSettings): void => {
   for (let i = 0; i < work.size; i += 1) {
@@ -65,57 +40,6 @@ const holdBounds = (work: Workspace, settings: NewtonSettings): void => {
     const onLower = at <= (settings.lower[i] as number) && slope <= 0;
     const onUpper = at >= (settings.upper[i] as number) && slope >= 0;
     work.side[i] = onLower ? -1 : onUpper ? 1 : 0;
-  }
-};
-
-/**
- * Cholesky factor of −hessian + ridge·|diagonal| over the free parameters; a held one gets a unit row.
- * False where the matrix is not positive definite.
- */
-const factorise = (work: Workspace, ridge: number): boolean => {
-  const { size, hessian, factor, side } = work;
-  for (let row = 0; row < size; row += 1) {
-    for (let column = 0; column <= row; column += 1) {
-      const held = side[row] !== 0 || side[column] !== 0;
-      const own = row === column;
-      const entry = hessian[row * size + column] as number;
-      let sum = held ? (own ? 1 : 0) : -entry + (own ? ridge * Math.max(Math.abs(entry), 1e-8) : 0);
-      for (let k = 0; k < column; k += 1)
-        sum -= (factor[row * size + k] as number) * (factor[column * size + k] as number);
-      if (own) {
-        if (!(sum > 0)) return false;
-        factor[row * size + row] = Math.sqrt(sum);
-      } else factor[row * size + column] = sum / (factor[column * size + column] as number);
-    }
-  }
-  return true;
-};
-
-/** Solves factor·factorᵀ·result = right in place. */
-const substitute = (size: number, factor: Float64Array, right: Float64Array): void => {
-  for (let row = 0; row < size; row += 1) {
-    let sum = right[row] as number;
-    for (let k = 0; k < row; k += 1) sum -= (factor[row * size + k] as number) * (right[k] as number);
-    right[row] = sum / (factor[row * size + row] as number);
-  }
-  for (let row = size - 1; row >= 0; row -= 1) {
-    let sum = right[row] as number;
-    for (let k = row + 1; k < size; k += 1) sum -= (factor[k * size + row] as number) * (right[k] as number);
-    right[row] = sum / (factor[row * size + row] as number);
-  }
-};
-
-const fillErrors = (work: Workspace): void => {
-  const unit = new Float64Array(work.size);
-  for (let i = 0; i < work.size; i += 1) {
-    if (work.side[i] !== 0) {
-      work.errors[i] = 0;
-      continue;
-    }
-    unit.fill(0);
-    unit[i] = 1;
-    substitute(work.size, work.factor, unit);
-    work.errors[i] = Math.sqrt(unit[i] as number);
   }
 };
 

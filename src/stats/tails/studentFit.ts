@@ -6,7 +6,7 @@ import { leastCounts, refuseUnusable } from '../returns/leastCounts.ts';
 import { mostFrequentValue } from './internal/mostFrequentValue.ts';
 import { type StandardSample, standardise } from './internal/standardSample.ts';
 import { type StudentLikelihood, studentLikelihood } from './internal/studentLikelihood.ts';
-import { studentMaxima, studentSettings } from './internal/studentMaxima.ts';
+import { isHigherElsewhere, studentMaxima, studentSettings } from './internal/studentMaxima.ts';
 
 /** Location and scale in the units of the returns; the scale is not the standard deviation. */
 export type StudentParameters = { readonly location: number; readonly scale: number; readonly nu: number };
@@ -114,7 +114,8 @@ export const maximiseStudent = (returns: Float64Array, near?: StudentParameters)
   const likelihood = studentLikelihood(sample.values);
   if (near !== undefined) {
     const maximum = nearbyMaximum(sample, likelihood, near);
-    if (maximum.converged) return succeed(describe(sample, likelihood, maximum));
+    if (maximum.converged && !isHigherElsewhere(likelihood, sample, maximum.value))
+      return succeed(describe(sample, likelihood, maximum));
   }
   const highest = highestOf(studentMaxima(likelihood, sample));
   return highest === null ? notConverged(returns.length) : succeed(describe(sample, likelihood, highest));
@@ -128,8 +129,8 @@ export const maximiseStudent = (returns: Float64Array, near?: StudentParameters)
  * parameter of (location, ln scale, 1/nu) has |gradient|·standard error ≤ 1e-8, the errors from the observed information.
  * Domain: at least 20 finite returns that differ and of which fewer than a third are equal.
  * Units: returns as decimal fractions; location and scale as decimal fractions, nu a number.
- * Edges: `near` (yesterday's fit, say) makes it climb to the maximum close by, without the search for a higher one
- * elsewhere; the full search follows where that climb fails. nu = 0.5 is a bound: the fit is then held there.
+ * Edges: `near` (yesterday's fit, say) makes it climb to the maximum close by first; the full search follows where that
+ * climb fails or the profile stands higher on a coarse grid. nu = 0.5 is a bound: the fit is then held there.
  * Source: Lange, Little & Taylor 1989, JASA 84, 881-896; fixed-nu step of Kent, Tyler & Vardi 1994; bounded below by
  * n and the most frequent value as in Kent & Tyler 1991, Annals of Statistics 19, 2102-2119.
  * Example: daily returns of a share index give nu near 4.

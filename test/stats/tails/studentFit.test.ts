@@ -96,3 +96,15 @@ describe('A fit that starts from one nearby', () => {
     expect(returns).toEqual(before);
   });
 });
+
+describe('A start near a lower maximum', () => {
+  it('does not keep the fit there', () => {
+    // just under a third zero returns: the spike at zero is the highest maximum, another lies near nu = 2.
+    const returns = withZeros(83, 250);
+    const cold = accepted(fitStudent(returns));
+    const warm = accepted(fitStudent(returns, { location: 0, scale: 0.006, nu: 2.4 }));
+    expect(cold.nuOnBound).toBe(true);
+    expect(warm.nuOnBound).toBe(true);
+    expect(Math.abs(warm.logLikelihood - cold.logLikelihood)).toBeLessThan(1e-9);
+  });
+});

@@ -15,7 +15,7 @@ export const studentSettings: NewtonSettings = {
 };
 
 /** Where the profile in 1/nu is looked at first; between two of them it is looked at again where it bends unexpectedly. */
-const gridOfInverseNu = [0, 0.03, 0.08, 0.15, 0.25, 0.4, 0.6, 0.8, 1, 1.3, 1.65, largestInverseNu] as const;
+const gridOfInverseNu = [0.03, 0.08, 0.15, 0.25, 0.4, 0.6, 0.8, 1, 1.3, 1.65, largestInverseNu] as const;
 
 /** A grid point only has to tell on which side of it the maximum lies. */
 const gridTolerance = 1e-3;
@@ -32,16 +32,36 @@ const normalPoint = (sample: StandardSample): ProfilePoint => {
   };
 };
 
-/** The profile over the grid, each point climbed from its neighbour. */
-export const studentProfile = (likelihood: StudentLikelihood, sample: StandardSample): ProfilePoint[] => {
-  const points = [normalPoint(sample)];
-  let previous = points[0] as ProfilePoint;
-  for (const inverseNu of gridOfInverseNu.slice(1)) {
-    previous = climbAtFixedNu(likelihood, inverseNu, previous, gridTolerance);
+/** The profile from the normal limit on, each point climbed from its neighbour. */
+const profileOver = (
+  grid: readonly number[],
+  likelihood: StudentLikelihood,
+  sample: StandardSample,
+  tolerance: number,
+): ProfilePoint[] => {
+  let previous = normalPoint(sample);
+  const points = [previous];
+  for (const inverseNu of grid) {
+    previous = climbAtFixedNu(likelihood, inverseNu, previous, tolerance);
     points.push(previous);
   }
   return points;
 };
+
+/** A second look needs heights only, and only as far apart as a maximum is wide. */
+const coarseGrid = [0.12, 0.35, 0.8, largestInverseNu] as const;
+const coarseTolerance = 0.05;
+const clearlyHigher = 1e-9;
+
+/** Does the profile stand higher somewhere on a coarse grid than a maximum that was reached some other way? */
+export const isHigherElsewhere = (
+  likelihood: StudentLikelihood,
+  sample: StandardSample,
+  value: number,
+): boolean =>
+  profileOver(coarseGrid, likelihood, sample, coarseTolerance).some(
+    (point) => point.value > value + clearlyHigher,
+  );
 
 /** Do the two slopes contradict the rise between the points, so that the profile must turn twice in between? */
 const bendsBetween = (left: ProfilePoint, right: ProfilePoint): boolean => {
@@ -94,6 +114,6 @@ const startsOf = (points: readonly ProfilePoint[]): Float64Array[] => {
 
 /** Every local maximum that the profile shows, each climbed to the stopping rule. */
 export const studentMaxima = (likelihood: StudentLikelihood, sample: StandardSample): NewtonMaximum[] =>
-  startsOf(refine(likelihood, studentProfile(likelihood, sample))).map((start) =>
+  startsOf(refine(likelihood, profileOver(gridOfInverseNu, likelihood, sample, gridTolerance))).map((start) =>
     maximiseByNewton(likelihood.objective, start, studentSettings),
   );
