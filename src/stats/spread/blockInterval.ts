@@ -39,7 +39,8 @@ const resampledDeviation = (deviations: Float64Array): ResampledStatistic => {
  * mean block length is that of the squared deviations from the mean, for theirs is the dependence that s feels.
  * Domain: at least 10 finite returns in time order that move; refused otherwise, and for a level that B cannot reach.
  * Units: those of the returns, per period; block length in returns.
- * Edges: too narrow with few returns (see the measured coverage), yet the least wrong of the three under clustering.
+ * Edges: far too narrow all the same: under strong clustering it held the truth 39% of the time at 60 and 250 returns and
+ * 57% at 1,000 (measured coverage), no better than bonettInterval at 60. A reply must say so.
  * Source: Politis & Romano 1994, Journal of the American Statistical Association 89, 1303-1313.
  * Example: blockDeviationInterval({ returns, level, streams }).
  */

@@ -61,7 +61,8 @@ const decide = (
  * Domain: at least 2 finite returns in time order that move; refused otherwise.
  * Units: those of the returns, per period; p-values in 0..1.
  * Edges: below 10 returns only the chi-square interval can be had, and a doubt about it is said (`outOfReach`).
- * Source: own rule, resting on the measured coverage of the three.
+ * Source: own rule. Under strong clustering none of the three keeps its level (measured coverage .39, .33 and .21 at 250
+ * returns): `block` then means the least misleading, not a sound one.
  * Example: deviationTrust({ returns, level, streams }).trust is 'bonett' for 60 independent fat-tailed returns.
  */
 export const deviationTrust = (question: DeviationTrustQuestion): Result<DeviationTrust> => {
