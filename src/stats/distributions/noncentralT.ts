@@ -46,16 +46,11 @@ export const noncentralTCdf = (t: number, nu: number, delta: number): number => 
   return upperTail(-t, nu, -delta);
 };
 
-/**
- * The normal score of P(T ≤ t), nearly a straight line in t and in delta. The tail that t lies in is the one computed; an
- * end of the range stands for what a double cannot hold.
- */
-const normalScore = (t: number, nu: number, delta: number): number =>
-  t <= delta ? scoreOf(upperTail(-t, nu, -delta)) : -scoreOf(upperTail(t, nu, delta));
-
-const scoreOf = (p: number): number => {
-  if (p <= 0) return -40;
-  return p >= 1 ? 40 : normalQuantile(p);
+/** The normal score of P(T ≤ t), nearly a straight line in t and in delta; ±40 stands for what a double cannot hold. */
+const normalScore = (t: number, nu: number, delta: number): number => {
+  const cdf = upperTail(-t, nu, -delta);
+  if (cdf <= 0) return -40;
+  return cdf >= 1 ? 40 : normalQuantile(cdf);
 };
 
 /**

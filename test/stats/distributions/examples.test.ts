@@ -32,7 +32,7 @@ import {
   studentTTwoSidedTail,
   studentTUpperTail,
 } from '../../../src/stats/distributions/studentT.ts';
-import { relativeError } from '../relativeError.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 
 // The examples of the doc blocks. Where they are not exact by hand they are SciPy 1.17.1's (norm, t, chi2, beta, nct), to the
 // 15 digits shown; 1e-13 leaves room for the last of them and for the inputs' own rounding.

@@ -8,7 +8,7 @@ import {
   studentTQuantile,
   studentTUpperTail,
 } from '../../../src/stats/distributions/studentT.ts';
-import { relativeError } from '../relativeError.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 import { gridRows } from './figures.ts';
 
 // Source of every figure here: fixtures/quantiles.json, mpmath 1.2.1 at 60 digits. 1e-12 is what is promised of quantiles

@@ -21,7 +21,7 @@ import {
   studentTQuantile,
   studentTUpperTail,
 } from '../../../src/stats/distributions/studentT.ts';
-import { relativeError } from '../relativeError.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 
 const seed = { seed: 1908, numRuns: 300 };
 const between = (min: number, max: number): fc.Arbitrary<number> =>

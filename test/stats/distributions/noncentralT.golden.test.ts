@@ -6,7 +6,7 @@ import {
   noncentralTUpperTail,
 } from '../../../src/stats/distributions/noncentralT.ts';
 import { studentTQuantile } from '../../../src/stats/distributions/studentT.ts';
-import { relativeError } from '../relativeError.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 import { pointRows, powerRows } from './figures.ts';
 
 describe('noncentral t against mpmath', () => {
@@ -43,6 +43,14 @@ describe('noncentral t where delta is far from t', () => {
     [3, 0.05, 2, 0.1198692311485644],
   ])('t %d, nu %d, delta %d', (t, nu, delta, expected) => {
     expect(relativeError(noncentralTCdf(t, nu, delta), expected)).toBeLessThan(1e-11);
+  });
+
+  it('reaches far quantiles', () => {
+    // nu = 1: the tails are those of a Cauchy number, t falls as 1/p; back through the tail itself, which is checked above
+    for (const p of [1e-12, 1e-3, 0.999]) {
+      const t = noncentralTQuantile(p, 1, 0.5);
+      expect(relativeError(noncentralTCdf(t, 1, 0.5), p)).toBeLessThan(1e-12);
+    }
   });
 
   it('never leaves [0, 1]', () => {

@@ -18,7 +18,7 @@ import {
   studentTQuantile,
   studentTTwoSidedTail,
 } from '../../../src/stats/distributions/studentT.ts';
-import { relativeError } from '../relativeError.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 import { type Figures, pointRows } from './figures.ts';
 
 // Source of every figure here: fixtures/distribution-points.json, mpmath 1.3.0 from the definitions. A tolerance is what
