@@ -1,5 +1,18 @@
 /** Who may import whom, each rule with its reason. DEVELOPERS.md draws the same picture. */
-const rooms = ['terms', 'wording', 'stats', 'questions', 'feed', 'records', 'config', 'answers', 'present', 'digests', 'workspaces', 'start'];
+const rooms = [
+  'terms',
+  'wording',
+  'stats',
+  'questions',
+  'feed',
+  'records',
+  'config',
+  'answers',
+  'present',
+  'digests',
+  'workspaces',
+  'start',
+];
 
 /** For each room, the rooms it may import beside itself; a name ending in * may be imported for its types only. */
 const mayImport = {
@@ -71,11 +84,31 @@ module.exports = {
       from: { path: pattern(['terms', 'wording', 'stats', 'questions', 'answers', 'present']) },
       to: { dependencyTypes: ['core'], pathNot: '^(node:)?crypto$' },
     },
-    onlyIn('chat-library', 'node_modules/@slack/', ['workspaces/slack'], 'the platform can be replaced in one folder'),
+    onlyIn(
+      'chat-library',
+      'node_modules/@slack/',
+      ['workspaces/slack'],
+      'the platform can be replaced in one folder',
+    ),
     onlyIn('file-reader', 'node_modules/@duckdb/', ['feed'], 'how files are read is the feed’s secret'),
-    onlyIn('database', 'node_modules/(better-sqlite3|kysely|pg)/', ['records'], 'the store can be replaced in one folder'),
-    onlyIn('distribution-library', 'node_modules/jstat/', ['stats'], 'every figure goes through our own finished functions'),
-    onlyIn('worker-pool', 'node_modules/piscina/', ['start'], 'threads are machinery; the core does not know of them'),
+    onlyIn(
+      'database',
+      'node_modules/(better-sqlite3|kysely|pg)/',
+      ['records'],
+      'the store can be replaced in one folder',
+    ),
+    onlyIn(
+      'distribution-library',
+      'node_modules/jstat/',
+      ['stats'],
+      'every figure goes through our own finished functions',
+    ),
+    onlyIn(
+      'worker-pool',
+      'node_modules/piscina/',
+      ['start'],
+      'threads are machinery; the core does not know of them',
+    ),
     {
       name: 'nobody-imports-start',
       severity: 'error',
@@ -101,7 +134,10 @@ module.exports = {
   options: {
     tsConfig: { fileName: 'tsconfig.json' },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'node', 'types', 'default'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'node', 'types', 'default'],
+    },
     doNotFollow: { path: 'node_modules' },
   },
 };
