@@ -120,6 +120,15 @@ describe('A Student tail', () => {
     expect((upper ?? Number.NaN) - figures.var).toBeGreaterThan(figures.var - (lower ?? Number.NaN));
   });
 
+  it('finds a lower end that is further away than the scale is long', () => {
+    const returns = Float64Array.from({ length: 20 }, (_, index) => index / 1000);
+    const { varInterval, notes } = accepted(
+      studentTail({ returns, tailLevel: level('0.8'), confidence: level('0.999'), streams }),
+    );
+    expect(varInterval?.lower).not.toBeNull();
+    expect(notes.map(({ code }) => code)).not.toContain('profileNotConverged');
+  });
+
   it('looks at the other tail where the returns are negated', () => {
     const returns = indexReturns('DAX', '250');
     const { location, scale } = accepted(ask(returns)).parameters;

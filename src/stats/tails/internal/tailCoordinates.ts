@@ -3,6 +3,7 @@ import {
   fillByDifferences,
   quantileMultiplier,
   type SmoothValue,
+  shortfallMultiplier,
   shortfallNumerator,
 } from './tailMultiplier.ts';
 
@@ -58,13 +59,32 @@ const varByLocation = (tail: number, figure: number): TailCoordinates => {
   };
 };
 
+/** Share of scale·multiplier that must be left for the location to stay, and how many scales it may be moved instead. */
+const leastShareLeft = 0.5;
+const furthestMove = 3;
+
+/**
+ * The location from which to start where the scale holds the figure. That of the given distribution; but where it would
+ * leave hardly any scale, and a short move keeps the given one, the location that goes with that.
+ */
+const startLocation = ({ location, logScale }: StudentPlace, figure: number, multiplier: number): number => {
+  const scale = Math.exp(logScale);
+  const wanted = scale * multiplier;
+  const left = figure + location;
+  const cramped = left < leastShareLeft * wanted && wanted - left <= furthestMove * scale;
+  return left <= 0 || cramped ? wanted - figure : location;
+};
+
 /** VaR held by the scale, coordinates (location, 1/nu): well conditioned however far out the figure lies. */
 const varByScale = (tail: number, figure: number): TailCoordinates => {
   const logMultiplier: SmoothValue = { value: 0, slope: 0, curvature: 0 };
   return {
     lower: Float64Array.of(-free, 0),
     upper: Float64Array.of(free, largestInverseNu),
-    of: ({ location, inverseNu }) => Float64Array.of(location, inverseNu),
+    of: (place) => {
+      const multiplier = quantileMultiplier(tail, 1 / place.inverseNu);
+      return Float64Array.of(startLocation(place, figure, multiplier), place.inverseNu);
+    },
     place: (coordinates, parameters, first, second) => {
       const location = coordinates[0] as number;
       const inverseNu = coordinates[1] as number;
@@ -98,8 +118,11 @@ export const esCoordinates = (tail: number, figure: number): TailCoordinates => 
   return {
     lower: Float64Array.of(-free, 0),
     upper: Float64Array.of(free, free),
-    of: ({ location, inverseNu }) =>
-      Float64Array.of(location, -Math.log1p(-Math.min(inverseNu, closestStart))),
+    of: (place) => {
+      const inverseNu = Math.min(place.inverseNu, closestStart);
+      const multiplier = shortfallMultiplier(tail, 1 / inverseNu);
+      return Float64Array.of(startLocation(place, figure, multiplier), -Math.log1p(-inverseNu));
+    },
     place: (coordinates, parameters, first, second) => {
       const location = coordinates[0] as number;
       const depth = coordinates[1] as number;
