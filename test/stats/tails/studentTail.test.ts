@@ -121,7 +121,7 @@ describe('A Student tail', () => {
   });
 
   it('finds a lower end that is further away than the scale is long', () => {
-    const returns = Float64Array.from({ length: 20 }, (_, index) => index / 1000);
+    const returns = Float64Array.from({ length: 20 }, (_, index) => -(index ** 2) / 10_000);
     const { varInterval, notes } = accepted(
       studentTail({ returns, tailLevel: level('0.8'), confidence: level('0.999'), streams }),
     );
