@@ -20,7 +20,7 @@ const resampleTolerance = 1e-4;
 const stepsToExplore = 40;
 const stepsToFinish = 300;
 /** Bands of β in which separate maxima are seen; the best start of each band is followed. */
-const startBetaBands = [[0, 0.3], [0.6, 0.8], [0.9, 0.96], [0.985]];
+const startBetaBands = [[0], [0.3, 0.6], [0.8, 0.9], [0.96, 0.985]];
 const startAlphas = [0.01, 0.03, 0.08, 0.2];
 const startInverseNu = 0.15;
 
@@ -103,12 +103,20 @@ export const climbNear = (
   innovations: Innovations,
 ): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore);
 
-/** The same for a resample of the returns that were fitted at `start`. */
+/**
+ * The same for a resample of the returns that were fitted at `start`. Most climbs need five steps; one that creeps along
+ * α = 0 is not followed, because the constant variance that it stands for is fitted by itself.
+ */
 export const climbResample = (
   returns: Float64Array,
   start: Float64Array,
   innovations: Innovations,
-): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore, resampleTolerance);
+): NewtonMaximum => {
+  const half = stepsToExplore / 2;
+  const first = climbFrom(returns, start, innovations, false, half, resampleTolerance);
+  if (first.converged || first.point[parameter.alpha] === 0) return first;
+  return climbFrom(returns, first.point, innovations, false, half, resampleTolerance);
+};
 
 /** Searches from every promising start. `returns` have mean 0 and mean square 1. */
 export const searchGarch = (returns: Float64Array, innovations: Innovations): GarchSearch => {

@@ -1,0 +1,92 @@
+import type { CoverageProcess } from '../../src/stats/coverage/cell.ts';
+import { filteredKinds } from '../../src/stats/tails/filtered/filteredKinds.ts';
+import {
+  type FilterSource,
+  type FilterState,
+  filterSource,
+} from '../../src/stats/tails/filtered/internal/filterSource.ts';
+import { resampledFigures } from '../../src/stats/tails/filtered/internal/resampledFigures.ts';
+import { refuseTooFewForLevel } from '../../src/stats/tails/historicalTail.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../src/stats/tails/internal/tailMultiplier.ts';
+import { type Level, tailFraction } from '../../src/terms/level.ts';
+import type { Random } from '../../src/terms/random.ts';
+import { level } from '../stats/levels.ts';
+import { garch, type Path, trueDeviation, trueMean } from './processes.ts';
+import type { Ends, Procedure, Sample } from './simulate.ts';
+import { tailLevels } from './tailProcedures.ts';
+import { trueTail } from './tailTruth.ts';
+
+type EndsByFigure = ReadonlyMap<string, Ends | null>;
+
+const keyOf = (figure: 'var' | 'es', text: string): string => `${figure}.${text}`;
+
+/** The refits are the same at every tail level, so they are made once and read as often as levels ask. */
+const withRememberedRefits = (source: FilterSource): { source: FilterSource; restart: () => void } => {
+  const states: (FilterState | null)[] = [];
+  let next = 0;
+  const resample = (random: Random): FilterState | null => {
+    if (next === states.length) states.push(source.resample(random));
+    next += 1;
+    return states[next - 1] ?? null;
+  };
+  return {
+    source: { ...source, resample },
+    restart: () => {
+      next = 0;
+    },
+  };
+};
+
+/** Both intervals at every level, as filteredTail gives them. */
+const allEnds = ({ returns, level: confidence, streams, replicates }: Sample): EndsByFigure => {
+  const ends = new Map<string, Ends | null>();
+  const found = filterSource(returns, filteredKinds(returns.length)[0]);
+  if (!found.ok) return ends;
+  const { source, restart } = withRememberedRefits(found.value);
+  for (const text of tailLevels) {
+    const tailLevel = level(text);
+    if (refuseTooFewForLevel(returns.length, tailLevel, 'A filtered tail figure') !== null) continue;
+    restart();
+    const figures = resampledFigures(source, { returns, tailLevel, confidence, streams, replicates });
+    ends.set(keyOf('var', text), figures.varInterval);
+    ends.set(keyOf('es', text), figures.esInterval);
+  }
+  return ends;
+};
+
+/** A suite asks for one figure after another over the same samples; each sample is worked through once. */
+const remembered = new Map<string, EndsByFigure>();
+
+const sampleKey = ({ returns, level: { digits, places } }: Sample): string =>
+  `${returns.length} ${returns[0]} ${returns[returns.length - 1]} ${digits} ${places}`;
+
+const endsOf = (sample: Sample, figure: string): Ends | null => {
+  const key = sampleKey(sample);
+  const known = remembered.get(key) ?? allEnds(sample);
+  remembered.set(key, known);
+  return known.get(figure) ?? null;
+};
+
+/** The figure of an innovation with mean 0 and standard deviation 1. */
+const unitFigure = (figure: 'var' | 'es', process: CoverageProcess, tailLevel: Level): number => {
+  if (process !== 'garchT') return (trueTail(figure, process, tailLevel) + trueMean) / trueDeviation;
+  const nu = garch.degreesOfFreedom;
+  const multiplier = figure === 'var' ? quantileMultiplier : shortfallMultiplier;
+  return multiplier(tailFraction(tailLevel), nu) * Math.sqrt((nu - 2) / nu);
+};
+
+/** The truth is the figure of the very next day, whose deviation the simulation knows. */
+const nextDayTruth =
+  (figure: 'var' | 'es', tailLevel: Level) =>
+  (process: CoverageProcess, path: Path): number =>
+    path.nextDeviation * unitFigure(figure, process, tailLevel) - trueMean;
+
+export const filteredProcedures: readonly Procedure[] = tailLevels.flatMap((text) =>
+  (['var', 'es'] as const).map(
+    (figure): Procedure => ({
+      name: `tail.filtered.${figure}.${text}`,
+      ends: (sample) => endsOf(sample, keyOf(figure, text)),
+      truth: nextDayTruth(figure, level(text)),
+    }),
+  ),
+);
