@@ -45,6 +45,7 @@ export const problemCodes = {
   tokenMissing: 'a token that the workspace needs is not set',
   platformUnreachable: 'the workspace platform does not answer',
   // records
+  storeUnavailable: 'the store of records cannot be read or written',
   unknownRecord: 'no such answer on record, or none that may be shown here',
   unknownSubscription: 'no such digest or watch, or none that may be shown here',
   notPermitted: 'not permitted here',

@@ -1,0 +1,75 @@
+/** The tables as the query builder sees them. Column names are the names in the database. */
+export type PriceColumnsRow = {
+  readonly digest: string;
+  readonly ticker: string;
+  readonly price_count: number;
+  readonly packed: Uint8Array;
+};
+
+export type AnswerRow = {
+  readonly id: string;
+  /** The entry of the chain that vouches for this row. */
+  readonly number: number;
+  readonly content: string;
+  readonly verb: string;
+  readonly question: string;
+  readonly as_of: string;
+  readonly method_version: string;
+  readonly body: string;
+};
+
+export type AnswerIdRow = { readonly id: string; readonly answer_id: string; readonly place: number };
+
+export type AnswerSeriesRow = {
+  readonly answer_id: string;
+  readonly place: number;
+  readonly ticker: string;
+  readonly prices: string;
+  /** What the closes mean and what the feed says of them, as JSON. */
+  readonly about: string;
+};
+
+export type AskingRow = {
+  readonly number: number;
+  readonly answer_id: string;
+  readonly asked_at_ms: number;
+  readonly place: string;
+  readonly team: string | null;
+  readonly channel: string | null;
+  readonly person: string | null;
+  readonly message: string | null;
+  readonly thread: string | null;
+  readonly words: string;
+  readonly reply_text: string;
+  readonly bot_version: string;
+  readonly node_version: string;
+  readonly settings_hash: string;
+};
+
+export type EntryKind = 'answer' | 'asking' | 'deletion';
+
+export type ChainRow = {
+  readonly number: number;
+  readonly kind: EntryKind;
+  /** The id of the answer, or for a deletion the number of the entry whose row was taken out. */
+  readonly subject: string;
+  readonly digest: string;
+  readonly previous: string;
+  readonly hash: string;
+};
+
+/** One row: its update is what every writer waits for, so that entries never fork. */
+export type ChainHeadRow = { readonly name: 'head'; readonly length: number; readonly hash: string };
+
+export type SchemaVersionRow = { readonly version: number };
+
+export type Tables = {
+  readonly price_columns: PriceColumnsRow;
+  readonly answers: AnswerRow;
+  readonly answer_ids: AnswerIdRow;
+  readonly answer_series: AnswerSeriesRow;
+  readonly askings: AskingRow;
+  readonly chain: ChainRow;
+  readonly chain_head: ChainHeadRow;
+  readonly schema_versions: SchemaVersionRow;
+};

@@ -1,0 +1,43 @@
+import { closeSync, mkdirSync, openSync } from 'node:fs';
+import { dirname } from 'node:path';
+import Database from 'better-sqlite3';
+import { Kysely, SqliteDialect } from 'kysely';
+import { type Result, refuse, succeed } from '../terms/result.ts';
+import type { Tables } from './database.ts';
+import { migrate } from './migrations.ts';
+import { makeStore, type Store, storeProblem } from './store.ts';
+
+/** The driver waits on this thread, so a store locked by another process must not hold answers up for long. */
+const lockWaitMs = 250;
+
+const inMemory = ':memory:';
+
+/** A new file is for its owner alone: it holds what people asked. */
+const makeFile = (path: string): void => {
+  mkdirSync(dirname(path), { recursive: true });
+  closeSync(openSync(path, 'a', 0o600));
+};
+
+/** WAL lets readers go on beside a writer; FULL makes what was kept survive a loss of power. */
+const prepare = (database: Database.Database): void => {
+  database.pragma('journal_mode = WAL');
+  database.pragma('synchronous = FULL');
+  database.pragma('foreign_keys = ON');
+};
+
+/** Opens the store in an SQLite file, which is made where there is none, or `null`: in memory. */
+export const openSqlite = async (path: string | null): Promise<Result<Store>> => {
+  let database: Database.Database | null = null;
+  try {
+    if (path !== null) makeFile(path);
+    const opened = new Database(path ?? inMemory, { timeout: lockWaitMs });
+    database = opened;
+    prepare(opened);
+    const db = new Kysely<Tables>({ dialect: new SqliteDialect({ database: opened }) });
+    await migrate(db, { bytes: 'blob' });
+    return succeed(makeStore(db, (to) => opened.backup(to)));
+  } catch (error) {
+    database?.close();
+    return refuse(storeProblem(error));
+  }
+};
