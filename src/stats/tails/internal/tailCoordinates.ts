@@ -59,21 +59,12 @@ const varByLocation = (tail: number, figure: number): TailCoordinates => {
   };
 };
 
-/** Share of scale·multiplier that must be left for the location to stay, and how many scales it may be moved instead. */
-const leastShareLeft = 0.5;
-const furthestMove = 3;
-
 /**
- * The location from which to start where the scale holds the figure. That of the given distribution; but where it would
- * leave hardly any scale, and a short move keeps the given one, the location that goes with that.
+ * The location from which to start where the scale holds the figure: that of the given distribution, or, where it would
+ * leave no scale above 0, the location that goes with the given scale.
  */
-const startLocation = ({ location, logScale }: StudentPlace, figure: number, multiplier: number): number => {
-  const scale = Math.exp(logScale);
-  const wanted = scale * multiplier;
-  const left = figure + location;
-  const cramped = left < leastShareLeft * wanted && wanted - left <= furthestMove * scale;
-  return left <= 0 || cramped ? wanted - figure : location;
-};
+const startLocation = ({ location, logScale }: StudentPlace, figure: number, multiplier: number): number =>
+  figure + location > 0 ? location : Math.exp(logScale) * multiplier - figure;
 
 /** VaR held by the scale, coordinates (location, 1/nu): well conditioned however far out the figure lies. */
 const varByScale = (tail: number, figure: number): TailCoordinates => {
