@@ -3,15 +3,19 @@ import { type FeedCheckCode, feedChecks, weightOf } from '../checks.ts';
 
 const mostExamples = 5;
 
+/** An example whose value may still have to be fetched from the file. */
+export type KeptExample = Omit<FindingExample, 'value'> & { value: string | null };
+
 type Seen = {
   count: number;
-  readonly examples: FindingExample[];
-  readonly firstOfTicker: Map<string, FindingExample>;
+  readonly examples: KeptExample[];
+  readonly firstOfTicker: Map<string, KeptExample>;
 };
 
 /** What the checks of one reading have found so far. */
 export type Findings = {
-  readonly record: (code: FeedCheckCode, example: Partial<FindingExample>) => void;
+  /** Returns the example where it is kept, so that its value can be filled in later. */
+  readonly record: (code: FeedCheckCode, example: Partial<FindingExample>) => KeptExample | null;
   readonly count: (code: FeedCheckCode) => number;
   /** The first place at which a code was seen, for one ticker or at all. */
   readonly first: (code: FeedCheckCode, ticker?: string) => FindingExample | null;
@@ -39,10 +43,11 @@ export const makeFindings = (): Findings => {
     seen.count += 1;
     const { ticker } = example;
     const isFirstOfTicker = typeof ticker === 'string' && !seen.firstOfTicker.has(ticker);
-    if (seen.examples.length >= mostExamples && !isFirstOfTicker) return;
-    const whole = { ...nowhere, ...example };
+    if (seen.examples.length >= mostExamples && !isFirstOfTicker) return null;
+    const whole: KeptExample = { ...nowhere, ...example };
     if (seen.examples.length < mostExamples) seen.examples.push(whole);
     if (isFirstOfTicker) seen.firstOfTicker.set(ticker, whole);
+    return whole;
   };
   const first: Findings['first'] = (code, ticker) => {
     const seen = seenOf.get(code);

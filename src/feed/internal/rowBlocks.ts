@@ -18,21 +18,36 @@ const newBlock = (): RowBlock => ({
 export type RowBlocks = {
   readonly blocks: RowBlock[];
   readonly add: (tickerNumber: number, day: number, close: number) => void;
+  /** The same for many rows at once, of which every one is to be kept. */
+  readonly addAll: (tickerNumbers: Int32Array, days: Int32Array, closes: Float64Array) => void;
 };
 
 export const makeRowBlocks = (): RowBlocks => {
   const blocks: RowBlock[] = [];
-  let last: RowBlock | null = null;
-  const add = (tickerNumber: number, day: number, close: number): void => {
-    if (last === null || last.count === rowsPerBlock) {
-      last = newBlock();
-      blocks.push(last);
-    }
-    const at = last.count;
-    last.tickerNumbers[at] = tickerNumber;
-    last.days[at] = day;
-    last.closes[at] = close;
-    last.count = at + 1;
+  let last = newBlock();
+  const withRoom = (): RowBlock => {
+    if (last.count === rowsPerBlock) last = newBlock();
+    if (last.count === 0) blocks.push(last);
+    return last;
   };
-  return { blocks, add };
+  const add: RowBlocks['add'] = (tickerNumber, day, close) => {
+    const block = withRoom();
+    const at = block.count;
+    block.tickerNumbers[at] = tickerNumber;
+    block.days[at] = day;
+    block.closes[at] = close;
+    block.count = at + 1;
+  };
+  const addAll: RowBlocks['addAll'] = (tickerNumbers, days, closes) => {
+    for (let start = 0; start < days.length; ) {
+      const block = withRoom();
+      const end = Math.min(start + rowsPerBlock - block.count, days.length);
+      block.tickerNumbers.set(tickerNumbers.subarray(start, end), block.count);
+      block.days.set(days.subarray(start, end), block.count);
+      block.closes.set(closes.subarray(start, end), block.count);
+      block.count += end - start;
+      start = end;
+    }
+  };
+  return { blocks, add, addAll };
 };

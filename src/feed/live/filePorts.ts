@@ -4,6 +4,7 @@ import type { Clock } from '../../terms/clock.ts';
 import { openFiles } from '../openFeed.ts';
 import { type FileState, listPriceFiles, stateOfFile } from '../priceFiles.ts';
 import type { FeedSettings } from '../settings.ts';
+import { openInThread } from '../thread/openInThread.ts';
 import type { LiveFeedPorts } from './ports.ts';
 
 /** The deepest folder of a path whose name holds no wildcard, so that a file that is replaced is noticed too. */
@@ -24,6 +25,9 @@ const watchFolder = (folder: string, call: () => void): { close: () => void } =>
   }
 };
 
+/** Files below this size are read sooner than a thread is made. */
+const smallBytes = 2_000_000;
+
 /** The ports of a live feed on the file system of this machine. `tell` is called once per piece of news. */
 export const filePorts = (
   settings: FeedSettings,
@@ -35,7 +39,10 @@ export const filePorts = (
     const holidays: FileState | null = path === null ? null : await stateOfFile(path);
     return { files: await listPriceFiles(settings.path), beside: holidays === null ? [] : [holidays] };
   },
-  open: (files, nowMs) => openFiles(files, settings, nowMs),
+  open: (files, nowMs) => {
+    const bytes = files.reduce((sum, file) => sum + file.bytes, 0);
+    return bytes < smallBytes ? openFiles(files, settings, nowMs) : openInThread(files, settings, nowMs);
+  },
   nowMs: clock.nowMs,
   later: (delayMs, call) => {
     const timer = setTimeout(call, delayMs);

@@ -1,5 +1,5 @@
 import { type Findings, makeFindings } from '../findings.ts';
-import { makeRowBlocks, type RowBlock } from '../rowBlocks.ts';
+import { makeRowBlocks, type RowBlocks } from '../rowBlocks.ts';
 
 /** What the optional columns say of one ticker, gathered over all its rows. */
 export type TickerExtras = {
@@ -11,10 +11,8 @@ export type TickerExtras = {
 };
 
 /** Rows gathered from one price file after the other. */
-export type Collected = {
+export type Collected = RowBlocks & {
   readonly names: string[];
-  readonly blocks: RowBlock[];
-  readonly add: (tickerNumber: number, day: number, price: number) => void;
   /** The number of a ticker, a new one at its first sight. */
   readonly numberOf: (ticker: string) => number;
   /** What the optional columns say of a ticker so far; null for a number that no ticker has. */

@@ -1,11 +1,13 @@
 import type { DuckDBDataChunk } from '@duckdb/node-api';
 import { type Result, succeed } from '../../../terms/result.ts';
 import type { FeedSettings } from '../../settings.ts';
+import { blankDay } from './cellCodes.ts';
 import { numberSql, textSql, unreadTextSql } from './cellSql.ts';
 import type { Collected, TickerExtras } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
+import { rawInts } from './rawVectors.ts';
 import type { Source } from './source.ts';
-import { doubles, integers, texts } from './vectors.ts';
+import { doubles, texts } from './vectors.ts';
 
 /** The optional columns of a long file: the SQL that reads them, and what is done with a chunk of them. */
 export type ExtraColumns = {
@@ -34,8 +36,9 @@ const currencyPart = (
   const found = findColumns(path, source.columns, { currency: name }, 'feed.columns');
   if (!found.ok) return found;
   const read: Reader = (chunk, column, extrasOf, firstRow) => {
+    const { rowCount } = chunk;
     const currencies = texts(chunk, column);
-    for (let at = 0; at < chunk.rowCount; at += 1) {
+    for (let at = 0; at < rowCount; at += 1) {
       const extras = extrasOf(at);
       const currency = currencies.getItem(at);
       if (extras === null || currency === null || currency === extras.currency) continue;
@@ -60,9 +63,10 @@ const volumePart = (
   if (!found.ok) return found;
   const number = numberSql(found.value.volume, settings.format.decimalMark);
   const read: Reader = (chunk, column, extrasOf, firstRow) => {
+    const { rowCount } = chunk;
     const volumes = doubles(chunk, column);
     const unread = texts(chunk, column + 1);
-    for (let at = 0; at < chunk.rowCount; at += 1) {
+    for (let at = 0; at < rowCount; at += 1) {
       const extras = extrasOf(at);
       if (extras === null) continue;
       const volume = volumes.getItem(at);
@@ -87,13 +91,14 @@ const closePart = (settings: FeedSettings, source: Source, path: string): Result
   const found = findColumns(path, source.columns, { close }, 'feed.columns');
   if (!found.ok) return found;
   const read: Reader = (chunk, column, extrasOf) => {
-    const days = integers(chunk, 1);
+    const { rowCount } = chunk;
+    const days = rawInts(chunk, 1);
     const closes = doubles(chunk, column);
-    for (let at = 0; at < chunk.rowCount; at += 1) {
+    for (let at = 0; at < rowCount; at += 1) {
       const extras = extrasOf(at);
-      const day = days.getItem(at);
+      const day = days[at] as number;
       const value = closes.getItem(at);
-      if (extras === null || day === null || value === null || day < extras.lastDay) continue;
+      if (extras === null || day <= blankDay || value === null || day < extras.lastDay) continue;
       extras.lastDay = day;
       extras.lastClose = value;
     }

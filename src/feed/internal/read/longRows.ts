@@ -1,13 +1,24 @@
 import type { DuckDBConnection, DuckDBDataChunk } from '@duckdb/node-api';
 import { type Problem, problem } from '../../../terms/problem.ts';
 import type { FeedSettings } from '../../settings.ts';
-import { daySql, numberSql, type SourceColumn, textSql, unreadTextSql } from './cellSql.ts';
-import { type Collected, isTickerName } from './collected.ts';
+import {
+  blankDay,
+  blankPrice,
+  codedDaySql,
+  codedPriceSql,
+  codeOfNoPrice,
+  isPrice,
+  unreadDay,
+} from './cellCodes.ts';
+import { type SourceColumn, textSql } from './cellSql.ts';
+import type { Collected } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
 import { type ExtraColumns, makeExtras } from './extras.ts';
-import { isPrice, recordNoPrice } from './priceCell.ts';
+import { rawDoubles, rawInts } from './rawVectors.ts';
 import type { Source } from './source.ts';
-import { chunksOf, doubles, integers, texts } from './vectors.ts';
+import { makeTickerReader, noTicker } from './tickerNumbers.ts';
+import { chunksOf } from './vectors.ts';
+import { firstRowOfFile, makeWantedTexts, textsOfRows, type WantedTexts } from './wantedTexts.ts';
 
 /** What reading one file came to: how many rows, or why the whole file is refused. */
 export type FileReading = { readonly rowCount: number; readonly refusal: Problem | null };
@@ -18,64 +29,107 @@ type LongColumns = {
   readonly price: SourceColumn;
 };
 
-/** 52 bits of a hash stand for the ticker, because a number is read many times faster than a text. */
-const hashSql = ({ cell }: SourceColumn): string => `CAST(hash(${cell}) >> 12 AS DOUBLE)`;
-
 const querySql = (
-  settings: FeedSettings,
+  { format }: FeedSettings,
   { date, ticker, price }: LongColumns,
   extras: ExtraColumns,
   from: string,
 ): string => {
-  const day = daySql(date, settings.format);
-  const number = numberSql(price, settings.format.decimalMark);
+  const name = ticker.type === 'VARCHAR' ? ticker.cell : textSql(ticker);
   const columns = [
-    hashSql(ticker),
-    day,
-    number,
-    textSql(ticker),
-    unreadTextSql(date, day),
-    unreadTextSql(price, number),
+    `coalesce(${name}, '')`,
+    codedDaySql(date, format),
+    codedPriceSql(price, format),
     ...extras.sql,
   ];
   return `SELECT ${columns.join(', ')} FROM ${from}`;
 };
 
-const noTicker = -1;
-const wrongName = -2;
+/** The columns of a chunk. Row `at` of it stands in row `firstRow + at` of the file. */
+type Rows = {
+  readonly file: string;
+  readonly firstRow: number;
+  readonly tickerNumbers: Int32Array;
+  readonly days: Int32Array;
+  readonly prices: Float64Array;
+};
 
-/** Numbers of the tickers of a chunk's rows. */
-const makeTickerReader = (collected: Collected) => {
-  const numberOfHash = new Map<number, number>();
-  const firstSight = (name: string | null): number => {
-    if (name === null) return noTicker;
-    return isTickerName(name) ? collected.numberOf(name) : wrongName;
-  };
-  return (chunk: DuckDBDataChunk, numbers: Int32Array): void => {
-    const hashes = doubles(chunk, 0);
-    const names = texts(chunk, 3);
-    let lastHash = Number.NaN;
-    let number = noTicker;
-    for (let row = 0; row < chunk.rowCount; row += 1) {
-      const hash = hashes.getItem(row) as number;
-      if (hash !== lastHash) {
-        lastHash = hash;
-        const known = numberOfHash.get(hash);
-        number = known ?? firstSight(names.getItem(row));
-        if (known === undefined) numberOfHash.set(hash, number);
-      }
-      numbers[row] = number;
-    }
-  };
+const isWhole = (number: number, day: number, price: number): boolean =>
+  number >= 0 && day > blankDay && isPrice(price);
+
+/** Records why a row is not whole. False where the whole file must be refused: it has a price or a date but no ticker. */
+const recordFault = (
+  rows: Rows,
+  at: number,
+  columns: LongColumns,
+  collected: Collected,
+  wanted: WantedTexts,
+): boolean => {
+  const { file, firstRow, tickerNumbers, days, prices } = rows;
+  const number = tickerNumbers[at] as number;
+  const price = prices[at] as number;
+  const row = firstRow + at;
+  if (number < 0) {
+    if (number !== noTicker || days[at] !== blankDay || price !== blankPrice) return false;
+    collected.findings.record('blankRow', { file, row });
+    return true;
+  }
+  const day = (days[at] as number) > blankDay ? (days[at] as number) : null;
+  const place = { file, row, ticker: collected.names[number] ?? null, day };
+  if (day === null) {
+    const kept = collected.findings.record('unreadableDate', place);
+    if (days[at] === unreadDay) wanted.want(kept, columns.date, row);
+    else if (kept !== null) kept.value = '';
+  }
+  if (isPrice(price)) return true;
+  const code = codeOfNoPrice(price);
+  const hasNumber = code === 'priceNotPositive' || code === 'priceNotFinite';
+  const kept = collected.findings.record(code, { ...place, value: hasNumber ? String(price) : null });
+  if (code === 'unreadablePrice') wanted.want(kept, columns.price, row);
+  return true;
+};
+
+/** Adds a chunk's prices. The place of the first row that refuses the file, or −1. */
+const addRows = (rows: Rows, columns: LongColumns, collected: Collected, wanted: WantedTexts): number => {
+  const { tickerNumbers, days, prices } = rows;
+  let whole = 0;
+  const count = days.length;
+  while (
+    whole < count &&
+    isWhole(tickerNumbers[whole] as number, days[whole] as number, prices[whole] as number)
+  ) {
+    whole += 1;
+  }
+  collected.addAll(tickerNumbers.subarray(0, whole), days.subarray(0, whole), prices.subarray(0, whole));
+  for (let at = whole; at < count; at += 1) {
+    const number = tickerNumbers[at] as number;
+    const day = days[at] as number;
+    const price = prices[at] as number;
+    if (isWhole(number, day, price)) collected.add(number, day, price);
+    else if (!recordFault(rows, at, columns, collected, wanted)) return at;
+  }
+  return -1;
 };
 
 const mostShown = 60;
 
-const withoutTicker = (path: string, column: string, row: number, name: string | null): Problem => {
-  const shown = (name ?? '').slice(0, mostShown);
-  const message = `${path}, column “${column}”, row ${row}: “${shown}” is not the name of a ticker. Correct the cell and save the file again.`;
+const withoutTicker = (path: string, column: string, row: number, name: string): Problem => {
+  const message = `${path}, column “${column}”, row ${row}: “${name.slice(0, mostShown)}” is not the name of a ticker. Correct the cell and save the file again.`;
   return problem('valueUnreadable', message);
 };
+
+const readChunk = (
+  chunk: DuckDBDataChunk,
+  file: string,
+  firstRow: number,
+  tickerNumbers: Int32Array,
+): Rows => ({
+  file,
+  firstRow,
+  tickerNumbers,
+  days: rawInts(chunk, 1),
+  prices: rawDoubles(chunk, 2),
+});
 
 /** Rows of a file with one row per date and ticker. */
 export const readLongRows = async (
@@ -85,70 +139,34 @@ export const readLongRows = async (
   settings: FeedSettings,
   collected: Collected,
 ): Promise<FileReading> => {
-  const { columns } = settings;
-  const priceName = columns.adjustedClose ?? columns.close;
+  const { date, ticker, close, adjustedClose } = settings.columns;
   const found = findColumns(
     path,
     source.columns,
-    { date: columns.date, ticker: columns.ticker, price: priceName },
+    { date, ticker, price: adjustedClose ?? close },
     'feed.columns',
   );
   if (!found.ok) return { rowCount: 0, refusal: found.problem };
-  const extras = makeExtras(path, source, settings, collected, 6);
+  const extras = makeExtras(path, source, settings, collected, 3);
   if (!extras.ok) return { rowCount: 0, refusal: extras.problem };
-  const result = await connection.stream(querySql(settings, found.value, extras.value, source.from));
+  const columns = found.value;
+  const result = await connection.stream(querySql(settings, columns, extras.value, source.from));
   const readTickers = makeTickerReader(collected);
+  const wanted = makeWantedTexts();
   const numbers = new Int32Array(4096);
   let rowCount = 0;
   for await (const chunk of chunksOf(result)) {
-    readTickers(chunk, numbers);
-    const badRow = readPrices(chunk, numbers, path, 2 + rowCount, collected);
-    if (badRow !== null) {
-      return {
-        rowCount,
-        refusal: withoutTicker(path, columns.ticker, 2 + rowCount + badRow, texts(chunk, 3).getItem(badRow)),
-      };
+    readTickers(chunk, 0, numbers);
+    const firstRow = firstRowOfFile + rowCount;
+    const wrong = addRows(readChunk(chunk, path, firstRow, numbers), columns, collected, wanted);
+    if (wrong >= 0) {
+      const row = firstRow + wrong;
+      const name = (await textsOfRows(connection, source, columns.ticker, [row])).get(row) ?? '';
+      return { rowCount, refusal: withoutTicker(path, ticker, row, name) };
     }
-    extras.value.read(chunk, numbers, 2 + rowCount);
+    extras.value.read(chunk, numbers, firstRow);
     rowCount += chunk.rowCount;
   }
+  await wanted.fetch(connection, source);
   return { rowCount, refusal: null };
-};
-
-/** Adds a chunk's prices; the place of the first row that has a price or a date but no ticker, null where there is none. */
-const readPrices = (
-  chunk: DuckDBDataChunk,
-  numbers: Int32Array,
-  file: string,
-  firstRow: number,
-  collected: Collected,
-): number | null => {
-  const days = integers(chunk, 1);
-  const prices = doubles(chunk, 2);
-  const unreadDates = texts(chunk, 4);
-  const unreadPrices = texts(chunk, 5);
-  const { findings, names, add } = collected;
-  for (let at = 0; at < chunk.rowCount; at += 1) {
-    const number = numbers[at] as number;
-    const day = days.getItem(at);
-    const price = prices.getItem(at);
-    if (number >= 0 && day !== null && isPrice(price)) {
-      add(number, day, price);
-      continue;
-    }
-    const unreadDate = unreadDates.getItem(at);
-    const unreadPrice = unreadPrices.getItem(at);
-    const row = firstRow + at;
-    if (number < 0) {
-      const isBlank =
-        number === noTicker && [day, price, unreadDate, unreadPrice].every((cell) => cell === null);
-      if (!isBlank) return at;
-      findings.record('blankRow', { file, row });
-      continue;
-    }
-    const place = { file, ticker: names[number] ?? null, day, row };
-    if (day === null) findings.record('unreadableDate', { ...place, value: unreadDate ?? '' });
-    if (!isPrice(price)) recordNoPrice(findings, place, price, unreadPrice);
-  }
-  return null;
 };

@@ -102,9 +102,10 @@ const wrongFormat = (settings: FeedSettings, { findings }: Collected, rowCount: 
     const example: FindingExample | null = findings.first(code);
     if (example === null || findings.count(code) <= mostUnreadable * rowCount) continue;
     const name = shape === 'wide' ? example.ticker : column;
-    const message =
-      `${example.file}, column “${name}”, row ${example.row}: “${(example.value ?? '').slice(0, 60)}” is not ${expected}, and ` +
-      `${findings.count(code)} cells are like it. Correct the file, or set ${setting}.`;
+    const count = findings.count(code);
+    const like = count === 1 ? 'one such cell' : `${count} such cells`;
+    const shown = (example.value ?? '').slice(0, 60);
+    const message = `${example.file}, column “${name}”, row ${example.row}: “${shown}” is not ${expected} (${like}). Correct the file, or set ${setting}.`;
     return problem('valueUnreadable', message);
   }
   return null;

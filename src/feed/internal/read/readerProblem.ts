@@ -15,7 +15,7 @@ const reasons: readonly Reason[] = [
   { sign: /Invalid unicode|not utf-8/i, words: () => 'is not text in UTF-8' },
   {
     sign: /Maximum line size|Buffer Size/i,
-    words: () => 'is longer than the 2,000,000 bytes that a row may have',
+    words: () => 'is longer than the 1,000,000 bytes that a row may have',
   },
 ];
 

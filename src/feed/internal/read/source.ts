@@ -9,13 +9,15 @@ export type Source = { readonly columns: readonly SourceColumn[]; readonly from:
 
 const delimiterOf: Readonly<Record<Delimiter, string>> = { comma: ',', semicolon: ';', tab: '\t' };
 
-const mostLineBytes = 2_000_000;
+const mostLineBytes = 1_000_000;
+/** The reader’s own buffers are many times larger without being faster. */
+const bufferBytes = 2_000_000;
 
 const csvScan = (path: string, cells: readonly string[], more: string): string => {
   const types = cells.map((name) => `${sqlText(name)}: 'VARCHAR'`).join(', ');
   return (
     `read_csv(${sqlText(path)}, auto_detect = false, columns = {${types}}, ` +
-    `max_line_size = ${mostLineBytes}, strict_mode = true, null_padding = false, ${more})`
+    `max_line_size = ${mostLineBytes}, buffer_size = ${bufferBytes}, strict_mode = true, null_padding = false, ${more})`
   );
 };
 

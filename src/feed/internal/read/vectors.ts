@@ -1,7 +1,6 @@
 import {
   type DuckDBDataChunk,
   DuckDBDoubleVector,
-  DuckDBIntegerVector,
   type DuckDBResult,
   DuckDBVarCharVector,
 } from '@duckdb/node-api';
@@ -12,12 +11,6 @@ const otherType = (column: number): Error =>
 export const doubles = (chunk: DuckDBDataChunk, column: number): DuckDBDoubleVector => {
   const vector = chunk.getColumnVector(column);
   if (!(vector instanceof DuckDBDoubleVector)) throw otherType(column);
-  return vector;
-};
-
-export const integers = (chunk: DuckDBDataChunk, column: number): DuckDBIntegerVector => {
-  const vector = chunk.getColumnVector(column);
-  if (!(vector instanceof DuckDBIntegerVector)) throw otherType(column);
   return vector;
 };
 

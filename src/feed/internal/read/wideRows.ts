@@ -1,19 +1,29 @@
 import type { DuckDBConnection, DuckDBDataChunk } from '@duckdb/node-api';
 import { type Problem, problem } from '../../../terms/problem.ts';
 import type { FeedSettings } from '../../settings.ts';
-import { daySql, numberSql, type SourceColumn, unreadTextSql } from './cellSql.ts';
+import {
+  blankDay,
+  blankPrice,
+  codedDaySql,
+  codedPriceSql,
+  codeOfNoPrice,
+  isPrice,
+  unreadDay,
+} from './cellCodes.ts';
+import type { SourceColumn } from './cellSql.ts';
 import { type Collected, isTickerName } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
 import type { FileReading } from './longRows.ts';
-import { isPrice, recordNoPrice } from './priceCell.ts';
+import { rawDoubles, rawInts } from './rawVectors.ts';
 import type { Source } from './source.ts';
-import { chunksOf, doubles, integers, texts } from './vectors.ts';
+import { chunksOf } from './vectors.ts';
+import { firstRowOfFile, makeWantedTexts, textsOfRows, type WantedTexts } from './wantedTexts.ts';
 
 /** Why the names of the ticker columns cannot stand; null where they can. */
 const wrongNames = (path: string, columns: readonly SourceColumn[]): Problem | null => {
-  const place = columns.findIndex(({ name }) => name === '' || !isTickerName(name));
-  if (place >= 0) {
-    const message = `${path}: column ${place + 2} has “${columns[place]?.name.slice(0, 60)}” for a name, which is not the name of a ticker. Name every column in the first row.`;
+  const wrong = columns.find(({ name }) => name === '' || !isTickerName(name));
+  if (wrong !== undefined) {
+    const message = `${path} has a column called “${wrong.name.slice(0, 60)}”, which is not the name of a ticker. Name every column in the first row.`;
     return problem('columnMissing', message);
   }
   const names = columns.map(({ name }) => name);
@@ -26,77 +36,64 @@ const wrongNames = (path: string, columns: readonly SourceColumn[]): Problem | n
     : problem('columnMissing', `${path} has no column beside the date. Add one column per ticker.`);
 };
 
-const querySql = (
-  settings: FeedSettings,
-  date: SourceColumn,
-  tickers: readonly SourceColumn[],
-  from: string,
-): string => {
-  const day = daySql(date, settings.format);
-  const cells = tickers.flatMap((column) => {
-    const number = numberSql(column, settings.format.decimalMark);
-    return [number, unreadTextSql(column, number)];
-  });
-  return `SELECT ${[day, unreadTextSql(date, day), ...cells].join(', ')} FROM ${from}`;
-};
+/** The columns of the file with the number of each one's ticker. */
+type Tickers = readonly { readonly column: SourceColumn; readonly number: number }[];
 
-type Rows = { readonly days: readonly (number | null)[]; readonly firstRow: number; readonly file: string };
+type Rows = { readonly file: string; readonly firstRow: number; readonly days: Int32Array };
 
 /** Adds a column's prices; the first row that has a cell in it but no date, or the number of rows where none has. */
-const readColumn = (
-  chunk: DuckDBDataChunk,
-  column: number,
-  tickerNumber: number,
+const addColumn = (
   rows: Rows,
+  prices: Float64Array,
+  { column, number }: Tickers[number],
   collected: Collected,
+  wanted: WantedTexts,
 ): number => {
-  const { days, firstRow, file } = rows;
-  const prices = doubles(chunk, column);
-  const unread = texts(chunk, column + 1);
-  const ticker = collected.names[tickerNumber] ?? null;
-  let firstUndated = chunk.rowCount;
-  for (let at = 0; at < chunk.rowCount; at += 1) {
-    const day = days[at] ?? null;
-    const price = prices.getItem(at);
-    if (day !== null && isPrice(price)) {
-      collected.add(tickerNumber, day, price);
-      continue;
+  const { file, firstRow, days } = rows;
+  let firstUndated = days.length;
+  for (let at = 0; at < days.length; at += 1) {
+    const day = days[at] as number;
+    const price = prices[at] as number;
+    if (day <= blankDay) {
+      if (price !== blankPrice) firstUndated = Math.min(firstUndated, at);
+    } else if (isPrice(price)) collected.add(number, day, price);
+    else {
+      const code = codeOfNoPrice(price);
+      const hasNumber = code === 'priceNotPositive' || code === 'priceNotFinite';
+      const value = hasNumber ? String(price) : null;
+      const kept = collected.findings.record(code, {
+        file,
+        row: firstRow + at,
+        ticker: column.name,
+        day,
+        value,
+      });
+      if (code === 'unreadablePrice') wanted.want(kept, column, firstRow + at);
     }
-    const text = price === null ? unread.getItem(at) : null;
-    if (day !== null)
-      recordNoPrice(collected.findings, { file, ticker, day, row: firstRow + at }, price, text);
-    else if (price !== null || text !== null) firstUndated = Math.min(firstUndated, at);
   }
   return firstUndated;
 };
 
-/** Reads a chunk; the problem with the first row whose date cannot be read, null where every row has one or is blank. */
-const readChunk = (
+/** Adds a chunk; the place of the first row whose date cannot be read, −1 where every row has one or is blank. */
+const addRows = (
   chunk: DuckDBDataChunk,
-  numbers: readonly number[],
   file: string,
   firstRow: number,
-  settings: FeedSettings,
+  tickers: Tickers,
   collected: Collected,
-): Problem | null => {
-  const dates = integers(chunk, 0);
-  const unreadDates = texts(chunk, 1);
-  const days = Array.from({ length: chunk.rowCount }, (_, at) => dates.getItem(at));
-  const undated = numbers.map((number, at) =>
-    readColumn(chunk, 2 + 2 * at, number, { days, firstRow, file }, collected),
-  );
-  const wrongDate = days.findIndex((day, at) => day === null && unreadDates.getItem(at) !== null);
-  const at = Math.min(...undated, wrongDate < 0 ? chunk.rowCount : wrongDate);
-  if (at < chunk.rowCount) {
-    const { columns, format } = settings;
-    const shown = (unreadDates.getItem(at) ?? '').slice(0, 60);
-    const message = `${file}, column “${columns.date}”, row ${firstRow + at}: “${shown}” is not a date written ${format.dateFormat}. Correct the cell, or set feed.format.dateFormat.`;
-    return problem('valueUnreadable', message);
+  wanted: WantedTexts,
+): number => {
+  const rows = { file, firstRow, days: rawInts(chunk, 0) };
+  const wrongDate = rows.days.indexOf(unreadDay);
+  let first = wrongDate < 0 ? chunk.rowCount : wrongDate;
+  for (const [at, ticker] of tickers.entries()) {
+    first = Math.min(first, addColumn(rows, rawDoubles(chunk, 1 + at), ticker, collected, wanted));
   }
-  days.forEach((day, blank) => {
-    if (day === null) collected.findings.record('blankRow', { file, row: firstRow + blank });
-  });
-  return null;
+  if (first < chunk.rowCount) return first;
+  for (const [at, day] of rows.days.entries()) {
+    if (day === blankDay) collected.findings.record('blankRow', { file, row: firstRow + at });
+  }
+  return -1;
 };
 
 /** Rows of a file with one row per date and one column per ticker. A row whose date cannot be read refuses the file. */
@@ -107,19 +104,29 @@ export const readWideRows = async (
   settings: FeedSettings,
   collected: Collected,
 ): Promise<FileReading> => {
+  const { format } = settings;
   const found = findColumns(path, source.columns, { date: settings.columns.date }, 'feed.columns');
   if (!found.ok) return { rowCount: 0, refusal: found.problem };
   const { date } = found.value;
-  const tickers = source.columns.filter((column) => column !== date);
-  const wrong = wrongNames(path, tickers);
+  const columns = source.columns.filter((column) => column !== date);
+  const wrong = wrongNames(path, columns);
   if (wrong !== null) return { rowCount: 0, refusal: wrong };
-  const numbers = tickers.map(({ name }) => collected.numberOf(name));
-  const result = await connection.stream(querySql(settings, date, tickers, source.from));
+  const tickers = columns.map((column) => ({ column, number: collected.numberOf(column.name) }));
+  const cells = [codedDaySql(date, format), ...columns.map((column) => codedPriceSql(column, format))];
+  const result = await connection.stream(`SELECT ${cells.join(', ')} FROM ${source.from}`);
+  const wanted = makeWantedTexts();
   let rowCount = 0;
   for await (const chunk of chunksOf(result)) {
-    const refusal = readChunk(chunk, numbers, path, 2 + rowCount, settings, collected);
-    if (refusal !== null) return { rowCount, refusal };
+    const firstRow = firstRowOfFile + rowCount;
+    const at = addRows(chunk, path, firstRow, tickers, collected, wanted);
+    if (at >= 0) {
+      const row = firstRow + at;
+      const text = (await textsOfRows(connection, source, date, [row])).get(row) ?? '';
+      const message = `${path}, column “${date.name}”, row ${row}: “${text.slice(0, 60)}” is not a date written ${format.dateFormat}. Correct the cell, or set feed.format.dateFormat.`;
+      return { rowCount, refusal: problem('valueUnreadable', message) };
+    }
     rowCount += chunk.rowCount;
   }
+  await wanted.fetch(connection, source);
   return { rowCount, refusal: null };
 };
