@@ -1,6 +1,7 @@
 import type { CoverageCell } from './cell.ts';
 import { deviationCoverage } from './measured/deviation.ts';
 import { meanCoverage } from './measured/mean.ts';
+import { peaksTailCoverage } from './measured/peaksTail.ts';
 import { ratioCoverage } from './measured/ratio.ts';
 
 /** All cells that were measured. Each file under measured/ is written by one suite of `npm run coverage-table`. */
@@ -8,4 +9,5 @@ export const coverageTable: readonly CoverageCell[] = [
   ...meanCoverage,
   ...deviationCoverage,
   ...ratioCoverage,
+  ...peaksTailCoverage,
 ];

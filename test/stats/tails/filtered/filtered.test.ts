@@ -159,6 +159,17 @@ describe('the rebuilt path', () => {
     expect(new Set(betas).size).toBe(60);
   });
 
+  test('leaves the past as it was: the next variance is that of the true returns under the refitted parameters', () => {
+    visitResampledStates(source, streams, 5, ({ process, nextVariance }) => {
+      expect(nextVariance).toBe(filterByGarch(returns, process).nextVariance);
+    });
+    const ewma = accepted(filterSource(returns, 'ewma'));
+    visitResampledStates(ewma, streams, 5, ({ residuals, nextVariance }) => {
+      expect(nextVariance).toBe(ewma.state.nextVariance);
+      expect(residuals).not.toEqual(ewma.state.residuals);
+    });
+  });
+
   test('resamples that fail are replaced, and too many failures leave none', () => {
     const failing = (share: number) => {
       let tries = 0;
