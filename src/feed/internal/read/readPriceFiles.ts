@@ -4,13 +4,13 @@ import { type Problem, problem } from '../../../terms/problem.ts';
 import { type Result, refuse, succeed } from '../../../terms/result.ts';
 import type { FileState } from '../../priceFiles.ts';
 import type { FeedSettings } from '../../settings.ts';
+import { acceptFile } from './acceptFile.ts';
 import { type Collected, makeCollected } from './collected.ts';
 import type { Database } from './database.ts';
-import { contradictsItsName, type FileKind, fileKindOf } from './fileKind.ts';
+import type { FileKind } from './fileKind.ts';
 import { type FileReading, readLongRows } from './longRows.ts';
 import { readerProblem } from './readerProblem.ts';
 import { openSource } from './source.ts';
-import { type Wholeness, wholenessOf } from './wholeness.ts';
 import { readWideRows } from './wideRows.ts';
 
 export type ReadFiles = { readonly files: readonly FileReport[]; readonly collected: Collected };
@@ -45,40 +45,18 @@ const recordUnfinishedLine = (collected: Collected, file: string, row: number): 
   });
 };
 
-const cannotOpen = (path: string): Problem =>
-  problem('fileUnreadable', `${path} cannot be opened. Check feed.path and who may read it.`);
-
 const readFile = async (
   connection: DuckDBConnection,
   { path, bytes }: FileState,
   settings: FeedSettings,
   collected: Collected,
 ): Promise<Result<FileReport>> => {
-  const kind = fileKindOf(path);
-  if (kind === null) {
-    return refuse(
-      problem(
-        'fileUnreadable',
-        `${path} has a name that says nothing of its kind. Let it end in .csv, .csv.gz, .csv.zst or .parquet.`,
-      ),
-    );
-  }
-  let wholeness: Wholeness;
-  try {
-    const contradiction = await contradictsItsName(path, kind);
-    if (contradiction !== null) return refuse(contradiction);
-    wholeness = await wholenessOf(path, kind);
-  } catch {
-    return refuse(cannotOpen(path));
-  }
-  if (wholeness === 'cutOff') {
-    return refuse(
-      problem('fileUnreadable', `${path} ends before its own end or is damaged. Write it again.`),
-    );
-  }
+  const accepted = await acceptFile(path);
+  if (!accepted.ok) return accepted;
+  const { kind, hasUnfinishedLine } = accepted.value;
   const { rowCount, refusal } = await readRows(connection, path, kind, settings, collected);
   if (refusal !== null) return refuse(refusal);
-  if (wholeness === 'unfinishedLine') recordUnfinishedLine(collected, path, 1 + rowCount);
+  if (hasUnfinishedLine) recordUnfinishedLine(collected, path, 1 + rowCount);
   return succeed({ path, kind, bytes, rowCount });
 };
 

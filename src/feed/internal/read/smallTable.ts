@@ -1,13 +1,12 @@
 import { type Problem, problem } from '../../../terms/problem.ts';
 import { type Result, refuse, succeed } from '../../../terms/result.ts';
 import type { TextFormat } from '../../../terms/tableFormat.ts';
+import { acceptFile } from './acceptFile.ts';
 import { daySql, numberSql, type SourceColumn, textSql } from './cellSql.ts';
 import { findColumns } from './columnsNeeded.ts';
 import { type Database, passingDatabase } from './database.ts';
-import { contradictsItsName, fileKindOf } from './fileKind.ts';
 import { readerProblem } from './readerProblem.ts';
 import { openSource } from './source.ts';
-import { wholenessOf } from './wholeness.ts';
 
 export type CellKind = 'text' | 'day' | 'number';
 
@@ -53,25 +52,6 @@ const checkRows = (
   return succeed(whole);
 };
 
-const refuseUnlessWhole = async (path: string): Promise<Problem | null> => {
-  const kind = fileKindOf(path);
-  if (kind === null)
-    return problem(
-      'fileUnreadable',
-      `${path} has a name that says nothing of its kind. Let it end in .csv, .csv.gz, .csv.zst or .parquet.`,
-    );
-  try {
-    const contradiction = await contradictsItsName(path, kind);
-    if (contradiction !== null) return contradiction;
-    const whole = (await wholenessOf(path, kind)) !== 'cutOff';
-    return whole
-      ? null
-      : problem('fileUnreadable', `${path} ends before its own end or is damaged. Write it again.`);
-  } catch {
-    return problem('fileUnreadable', `${path} cannot be opened. Check its path and who may read it.`);
-  }
-};
-
 /** A file that is small enough to be held as rows: the wanted columns in the wanted order, each cell of its kind. */
 export const readSmallTable = async (
   path: string,
@@ -80,9 +60,9 @@ export const readSmallTable = async (
   setting: string,
   database: Database = passingDatabase,
 ): Promise<Result<readonly (readonly Cell[])[]>> => {
-  const refusal = await refuseUnlessWhole(path);
-  if (refusal !== null) return refuse(refusal);
-  const kind = fileKindOf(path) ?? 'csv';
+  const accepted = await acceptFile(path);
+  if (!accepted.ok) return accepted;
+  const { kind } = accepted.value;
   return database(async (connection) => {
     try {
       const source = await openSource(connection, path, kind, format.delimiter);

@@ -3,13 +3,13 @@ import type { Delimiter } from '../../../terms/tableFormat.ts';
 import type { SourceColumn } from './cellSql.ts';
 import { sqlText } from './database.ts';
 import type { FileKind } from './fileKind.ts';
+import { mostLineBytes } from './wholeness.ts';
 
 /** A file ready to be read: its columns and the SQL that stands for its rows. */
 export type Source = { readonly columns: readonly SourceColumn[]; readonly from: string };
 
 const delimiterOf: Readonly<Record<Delimiter, string>> = { comma: ',', semicolon: ';', tab: '\t' };
 
-const mostLineBytes = 1_000_000;
 /** The reader’s own buffers are many times larger without being faster. */
 const bufferBytes = 2_000_000;
 

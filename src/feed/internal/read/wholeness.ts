@@ -4,35 +4,56 @@ import { createGunzip } from 'node:zlib';
 import type { FileKind } from './fileKind.ts';
 
 /**
- * Whether a file reaches its own end. The reader accepts a compressed file that was cut off and serves the rows before
- * the cut, so this is found out here. `unfinishedLine`: text that does not end with a line end, which is either a
- * habit of the program that wrote it or a cut through the last row.
+ * Whether a file reaches its own end and has rows of a sane length. The reader accepts a compressed file that was cut
+ * off and serves the rows before the cut, and it drops a last row that is longer than its buffer, so both are found
+ * out here. `unfinishedLine`: text that does not end with a line end, which is either a habit of the program that
+ * wrote it or a cut through the last row.
  */
-export type Wholeness = 'whole' | 'cutOff' | 'unfinishedLine';
+export type Wholeness = 'whole' | 'cutOff' | 'lineTooLong' | 'unfinishedLine';
 
-const lineEnds = [0x0a, 0x0d];
+export const mostLineBytes = 1_000_000;
 
-const afterLastByte = (last: number | undefined): Wholeness =>
-  last === undefined || lineEnds.includes(last) ? 'whole' : 'unfinishedLine';
+const [lineFeed, carriageReturn] = [0x0a, 0x0d];
 
-const wholenessOfText = async (file: FileHandle, size: number): Promise<Wholeness> => {
-  if (size === 0) return 'whole';
-  const { buffer } = await file.read(new Uint8Array(1), 0, 1, size - 1);
-  return afterLastByte(buffer[0]);
+/** Looks at text piece by piece. Pieces are far shorter than the longest row, so that only a row over several counts. */
+const makeTextWatch = () => {
+  let sinceLineEnd = 0;
+  let isTooLong = false;
+  let last: number | undefined;
+  return {
+    see: (piece: Uint8Array): void => {
+      const ends = [lineFeed, carriageReturn].filter((end) => piece.includes(end));
+      const first = Math.min(...ends.map((end) => piece.indexOf(end)), piece.length);
+      isTooLong ||= sinceLineEnd + first > mostLineBytes;
+      const lastEnd = Math.max(...ends.map((end) => piece.lastIndexOf(end)), -1);
+      sinceLineEnd = lastEnd < 0 ? sinceLineEnd + piece.length : piece.length - 1 - lastEnd;
+      last = piece.at(-1) ?? last;
+    },
+    verdict: (): Wholeness => {
+      if (isTooLong) return 'lineTooLong';
+      return last === undefined || last === lineFeed || last === carriageReturn ? 'whole' : 'unfinishedLine';
+    },
+  };
+};
+
+const pieceBytes = 262_144;
+
+const wholenessOfText = async (path: string): Promise<Wholeness> => {
+  const watch = makeTextWatch();
+  for await (const piece of createReadStream(path, { highWaterMark: pieceBytes })) watch.see(piece);
+  return watch.verdict();
 };
 
 const wholenessOfGzip = async (path: string): Promise<Wholeness> => {
-  let last: number | undefined;
+  const watch = makeTextWatch();
   try {
     // the check sum at the end of each member is verified on the way
-    for await (const piece of createReadStream(path).pipe(createGunzip({ chunkSize: 262_144 }))) {
-      const bytes: Uint8Array = piece;
-      last = bytes.at(-1) ?? last;
-    }
+    for await (const piece of createReadStream(path).pipe(createGunzip({ chunkSize: pieceBytes })))
+      watch.see(piece);
   } catch {
     return 'cutOff';
   }
-  return afterLastByte(last);
+  return watch.verdict();
 };
 
 type Bytes = (position: number, count: number) => Promise<DataView | null>;
@@ -85,11 +106,12 @@ const wholenessOfZstandard = async (file: FileHandle, size: number): Promise<Who
 /** Parquet has its directory at its end, so that the reader itself refuses one that was cut off. */
 export const wholenessOf = async (path: string, kind: FileKind): Promise<Wholeness> => {
   if (kind === 'parquet') return 'whole';
+  if (kind === 'csv') return wholenessOfText(path);
   if (kind === 'gz') return wholenessOfGzip(path);
   const file = await open(path);
   try {
     const { size } = await file.stat();
-    return kind === 'csv' ? await wholenessOfText(file, size) : await wholenessOfZstandard(file, size);
+    return await wholenessOfZstandard(file, size);
   } finally {
     await file.close();
   }
