@@ -11,7 +11,7 @@ const unclustered = simulateGarchReturns(2_000, { mu: 0.0005, omega: 1e-4, alpha
 const yesterday = fitGarch(returns.slice(0, -1));
 const question = { returns, tailLevel: level('0.99'), confidence: level95, streams: testStreams(1) };
 
-describe('GARCH(1,1) with Student innovations, 2,000 returns: under 60 ms, from yesterday’s fit under 5 ms', () => {
+describe('GARCH(1,1) with Student innovations, 2,000 returns: under 60 ms with clustering, from yesterday’s fit under 5 ms', () => {
   bench('from all starts', () => void fitGarch(returns));
   bench('from all starts, without clustering to be found', () => void fitGarch(unclustered));
   if (yesterday.ok) bench('from yesterday’s fit', () => void fitGarch(returns, { near: yesterday.value }));

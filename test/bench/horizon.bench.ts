@@ -26,7 +26,7 @@ const models: readonly ((input: TailInput) => Result<OneDayFigures>)[] = [
   peaksTail,
 ];
 
-describe('ten days of each model, 100,000 paths and 200 draws of 5,000: under 1 s a model', () => {
+describe('ten days of each model, 100,000 paths and 200 draws of 5,000: under 1.5 s a model', () => {
   for (const tailOf of models) {
     const oneDay = tailOf(input);
     if (!oneDay.ok) throw new Error(oneDay.problem.message);
