@@ -51,11 +51,11 @@ const sourceOf = (
   const resample = (random: Random): FilterState | null => {
     draw.fill(random, picks);
     const rebuilt = rebuildReturns(returns, state.process, state.residuals, picks);
-    const process = refit(rebuilt);
-    if (process === null) return null;
-    const { residuals } = filterByGarch(rebuilt, process);
-    const { nextVariance } = filterByGarch(returns, process);
-    return { process, mu: process.mu, residuals, nextVariance };
+    const refitted = refit(rebuilt);
+    if (refitted === null) return null;
+    const { mu, residuals } = filterByGarch(rebuilt, refitted);
+    const { nextVariance } = filterByGarch(returns, refitted);
+    return { process: refitted, mu, residuals, nextVariance };
   };
   return { kind, fit, state, replicates, resample };
 };
