@@ -1,4 +1,6 @@
 import type { CoveredInterval } from '../../src/stats/coverage/cell.ts';
+import { sampleStandardDeviation } from '../../src/stats/moments/deviation.ts';
+import { arithmeticMean } from '../../src/stats/moments/mean.ts';
 import { historicalTail } from '../../src/stats/tails/historicalTail.ts';
 import { normalTail } from '../../src/stats/tails/normalTail.ts';
 import { studentTail } from '../../src/stats/tails/studentTail.ts';
@@ -52,20 +54,45 @@ export const tailProcedures = (
     tailProcedure(`tail.${model}.es.${text}`, of, 'es', text, esReplicates),
   ]);
 
-/** The pivot of the normal ES does not depend on the data, so its resamples matter little to the coverage. */
-const resamplesOfPivot = 199;
+/**
+ * Both normal intervals end a fixed number of sample deviations from the mean, fixed by the count of returns alone, so
+ * one sample shows the numbers for all: exactly for VaR, and for ES from more resamples than the model makes by itself.
+ */
+const normalProcedure = (name: CoveredInterval, figure: 'var' | 'es', text: string): Procedure => {
+  const inDeviations = new Map<number, Ends>();
+  const measured = tailProcedure(name, normalTail, figure, text, () => 9_999);
+  const deviationsOf = (sample: Sample, mean: number, deviation: number): Ends | null => {
+    const ends = measured.ends(sample);
+    if (ends === null || ends.lower === null || ends.upper === null) return null;
+    return { lower: (ends.lower + mean) / deviation, upper: (ends.upper + mean) / deviation };
+  };
+  return {
+    ...measured,
+    ends: (sample) => {
+      const mean = arithmeticMean(sample.returns);
+      const deviation = sampleStandardDeviation(sample.returns);
+      const known = inDeviations.get(sample.returns.length) ?? deviationsOf(sample, mean, deviation);
+      if (known === null || known.lower === null || known.upper === null) return null;
+      inDeviations.set(sample.returns.length, known);
+      return { lower: deviation * known.lower - mean, upper: deviation * known.upper - mean };
+    },
+  };
+};
 
 export const historicalProcedures = tailProcedures(
   'historical',
   historicalTail,
   ({ replicates }) => replicates,
 );
-export const normalProcedures = tailProcedures('normal', normalTail, () => resamplesOfPivot);
 export const studentProcedures = tailProcedures(
   'student',
   (input) => studentTail(input),
   () => fewest,
 );
+export const normalProcedures = tailLevels.flatMap((text) => [
+  normalProcedure(`tail.normal.var.${text}`, 'var', text),
+  normalProcedure(`tail.normal.es.${text}`, 'es', text),
+]);
 
 /** nu of the two independent processes: infinity for the normal one. */
 export const nuProcedure: Procedure = {

@@ -1,6 +1,7 @@
 import type { CoverageCell } from './cell.ts';
 import { deviationCoverage } from './measured/deviation.ts';
 import { meanCoverage } from './measured/mean.ts';
+import { normalTailCoverage } from './measured/normalTail.ts';
 import { peaksTailCoverage } from './measured/peaksTail.ts';
 import { ratioCoverage } from './measured/ratio.ts';
 
@@ -9,5 +10,6 @@ export const coverageTable: readonly CoverageCell[] = [
   ...meanCoverage,
   ...deviationCoverage,
   ...ratioCoverage,
+  ...normalTailCoverage,
   ...peaksTailCoverage,
 ];
