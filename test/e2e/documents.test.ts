@@ -80,6 +80,13 @@ describe('what the README tells people to run', () => {
     expect({ code, stderr }).toEqual({ code: 0, stderr: '' });
   });
 
+  const inspections = commands.filter((command) => command.startsWith('npm run --silent inspect -- '));
+
+  test.each(inspections)('%s', async (command) => {
+    const words = command.slice('npm run --silent inspect -- '.length).split(' ');
+    expect((await run('inspect', words)).code).toBe(0);
+  });
+
   test('every npm script that the documents name is there', () => {
     const named = [...`${readme}${developers}`.matchAll(/npm run (?:--silent )?([\w:-]+)/g)].map(
       (found) => found[1] ?? '',
