@@ -1,5 +1,6 @@
 import type { CoverageCell } from './cell.ts';
 import { deviationCoverage } from './measured/deviation.ts';
+import { historicalTailCoverage } from './measured/historicalTail.ts';
 import { meanCoverage } from './measured/mean.ts';
 import { normalTailCoverage } from './measured/normalTail.ts';
 import { peaksTailCoverage } from './measured/peaksTail.ts';
@@ -10,6 +11,7 @@ export const coverageTable: readonly CoverageCell[] = [
   ...meanCoverage,
   ...deviationCoverage,
   ...ratioCoverage,
+  ...historicalTailCoverage,
   ...normalTailCoverage,
   ...peaksTailCoverage,
 ];
