@@ -40,6 +40,10 @@ const crockford = (bytes: Uint8Array, length: number): string => {
   }).join('');
 };
 
+/** The id of an answer from the digest of what makes it; more characters than usual where two would share the usual. */
+export const recordIdOf = (digest: Uint8Array, length: number = idLength): string =>
+  `R-${crockford(digest, length)}`;
+
 /**
  * Who an answer is: its seed follows from the canonical question and the data, its id from these, the method version and
  * the seed. The same question on the same data therefore has the same id and the same random draws.
@@ -52,7 +56,7 @@ export const identify = (canonicalQuestion: string, used: readonly UsedPrices[])
     .update([canonicalQuestion, dataFingerprint, methodVersion, seed].join('\n'))
     .digest();
   return {
-    id: `R-${crockford(content, idLength)}`,
+    id: recordIdOf(content),
     seed,
     seedBytes: new Uint8Array(seedBytes),
     dataFingerprint,

@@ -80,6 +80,19 @@ const slack = z.strictObject({
   }).default(false),
 });
 
+const records = z.strictObject({
+  path: described({
+    kind: z.string().trim().min(1),
+    says: 'file in which answers are kept on record; a relative path starts at the folder of the program',
+    expects: 'the path of a file, which is made where there is none',
+  }).default('.leadsman/records.db'),
+  keepDays: described({
+    kind: z.int().min(1).max(36_500).nullable(),
+    says: 'how long an asking and its answer are kept; what is older is deleted and leaves a trace of its deletion',
+    expects: 'a whole number of days from 1 to 36500, or null for ever',
+  }).default(null),
+});
+
 /** Every setting with its description, its default and what may stand there. Help and the example file are printed from it. */
 export const settingsSchema = z.strictObject({
   feed,
@@ -107,6 +120,7 @@ export const settingsSchema = z.strictObject({
     expects: 'auto, slack or terminal',
   }).default('auto'),
   slack: slack.prefault({}),
+  records: records.prefault({}),
 });
 
 /** Settings as a person writes them: most keys may be left out. */

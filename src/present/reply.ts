@@ -22,7 +22,7 @@ export type Button = {
 };
 
 export type Reply = {
-  readonly kind: 'answer' | 'refusal' | 'help' | 'feed' | 'working';
+  readonly kind: 'answer' | 'refusal' | 'help' | 'feed' | 'working' | 'record';
   /** One sentence to act on, verdict first. */
   readonly sentence: string;
   readonly table: Table | null;

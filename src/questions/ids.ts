@@ -1,4 +1,5 @@
-const recordPattern = /^r-([0-9abcdefghjkmnpqrstvwxyz]{10})$/;
+/** Ten characters; more where two answers would share the ten. */
+const recordPattern = /^r-([0-9abcdefghjkmnpqrstvwxyz]{10,20})$/;
 const subscriptionPattern = /^([dw])-([1-9]\d{0,8})$/;
 
 /** Crockford's base32 reads what is easily mistaken: O is 0, I and L are 1. */

@@ -101,6 +101,25 @@ export type BacktestQuestion = {
 export type HelpQuestion = { readonly verb: 'help'; readonly topic: string | null };
 export type FeedQuestion = { readonly verb: 'feed'; readonly ticker: string | null };
 
+/** Recompute one answer on record, or say how two differ. */
+export type AgainQuestion = {
+  readonly verb: 'again';
+  readonly ids: readonly [string] | readonly [string, string];
+};
+
+export type RecordsQuestion = {
+  readonly verb: 'records';
+  /** null: answers about any ticker. */
+  readonly ticker: string | null;
+  /** null: whenever they were asked. */
+  readonly since: Day | null;
+  /** Examine the records instead of listing them. */
+  readonly verify: boolean;
+};
+
+/** What is asked of the records rather than of the prices. */
+export type RecordQuestion = AgainQuestion | RecordsQuestion;
+
 export type StatisticalQuestion =
   | IntervalQuestion
   | ClaimQuestion
@@ -110,7 +129,7 @@ export type StatisticalQuestion =
   | ShapeQuestion
   | BacktestQuestion;
 
-export type Question = StatisticalQuestion | HelpQuestion | FeedQuestion;
+export type Question = StatisticalQuestion | RecordQuestion | HelpQuestion | FeedQuestion;
 
 export type Verb = Question['verb'];
 

@@ -5,7 +5,10 @@ export type Arguments = {
   readonly config: string | null;
   readonly feed: string | null;
   readonly workspace: string | null;
+  readonly records: string | null;
   readonly json: boolean;
+  /** Keep the answer on record. */
+  readonly keep: boolean;
   readonly words: readonly string[];
 };
 
@@ -19,14 +22,18 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
         config: { type: 'string' },
         feed: { type: 'string' },
         workspace: { type: 'string' },
+        records: { type: 'string' },
         json: { type: 'boolean', default: false },
+        keep: { type: 'boolean', default: false },
       },
     });
     return {
       config: values.config ?? null,
       feed: values.feed ?? null,
       workspace: values.workspace ?? null,
+      records: values.records ?? null,
       json: values.json ?? false,
+      keep: values.keep ?? false,
       words: positionals,
     };
   } catch (error) {

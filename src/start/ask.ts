@@ -9,9 +9,11 @@ import { computeInline } from './compute/inline.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
 import { feedOnce } from './feed.ts';
+import { recordsToKeep, recordsToRead, versionsOf } from './records/records.ts';
 import { settingsFor } from './settings.ts';
 
-const usage = 'npm run --silent ask -- [--config FILE] [--feed FILE] [--json] "QUESTION"';
+const usage =
+  'npm run --silent ask -- [--config FILE] [--feed FILE] [--records FILE] [--keep] [--json] "QUESTION"';
 
 const print = (text: string): void => {
   process.stdout.write(`${text}\n`);
@@ -50,13 +52,21 @@ const ask = async (asked: Arguments): Promise<number> => {
   if (!reading.ok) return refuseWith(reading.problems, asked.json);
   const clock = { nowMs: Date.now };
   const feed = await feedOnce(reading.settings, clock);
+  const store = asked.keep ? recordsToKeep(reading.settings) : recordsToRead(reading.settings);
   const desk = createDesk({
     settings: reading.settings,
     clock,
     ...feed,
     compute: computeInline(),
+    records: {
+      store,
+      keeps: asked.keep,
+      versions: versionsOf(reading.settings),
+      tell: (message) => process.stderr.write(`${message}\n`),
+    },
   });
   const spoken = await createConverse(desk).ask({ text: question, place: 'terminal' });
+  await store.close();
   const problems = spoken.flatMap(({ outcome }) => (outcome?.ok === false ? [outcome.problem] : []));
   if (problems.length > 0 || spoken.length === 0)
     return refuseWith(

@@ -5,10 +5,11 @@ import type { Clock } from '../terms/clock.ts';
 import type { FeedStatus } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
-import type { Desk } from '../workspaces/converse.ts';
+import type { Desk } from '../workspaces/desk.ts';
+import type { DeskRecords } from '../workspaces/records/ports.ts';
 import type { Compute } from './compute/compute.ts';
 import { helpPageOf } from './helpPages.ts';
-import { dayAt } from './today.ts';
+import { dayAt, dayStartMs } from './today.ts';
 
 export type DeskParts = {
   readonly settings: Settings;
@@ -16,9 +17,10 @@ export type DeskParts = {
   readonly snapshot: () => Result<PriceSnapshot>;
   readonly feedStatus: () => FeedStatus;
   readonly compute: Compute;
+  readonly records: DeskRecords;
 };
 
-const builtVerbs = ['help', 'feed', ...answeredVerbs];
+const builtVerbs = ['help', 'feed', 'again', 'records', ...answeredVerbs];
 
 const noVocabulary = createVocabulary([]);
 
@@ -35,7 +37,8 @@ const vocabularies = () => {
 };
 
 /** The desk as a conversation sees it, wired from settings, feed and machinery. */
-export const createDesk = ({ settings, clock, snapshot, feedStatus, compute }: DeskParts): Desk => {
+export const createDesk = (parts: DeskParts): Desk => {
+  const { settings, clock, snapshot, feedStatus, compute, records } = parts;
   const vocabularyOf = vocabularies();
   const { periodsPerYear, smallestMeanThatMatters } = settings;
   return {
@@ -46,10 +49,13 @@ export const createDesk = ({ settings, clock, snapshot, feedStatus, compute }: D
       defaults: settings.defaults,
       builtVerbs,
     }),
-    compute: (job, progress) =>
-      compute.answer({ ...job, policy: { periodsPerYear, smallestMeanThatMatters } }, progress),
+    compute: compute.answer,
+    policy: { periodsPerYear, smallestMeanThatMatters },
+    clock,
     feedStatus,
     timeZone: settings.deskTimeZone,
+    dayStartMs: (day) => dayStartMs(day, settings.deskTimeZone),
     helpPage: helpPageOf(builtVerbs),
+    records,
   };
 };

@@ -12,17 +12,29 @@ import { exitCodes } from './exit.ts';
 import { eventInWords, feedLive } from './feed.ts';
 import { startHeartbeat } from './heartbeat.ts';
 import { operatorLog, silentLog } from './log.ts';
+import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
+import type { Reopening } from './records/reopening.ts';
 import { settingsFor } from './settings.ts';
 import { thisTerminal } from './terminal.ts';
 
-const usage = 'npm start -- [--config FILE] [--feed FILE] [--workspace auto|slack|terminal]';
+const usage = 'npm start -- [--config FILE] [--feed FILE] [--records FILE] [--workspace auto|slack|terminal]';
 
 const refuseWith = (problems: readonly Pick<Problem, 'message'>[]): number => {
   for (const { message } of problems) process.stderr.write(`${message}\n`);
   return exitCodes.refused;
 };
 
-type Serving = { readonly converse: Converse; readonly tickers: () => readonly string[] };
+type Serving = {
+  readonly converse: Converse;
+  readonly tickers: () => readonly string[];
+  readonly records: Reopening;
+};
+
+/** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
+const stateOf = (records: Reopening): string => {
+  const trouble = records.trouble();
+  return trouble === null ? 'running' : `running, but answers are not kept: ${trouble.message}`;
+};
 
 const serveSlack = async (
   workspace: WorkspaceToStart & { kind: 'slack' },
@@ -31,7 +43,7 @@ const serveSlack = async (
 ): Promise<number> => {
   // The chat library is slow to load; nobody in the terminal should wait for it.
   const { runSlack } = await import('./slack.ts');
-  const stopBeating = startHeartbeat(() => 'running', log.warn);
+  const stopBeating = startHeartbeat(() => stateOf(serving.records), log.warn);
   const problemFound = await runSlack(workspace, serving.converse, serving.tickers, log, randomUUID);
   stopBeating();
   return problemFound === null ? exitCodes.answered : refuseWith([problemFound]);
@@ -65,15 +77,27 @@ const main = async (): Promise<number> => {
   const first = feed.snapshot();
   if (!first.ok) return refuseWith([first.problem]);
   const compute = computeInPool();
-  const desk = createDesk({ settings, clock, snapshot: feed.snapshot, feedStatus: feed.status, compute });
-  const serving = { converse: createConverse(desk), tickers: () => tickersOf(feed) };
+  const store = recordsToKeep(settings);
+  const stopTidying = keepTidy(store, settings, clock, log.error);
+  const records = { store, keeps: true, versions: versionsOf(settings), tell: log.error };
+  const desk = createDesk({
+    settings,
+    clock,
+    snapshot: feed.snapshot,
+    feedStatus: feed.status,
+    compute,
+    records,
+  });
+  const serving = { converse: createConverse(desk), tickers: () => tickersOf(feed), records: store };
   try {
     return workspace.value.kind === 'slack'
       ? await serveSlack(workspace.value, serving, log)
       : await serveTerminal(serving);
   } finally {
+    stopTidying();
     feed.close();
     await compute.close();
+    await store.close();
   }
 };
 

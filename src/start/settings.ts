@@ -14,12 +14,13 @@ export const settingsPath = (asked: string | null): string => {
 };
 
 /** The settings that a command runs with: the file, then what the command line overrides. */
-export const settingsFor = ({ config, feed, workspace }: Arguments): SettingsReading => {
+export const settingsFor = ({ config, feed, records, workspace }: Arguments): SettingsReading => {
   const reading = readSettings(settingsPath(config));
   if (!reading.ok) return reading;
   const settings = {
     ...reading.settings,
     ...(feed === null ? {} : { feed: { ...reading.settings.feed, path: resolve(feed) } }),
+    ...(records === null ? {} : { records: { ...reading.settings.records, path: resolve(records) } }),
   };
   if (workspace === 'slack' || workspace === 'terminal' || workspace === 'auto')
     return { ok: true, settings: { ...settings, workspace } };

@@ -11,6 +11,7 @@ const kinds = {
   help: 'help',
   feed: 'answer',
   working: 'answer',
+  record: 'answer',
 } as const;
 
 const spokenReply = (each: Reply): SpokenReply => ({
@@ -37,7 +38,7 @@ export const slackConversation = (
   firstTickers: () => readonly string[],
 ): Conversation => ({
   converse: async (asking) => (await converse.ask(asking)).map((spoken) => spokenReply(spoken.reply)),
-  press: async ({ actionId, value }) => {
+  press: async ({ actionId, value, place, from }) => {
     const read = readValue(value);
     if (actionId !== 'working' || read === null)
       return [
@@ -45,7 +46,8 @@ export const slackConversation = (
           reply('refusal', 'This button is from an older version of the bot. Ask the question anew.'),
         ),
       ];
-    const replies = await converse.press({ action: actionId, answerId: read.id, question: read.question });
+    const { id: answerId, question } = read;
+    const replies = await converse.press({ action: actionId, answerId, question, place, from });
     return replies.map(spokenReply);
   },
   examples: () => {

@@ -1,46 +1,44 @@
 import type { Answers } from '../answers/answer.ts';
-import type { AnswerJob } from '../answers/answerQuestion.ts';
-import { answersReply, jsonReply, workingReplies } from '../present/answerReply.ts';
+import { answersReply, jsonReply } from '../present/answerReply.ts';
 import { feedReply, stalenessInWords, tickerReply } from '../present/compose/feed.ts';
-import { type HelpPage, helpReply } from '../present/compose/help.ts';
+import { helpReply } from '../present/compose/help.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
-import { type Button, type Reply, reply } from '../present/reply.ts';
-import type { Question, ReadQuestion, StatisticalQuestion } from '../questions/question.ts';
-import { type ReadContext, type ReadOutcome, readMessage } from '../questions/readMessage.ts';
-import type { FeedStatus, Freshness } from '../terms/feedReport.ts';
-import type { PriceSeries, PriceSnapshot } from '../terms/prices.ts';
+import type { Button, Reply } from '../present/reply.ts';
+import type { ReadQuestion, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
+import { type ReadOutcome, readMessage } from '../questions/readMessage.ts';
+import type { Freshness } from '../terms/feedReport.ts';
+import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
+import { type AskedFrom, askedFromNowhere } from '../terms/records.ts';
 import { type Refusal, type Result, refuse, succeed } from '../terms/result.ts';
-import { recentAnswers } from './recentAnswers.ts';
+import type { Desk } from './desk.ts';
+import { isOfRecords, isStatistical } from './questionKinds.ts';
+import { answerOfRecords } from './records/answerRecords.ts';
+import { keepAnswer } from './records/keeping.ts';
+import type { Reader } from './records/reading.ts';
+import { showWorking } from './showWorking.ts';
+import { workOut } from './workOut.ts';
+
+export type { Desk } from './desk.ts';
 
 /** A message that was addressed to the bot. `progress` is told, in words, how far a long answer has come. */
 export type Asking = {
   readonly text: string;
   readonly place: 'channel' | 'direct' | 'command' | 'terminal';
+  /** Who asked and where, in a place that knows. */
+  readonly from?: AskedFrom;
   readonly progress?: (words: string) => void;
 };
 
 /** What the bot says to one question, and the outcome behind it where it was a statistical one. */
 export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answers> | null };
 
+/** A button that somebody presses. */
+export type Pressing = Pick<Button, 'action' | 'answerId' | 'question'> & Pick<Asking, 'place' | 'from'>;
+
 export type Converse = {
   readonly ask: (asking: Asking) => Promise<readonly Spoken[]>;
-  readonly press: (button: Pick<Button, 'action' | 'answerId' | 'question'>) => Promise<readonly Reply[]>;
-};
-
-/** What a conversation needs of the rest of the house. */
-export type Desk = {
-  /** The live snapshot of the feed, or why there is none. Each question takes it once and ends on it. */
-  readonly snapshot: () => Result<PriceSnapshot>;
-  readonly contextFor: (snapshot: PriceSnapshot | null) => ReadContext;
-  readonly compute: (
-    job: Pick<AnswerJob, 'read' | 'series'>,
-    progress?: (words: string) => void,
-  ) => Promise<Result<Answers>>;
-  readonly feedStatus: () => FeedStatus;
-  /** IANA zone in which instants are shown. */
-  readonly timeZone: string;
-  readonly helpPage: (topic: string | null) => HelpPage;
+  readonly press: (pressing: Pressing) => Promise<readonly Reply[]>;
 };
 
 const said = (spokenReply: Reply): Spoken => ({ reply: spokenReply, outcome: null });
@@ -50,27 +48,15 @@ const refused = (outcome: Refusal): Spoken => ({
   outcome,
 });
 
-/** The tickers a question is about, in its own order. */
-const subjectOf = (question: StatisticalQuestion): readonly string[] =>
-  question.verb === 'compare' && question.between === 'tickers' ? question.tickers : [question.ticker];
+const readerOf = ({ place, from }: Pick<Asking, 'place' | 'from'>): Reader => ({
+  place,
+  from: from ?? askedFromNowhere,
+});
 
-const isStatistical = (question: Question): question is StatisticalQuestion =>
-  question.verb !== 'help' && question.verb !== 'feed';
-
-const seriesOf = (snapshot: PriceSnapshot, tickers: readonly string[]): Result<readonly PriceSeries[]> => {
-  const found: PriceSeries[] = [];
-  for (const ticker of tickers) {
-    const series = snapshot.series(ticker);
-    const reason = snapshot.quarantined.get(ticker);
-    if (series === null && reason !== undefined) return refuse(problem('quarantined', reason));
-    if (series === null)
-      return refuse(
-        problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`),
-      );
-    found.push(series);
-  }
-  return succeed(found);
-};
+/** What can be answered while there are no prices. */
+const needsNoPrices = (outcome: ReadOutcome): boolean =>
+  outcome.ok &&
+  (['help', 'feed'].includes(outcome.value.question.verb) || isOfRecords(outcome.value.question));
 
 /** A picture cannot be had yet, and that is said beside the figures rather than instead of them. */
 const withoutPicture = (given: Reply): Reply => ({
@@ -94,20 +80,42 @@ const withStaleness = (given: Reply, freshness: Freshness | null): Reply => {
 
 /** One conversation for every workspace: text in, replies out. */
 export const createConverse = (desk: Desk): Converse => {
-  const recent = recentAnswers();
-
   const answerStatistical = async (
     read: ReadQuestion,
     question: StatisticalQuestion,
     snapshot: PriceSnapshot,
-    progress?: (words: string) => void,
+    asking: Asking,
   ): Promise<Spoken> => {
-    const series = seriesOf(snapshot, subjectOf(question));
-    if (!series.ok) return refused(series);
-    const outcome = await desk.compute({ read, series: series.value }, progress);
-    if (!outcome.ok) return refused(outcome);
-    recent.keep(outcome.value);
-    return { reply: withStaleness(asWished(read, outcome.value), desk.feedStatus().freshness), outcome };
+    const worked = await workOut(desk, read, question, snapshot, asking.progress);
+    if (!worked.ok) return refused(worked);
+    const { freshness } = desk.feedStatus();
+    const { answers, reply } = await keepAnswer(desk.records, {
+      ...worked.value,
+      question,
+      replyTo: (named) => withStaleness(asWished(read, named), freshness),
+      asking: { ...readerOf(asking), words: asking.text, askedAtMs: desk.clock.nowMs() },
+    });
+    return { reply, outcome: succeed(answers) };
+  };
+
+  const answerRecords = async (
+    question: RecordQuestion,
+    snapshot: Result<PriceSnapshot>,
+    asking: Asking,
+  ): Promise<Spoken> => {
+    const { store, versions } = desk.records;
+    const found = await answerOfRecords(
+      {
+        ...desk,
+        compute: (job) => desk.compute(job, asking.progress),
+        snapshot,
+        store,
+        nodeVersion: versions.node,
+      },
+      question,
+      readerOf(asking),
+    );
+    return found.ok ? said(found.value) : refused(found);
   };
 
   const answerFeed = (ticker: string | null): Spoken => {
@@ -126,53 +134,28 @@ export const createConverse = (desk: Desk): Converse => {
   const answerOne = async (
     read: ReadQuestion,
     live: Result<PriceSnapshot>,
-    progress?: (words: string) => void,
+    asking: Asking,
   ): Promise<Spoken> => {
     const { question } = read;
-    if (question.verb === 'help') return said(helpReply(desk.helpPage(question.topic)));
     if (isStatistical(question))
-      return live.ok ? answerStatistical(read, question, live.value, progress) : refused(live);
-    return answerFeed(question.ticker);
+      return live.ok ? answerStatistical(read, question, live.value, asking) : refused(live);
+    if (isOfRecords(question)) return answerRecords(question, live, asking);
+    return question.verb === 'help'
+      ? said(helpReply(desk.helpPage(question.topic)))
+      : answerFeed(question.ticker);
   };
 
-  const ask = async ({ text, progress }: Asking): Promise<readonly Spoken[]> => {
-    const live = desk.snapshot();
-    const { questions } = readMessage(text, desk.contextFor(live.ok ? live.value : null));
-    const needsNoPrices = (outcome: ReadOutcome) =>
-      outcome.ok && ['help', 'feed'].includes(outcome.value.question.verb);
-    // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
-    if (!live.ok && !questions.some(needsNoPrices)) return questions.length === 0 ? [] : [refused(live)];
-    const spoken: Spoken[] = [];
-    for (const outcome of questions)
-      spoken.push(outcome.ok ? await answerOne(outcome.value, live, progress) : refused(outcome));
-    return spoken;
+  return {
+    ask: async (asking) => {
+      const live = desk.snapshot();
+      const { questions } = readMessage(asking.text, desk.contextFor(live.ok ? live.value : null));
+      // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
+      if (!live.ok && !questions.some(needsNoPrices)) return questions.length === 0 ? [] : [refused(live)];
+      const spoken: Spoken[] = [];
+      for (const outcome of questions)
+        spoken.push(outcome.ok ? await answerOne(outcome.value, live, asking) : refused(outcome));
+      return spoken;
+    },
+    press: (pressing) => showWorking(desk, pressing, readerOf(pressing)),
   };
-
-  const press: Converse['press'] = async ({ answerId, question }) => {
-    const kept = recent.find(answerId);
-    if (kept !== null) return workingReplies(kept);
-    const replies: Reply[] = [];
-    for (const { outcome } of await ask({ text: question, place: 'terminal' })) {
-      if (outcome?.ok !== true) continue;
-      const [{ id }] = outcome.value;
-      if (id !== answerId)
-        replies.push(
-          reply(
-            'refusal',
-            `The prices have changed since ${answerId} was given; this is the working of the same question today, ${id}.`,
-          ),
-        );
-      replies.push(...workingReplies(outcome.value));
-    }
-    return replies.length > 0
-      ? replies
-      : [
-          reply(
-            'refusal',
-            `${answerId} cannot be worked out again on the prices of today. Ask the question anew.`,
-          ),
-        ];
-  };
-
-  return { ask, press };
 };

@@ -4,6 +4,7 @@ import { computeInline } from '../../src/start/compute/inline.ts';
 import { createDesk } from '../../src/start/desk.ts';
 import { feedOnce } from '../../src/start/feed.ts';
 import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
+import { recordsInMemory } from '../doubles/records.ts';
 
 const example = new URL('../../config/example-settings.yaml', import.meta.url).pathname;
 
@@ -18,5 +19,6 @@ export const demoConverse = async (): Promise<Converse> => {
   const settings = exampleSettings();
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
-  return createConverse(createDesk({ settings, clock, ...feed, compute: computeInline() }));
+  const records = await recordsInMemory();
+  return createConverse(createDesk({ settings, clock, ...feed, compute: computeInline(), records }));
 };

@@ -16,7 +16,19 @@ export const percent = (digits: number): Level => ({ digits, places: 2 });
 
 const returns = (count: number): Window => ({ kind: 'returns', count });
 
-const everyVerb = ['interval', 'tail', 'shape', 'claim', 'need', 'compare', 'backtest', 'feed', 'help'];
+const everyVerb = [
+  'interval',
+  'tail',
+  'shape',
+  'claim',
+  'need',
+  'compare',
+  'backtest',
+  'again',
+  'records',
+  'feed',
+  'help',
+];
 
 /** A feed whose tickers include one with a dot, one with a slash, and some that are words of the language. */
 export const tickers = [

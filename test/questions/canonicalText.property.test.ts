@@ -173,6 +173,16 @@ const question: fc.Arbitrary<Question> = fc.oneof(
   backtest,
   fc.record({ verb: fc.constant('feed' as const), ticker: fc.option(ticker) }),
   fc.record({
+    verb: fc.constant('again' as const),
+    ids: fc.constantFrom(['R-7Q2M9K4TXD'] as const, ['R-7Q2M9K4TXD', 'R-3FHW8N0ZQC2K'] as const),
+  }),
+  fc.record({
+    verb: fc.constant('records' as const),
+    ticker: fc.option(ticker),
+    since: fc.option(day),
+    verify: fc.constant(false),
+  }),
+  fc.record({
     verb: fc.constant('help' as const),
     topic: fc.constantFrom(null, 'tail', 'windows', 'prices'),
   }),

@@ -8,7 +8,9 @@ test.each([
   ['R-OOIILLOOil', 'R-0011110011'],
   ['R-7Q2M9K4TXU', null],
   ['R-7Q2M9K4TX', null],
-  ['R-7Q2M9K4TXDD', null],
+  ['R-7Q2M9K4TXDD', 'R-7Q2M9K4TXDD'],
+  ['R-7Q2M9K4TXD7Q2M9K4TXD', 'R-7Q2M9K4TXD7Q2M9K4TXD'],
+  ['R-7Q2M9K4TXD7Q2M9K4TXDD', null],
   ['R7Q2M9K4TXD', null],
   ['D-7Q2M9K4TXD', null],
 ])('%s is the record %s', (text, id) => {

@@ -1,48 +1,14 @@
 import { describe, expect, test } from 'vitest';
 import { answerQuestion } from '../../src/answers/answerQuestion.ts';
-import { generalTopic } from '../../src/questions/help/topics.ts';
-import { createVocabulary } from '../../src/questions/vocabulary.ts';
-import type { FeedStatus } from '../../src/terms/feedReport.ts';
-import type { PriceSeries, PriceSnapshot } from '../../src/terms/prices.ts';
 import { problem } from '../../src/terms/problem.ts';
 import { refuse, succeed } from '../../src/terms/result.ts';
-import { type Converse, createConverse, type Desk } from '../../src/workspaces/converse.ts';
+import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
 import { seriesOf, wobbling } from '../answers/madeSeries.ts';
-import { context } from '../questions/asking.ts';
-
-const noStatus: FeedStatus = {
-  report: null,
-  freshness: null,
-  swappedAt: null,
-  restatements: [],
-  problem: null,
-  problemAt: null,
-};
-
-const snapshotOf = (all: readonly PriceSeries[]): PriceSnapshot => ({
-  fingerprint: 'ab'.repeat(32),
-  tickers: all.map(({ ticker }) => ticker),
-  lastDay: 20784,
-  series: (ticker) => all.find((each) => each.ticker === ticker) ?? null,
-  quarantined: new Map([['MURK', 'MURK has two different closes on 2026-11-02.']]),
-});
-
-const policy = { periodsPerYear: 252, smallestMeanThatMatters: 0.0005 };
-
-const deskOn = (snapshot: Desk['snapshot'], more: Partial<Desk> = {}): Desk => ({
-  snapshot,
-  contextFor: (live) => ({
-    ...context,
-    vocabulary: createVocabulary(live === null ? [] : [...live.tickers, ...live.quarantined.keys()]),
-  }),
-  compute: async (job) => answerQuestion({ ...job, policy }),
-  feedStatus: () => noStatus,
-  timeZone: 'UTC',
-  helpPage: () => generalTopic(['interval']),
-  ...more,
-});
+import { recordsInMemory } from '../doubles/records.ts';
+import { deskOn, noStatus, snapshotOf } from './madeDesk.ts';
 
 const closes = wobbling(300);
+const records = await recordsInMemory();
 const live = succeed(snapshotOf([seriesOf('KELP', closes), seriesOf('TARN', [...closes].reverse())]));
 
 const say = async (converse: Converse, text: string) =>
@@ -50,7 +16,7 @@ const say = async (converse: Converse, text: string) =>
 
 describe('a conversation', () => {
   test('answers each ticker of a question, and each of up to three lines, in order', async () => {
-    const converse = createConverse(deskOn(() => live));
+    const converse = createConverse(deskOn(records, () => live));
     const replies = await say(converse, 'interval KELP TARN 60d\ninterval vol KELP');
     expect(replies.map(({ sentence }) => sentence.slice(0, 12))).toEqual([
       'KELP’s mean ',
@@ -60,11 +26,11 @@ describe('a conversation', () => {
   });
 
   test('says nothing where nothing is asked', async () => {
-    expect(await say(createConverse(deskOn(() => live)), 'thanks')).toEqual([]);
+    expect(await say(createConverse(deskOn(records, () => live)), 'thanks')).toEqual([]);
   });
 
   test('a ticker that is held back is refused with the reason', async () => {
-    const [reply] = await say(createConverse(deskOn(() => live)), 'interval MURK');
+    const [reply] = await say(createConverse(deskOn(records, () => live)), 'interval MURK');
     expect([reply?.kind, reply?.sentence]).toEqual([
       'refusal',
       'MURK has two different closes on 2026-11-02.',
@@ -72,7 +38,7 @@ describe('a conversation', () => {
   });
 
   test('without a feed a question gets the feed’s problem, once, and help still works', async () => {
-    const converse = createConverse(deskOn(() => refuse(problem('feedMissing', 'No file.'))));
+    const converse = createConverse(deskOn(records, () => refuse(problem('feedMissing', 'No file.'))));
     expect((await say(converse, 'interval KELP\ninterval TARN')).map(({ sentence }) => sentence)).toEqual([
       'No file.',
     ]);
@@ -81,17 +47,19 @@ describe('a conversation', () => {
 
   test('old prices are said before every other caution', async () => {
     const freshness = { lastDay: 20784, expectedDay: 20786, sessionsBehind: 2, counted: 'weekdays' } as const;
-    const converse = createConverse(deskOn(() => live, { feedStatus: () => ({ ...noStatus, freshness }) }));
+    const converse = createConverse(
+      deskOn(records, () => live, { feedStatus: () => ({ ...noStatus, freshness }) }),
+    );
     const [reply] = await say(converse, 'interval KELP');
     expect(reply?.warnings[0]).toContain('2 sessions old');
   });
 
   test('a question that began on one snapshot ends on it', async () => {
     let current = live;
-    const desk = deskOn(() => current, {
+    const desk = deskOn(records, () => current, {
       compute: async (job) => {
         current = succeed(snapshotOf([seriesOf('KELP', wobbling(100))]));
-        return answerQuestion({ ...job, policy });
+        return answerQuestion(job);
       },
     });
     const replies = await say(createConverse(desk), 'interval KELP 250d\ninterval KELP 250d');
@@ -101,36 +69,55 @@ describe('a conversation', () => {
 
 describe('the button under a reply', () => {
   test('shows the working of the very answer it stands under', async () => {
-    const converse = createConverse(deskOn(() => live));
+    const converse = createConverse(deskOn(records, () => live));
     const [answer] = await say(converse, 'interval KELP');
     const [button] = answer?.buttons ?? [];
     if (button === undefined) throw new Error('the answer has no button');
-    const [working] = await converse.press(button);
+    const [working] = await converse.press({ ...button, place: 'channel' });
     expect(working?.sentence).toBe(`The working of ${button.answerId}: ${button.question}.`);
     expect(working?.passages[0]?.lines.length).toBeGreaterThan(8);
   });
 
-  test('after a restart on the same prices it is worked out again', async () => {
-    const [answer] = await say(createConverse(deskOn(() => live)), 'interval KELP');
-    const [button] = answer?.buttons ?? [];
-    if (button === undefined) throw new Error('the answer has no button');
-    const replies = await createConverse(deskOn(() => live)).press(button);
-    expect(replies.map(({ kind }) => kind)).toEqual(['working']);
-  });
-
-  test('after a restart on other prices it says that the prices have changed', async () => {
-    const [answer] = await say(createConverse(deskOn(() => live)), 'interval KELP');
+  test('after a restart, and on other prices, it is found on record', async () => {
+    const own = await recordsInMemory();
+    const [answer] = await say(createConverse(deskOn(own, () => live)), 'interval KELP 50d');
     const [button] = answer?.buttons ?? [];
     if (button === undefined) throw new Error('the answer has no button');
     const moved = succeed(snapshotOf([seriesOf('KELP', wobbling(301))]));
-    const replies = await createConverse(deskOn(() => moved)).press(button);
+    const replies = await createConverse(deskOn(own, () => moved)).press({ ...button, place: 'channel' });
+    expect(replies.map(({ kind, sentence }) => [kind, sentence])).toEqual([
+      ['working', `The working of ${button.answerId}: ${button.question}.`],
+    ]);
+  });
+
+  test('without its record it is worked out again on the same prices', async () => {
+    const [answer] = await say(createConverse(deskOn(records, () => live)), 'interval KELP');
+    const [button] = answer?.buttons ?? [];
+    if (button === undefined) throw new Error('the answer has no button');
+    const replies = await createConverse(deskOn(await recordsInMemory(), () => live)).press({
+      ...button,
+      place: 'channel',
+    });
+    expect(replies.map(({ kind }) => kind)).toEqual(['working']);
+  });
+
+  test('without its record on other prices it says that the prices have changed', async () => {
+    const [answer] = await say(createConverse(deskOn(records, () => live)), 'interval KELP');
+    const [button] = answer?.buttons ?? [];
+    if (button === undefined) throw new Error('the answer has no button');
+    const moved = succeed(snapshotOf([seriesOf('KELP', wobbling(301))]));
+    const replies = await createConverse(deskOn(await recordsInMemory(), () => moved)).press({
+      ...button,
+      place: 'channel',
+    });
     expect(replies.map(({ kind }) => kind)).toEqual(['refusal', 'working']);
     expect(replies[0]?.sentence).toContain(button.answerId);
   });
 
   test('what cannot be worked out any more is said so', async () => {
-    const replies = await createConverse(deskOn(() => live)).press({
+    const replies = await createConverse(deskOn(await recordsInMemory(), () => live)).press({
       action: 'working',
+      place: 'channel',
       answerId: 'R-0000000000',
       question: 'interval GONE 60d at 95%',
     });

@@ -7,6 +7,8 @@ export const commandName = '/leadsman';
 
 const typed = z.object({
   team_id: z.string(),
+  channel_id: z.string().nullable().default(null),
+  user_id: z.string().nullable().default(null),
   text: z.string().optional(),
   response_url: z.string(),
   trigger_id: z.string(),
@@ -27,11 +29,12 @@ export const answerCommand = async (commanding: Commanding, command: unknown): P
     log.error('A slash command arrived in a form that cannot be read.');
     return;
   }
-  const { team_id, text = '', response_url, trigger_id } = read.data;
+  const { team_id, channel_id, user_id, text = '', response_url, trigger_id } = read.data;
   if (!(await seen.firstSeen(JSON.stringify([team_id, trigger_id])))) return;
   const words = text.trim();
+  const from = { team: team_id, channel: channel_id, person: user_id, message: null, thread: null };
   const replies = await repliesOrApology(log, async () =>
-    words === '' ? conversation.examples() : conversation.converse({ text: words, place: 'command' }),
+    words === '' ? conversation.examples() : conversation.converse({ text: words, place: 'command', from }),
   );
   await respond(response_url, replies);
 };

@@ -19,6 +19,7 @@ export type Heard = {
   readonly eventKey: string;
   /** The same before and after an edit. */
   readonly messageKey: string;
+  readonly team: string;
   readonly channel: string;
   readonly ts: string;
   readonly threadTs: string | null;
@@ -54,6 +55,7 @@ export const heardIn = (event: unknown, team: string, self: Self): Heard | null 
   return {
     eventKey: JSON.stringify([team, channel, ts, editedTs]),
     messageKey: JSON.stringify([team, channel, ts]),
+    team,
     channel,
     ts,
     threadTs: thread_ts ?? null,

@@ -1,4 +1,5 @@
 import type { Clock } from '../../terms/clock.ts';
+import type { AskedFrom } from '../../terms/records.ts';
 
 /** Where a question was asked. */
 export type AskedWhere = 'channel' | 'direct' | 'command' | 'terminal';
@@ -7,6 +8,7 @@ export type Asking = {
   /** What was typed, as the platform wrote it out, without the mention of the bot itself. */
   readonly text: string;
   readonly place: AskedWhere;
+  readonly from: AskedFrom;
   /** Says how far a slow answer has come, in words that need no escaping. */
   readonly progress?: (words: string) => void;
 };
@@ -29,6 +31,7 @@ export type Press = {
   readonly actionId: string;
   readonly value: string | null;
   readonly place: AskedWhere;
+  readonly from: AskedFrom;
 };
 
 export type Converse = (asking: Asking) => Promise<readonly SpokenReply[]>;

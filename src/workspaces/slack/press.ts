@@ -1,9 +1,11 @@
 import { z } from 'zod';
+import type { AskedFrom } from '../../terms/records.ts';
 import { answerIn, type ReplyPlace, repliesOrApology, type Speaking } from './answer.ts';
 import type { Conversation, Press, SeenEvents } from './ports.ts';
 import type { Respond } from './respond.ts';
 
 const pressed = z.object({
+  team: z.object({ id: z.string() }).nullish(),
   user: z.object({ id: z.string() }),
   container: z.object({
     message_ts: z.string(),
@@ -44,6 +46,14 @@ const placeOf = ({ user, container, message }: Pressed): ReplyPlace => {
   };
 };
 
+const fromOf = ({ team, user, container, message }: Pressed): AskedFrom => ({
+  team: team?.id ?? null,
+  channel: container.channel_id,
+  person: user.id,
+  message: container.message_ts,
+  thread: container.thread_ts ?? message?.thread_ts ?? null,
+});
+
 const keyOf = ({ user, container, actions }: Pressed): string =>
   JSON.stringify([
     container.channel_id,
@@ -66,6 +76,7 @@ export const answerPress = async (pressing: Pressing, body: unknown): Promise<vo
       actionId: action_id,
       value: value ?? selected_option?.value ?? null,
       place: isPrivate ? 'command' : place.direct ? 'direct' : 'channel',
+      from: fromOf(read.data),
     };
     const make = () => pressing.conversation.press(press);
     if (isPrivate) await pressing.respond(response_url, await repliesOrApology(pressing.log, make));

@@ -34,7 +34,9 @@ const produceFor =
   async (progress: (words: string) => void): Promise<readonly SpokenReply[]> => {
     if (heard.words === '') return conversation.examples().map(dress);
     const place = heard.direct ? 'direct' : 'channel';
-    const replies = await conversation.converse({ text: heard.words, place, progress });
+    const { team, channel, user: person, ts: message, threadTs: thread } = heard;
+    const from = { team, channel, person, message, thread };
+    const replies = await conversation.converse({ text: heard.words, place, from, progress });
     return replies.map(dress);
   };
 

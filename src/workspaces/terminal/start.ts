@@ -39,14 +39,15 @@ const show = (terminal: Terminal, room: Room, replies: readonly Reply[]): Room =
   return { ...room, buttons };
 };
 
+const placeOf = (room: Room) => (room.channel.startsWith('@') ? 'direct' : 'channel');
+
 const say = (terminal: Terminal, text: string): void => terminal.write(`${text}\n`);
 
 const ask = async (terminal: Terminal, converse: Converse, room: Room, text: string): Promise<Room> => {
   const number = room.messageCount + 1;
-  const place = room.channel.startsWith('@') ? 'direct' : 'channel';
   const where = room.thread === null ? '' : `, in thread ${room.thread}`;
   if (terminal.interactive) say(terminal, `  message ${number} in ${room.channel}${where}`);
-  const spoken = await converse.ask({ text, place });
+  const spoken = await converse.ask({ text, place: placeOf(room) });
   return show(
     terminal,
     { ...room, messageCount: number },
@@ -64,7 +65,7 @@ const press = async (terminal: Terminal, converse: Converse, room: Room, number:
     );
     return room;
   }
-  return show(terminal, room, await converse.press(button));
+  return show(terminal, room, await converse.press({ ...button, place: placeOf(room) }));
 };
 
 const enterThread = (terminal: Terminal, room: Room, number: number | null): Room => {

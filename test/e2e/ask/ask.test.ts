@@ -148,3 +148,33 @@ describe('the workspace in the terminal', () => {
     expect(stderr).not.toContain('not-real');
   });
 });
+
+describe('answers on record', () => {
+  test('the command line keeps one only where it is told to, and recomputes it later', async () => {
+    const asked = ['interval BRINE 60d'];
+    const id = /R-\w{10}/.exec((await run('ask', asked)).stdout)?.[0] ?? 'no id';
+    const unknown = await run('ask', ['--json', `again ${id}`]);
+    expect([unknown.code, JSON.parse(unknown.stderr).problem.code]).toEqual([2, 'unknownRecord']);
+    expect((await run('ask', ['--keep', ...asked])).code).toBe(0);
+    const again = await run('ask', [`again ${id}`]);
+    expect([again.code, again.stderr]).toEqual([0, '']);
+    expect(again.stdout).toContain(`${id} comes out the same to the last bit`);
+    expect((await run('ask', ['records BRINE'])).stdout).toContain(id);
+    expect((await run('ask', ['records verify'])).stdout).toContain('The records are whole');
+  });
+
+  test('records that cannot be used take no answer from anybody', async () => {
+    const letter = written('letter.db', 'Dear Sir, this is no database at all.'.repeat(40));
+    const kept = await run('ask', ['--records', letter, '--keep', 'interval KELP 60d']);
+    expect(kept.code).toBe(0);
+    expect(kept.stdout.replace(/\s+/g, ' ')).toContain('Not kept on record: the store cannot be written now');
+    expect(kept.stderr).toContain('was given but not kept');
+    const again = await run('ask', ['--records', letter, '--json', 'records']);
+    expect([again.code, JSON.parse(again.stderr).problem.code]).toEqual([2, 'storeUnavailable']);
+  });
+
+  test('the workspace in the terminal keeps what it answers', async () => {
+    const { stdout } = await run('serve', [], 'interval DULSE 60d\nrecords DULSE\n');
+    expect(stdout).toContain('1 answer on record about DULSE.');
+  });
+});

@@ -18,7 +18,14 @@ describe('a press', () => {
       threadTs: question.ts,
       text: 'Working of: interval KELP',
     });
-    expect(pressed).toEqual([{ actionId: 'working', value: 'interval KELP', place: 'channel' }]);
+    expect(pressed).toMatchObject([
+      {
+        actionId: 'working',
+        value: 'interval KELP',
+        place: 'channel',
+        from: { team: 'T0DESK', channel: 'C0DESK', person: 'U0BEN' },
+      },
+    ]);
   });
 
   it('on an answer in a direct message begins a thread below it', async () => {

@@ -242,8 +242,6 @@ test.each([
   'watch stop W-7',
   'pin R-7Q2M9K4TXD',
   'unpin',
-  'again R-7Q2M9K4TXD',
-  'records KELP since 2026-05-04',
   'help book',
 ])('%s cannot be asked yet', (text) => {
   const problem = problemIn(text);

@@ -70,7 +70,9 @@ it('the same press delivered twice is answered once, a second press again', asyn
 it('a chosen line of a menu counts as its value', async () => {
   const desk = setUp();
   await answerPress(desk, press({ selected_option: { value: 'second' } }));
-  expect(desk.presses).toEqual([{ actionId: 'working', value: 'second', place: 'channel' }]);
+  expect(desk.presses).toMatchObject([
+    { actionId: 'working', value: 'second', place: 'channel', from: { person: 'U1', message: '5.000001' } },
+  ]);
 });
 
 it('a press in a form, which has no message, is left alone', async () => {

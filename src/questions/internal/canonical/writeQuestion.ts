@@ -8,6 +8,7 @@ import type {
   IntervalQuestion,
   NeedQuestion,
   Question,
+  RecordsQuestion,
   Sample,
   ShapeQuestion,
   TailQuestion,
@@ -98,9 +99,17 @@ const backtest = (question: BacktestQuestion, subject: string): Words => [
   log(question),
 ];
 
-/** The tickers that a question is about, as the question writes them. */
+const records = (question: RecordsQuestion, subject: string): Words => [
+  'records',
+  subject,
+  question.since === null ? '' : `since ${isoFromDay(question.since)}`,
+  when(question.verify, 'verify'),
+];
+
+/** The tickers or ids that a question is about, as the question writes them. */
 export const subjectText = (question: Question): string => {
   if (question.verb === 'help') return question.topic ?? '';
+  if (question.verb === 'again') return question.ids.join(' ');
   if (question.verb === 'compare' && question.between === 'tickers')
     return question.tickers.map(writeTicker).join(' ');
   return question.ticker === null ? '' : writeTicker(question.ticker);
@@ -122,6 +131,9 @@ const wordsOf = (question: Question, subject: string): Words => {
       return shape(question, subject);
     case 'backtest':
       return backtest(question, subject);
+    case 'records':
+      return records(question, subject);
+    case 'again':
     case 'feed':
     case 'help':
       return [question.verb, subject];

@@ -23,6 +23,7 @@ const notForVerb = (line: Line, reader: VerbReader, pieces: readonly Placed[]): 
 const keyOf = ({ piece }: Placed): string | null => {
   if (piece.kind === 'ticker') return `ticker ${piece.ticker}`;
   if (piece.kind === 'wish') return `wish ${piece.wish}`;
+  if (piece.kind === 'recordId') return `record ${piece.id}`;
   return anywhere.has(piece.kind) ? null : piece.kind;
 };
 

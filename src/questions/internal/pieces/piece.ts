@@ -33,6 +33,7 @@ export type Piece =
   | { readonly kind: 'of'; readonly of: 'mean' | 'vol' | 'ratio' }
   | { readonly kind: 'wish'; readonly wish: Wish }
   | { readonly kind: 'topic'; readonly topic: string }
+  | { readonly kind: 'verify' }
   | { readonly kind: 'recordId'; readonly id: string }
   | { readonly kind: 'subscriptionId'; readonly id: string };
 

@@ -1,3 +1,4 @@
+import { again } from './again.ts';
 import { backtest } from './backtest.ts';
 import { claim } from './claim.ts';
 import { compare } from './compare.ts';
@@ -5,12 +6,25 @@ import { feed } from './feed.ts';
 import { help } from './help.ts';
 import { interval } from './interval.ts';
 import { need } from './need.ts';
+import { records } from './records.ts';
 import { shape } from './shape.ts';
 import { tail } from './tail.ts';
 import type { VerbReader } from './verbReader.ts';
 
 /** The verbs that can be read whole. */
-const readers: readonly VerbReader[] = [interval, tail, shape, claim, need, compare, backtest, feed, help];
+const readers: readonly VerbReader[] = [
+  interval,
+  tail,
+  shape,
+  claim,
+  need,
+  compare,
+  backtest,
+  again,
+  records,
+  feed,
+  help,
+];
 
 const byVerb: ReadonlyMap<string, VerbReader> = new Map(readers.map((reader) => [reader.verb, reader]));
 

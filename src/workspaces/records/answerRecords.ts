@@ -1,0 +1,56 @@
+import { examinationReply, recordsReply } from '../../present/compose/records.ts';
+import type { Reply } from '../../present/reply.ts';
+import type { AgainQuestion, RecordQuestion, RecordsQuestion } from '../../questions/question.ts';
+import type { InstantMs } from '../../terms/clock.ts';
+import type { Day } from '../../terms/day.ts';
+import { type Result, succeed } from '../../terms/result.ts';
+import { againOne, againTwo, type Recomputing } from './again.ts';
+import type { RecordStore } from './ports.ts';
+import { examine, type Reader, readLines, readRecord } from './reading.ts';
+
+export type AnsweringRecords = Recomputing & {
+  readonly store: RecordStore;
+  /** The instant at which a day begins where the desk is. */
+  readonly dayStartMs: (day: Day) => InstantMs;
+};
+
+/** So many lines are counted; the reply lists far fewer. */
+const mostCounted = 1000;
+
+const answerAgain = async (
+  answering: AnsweringRecords,
+  { ids: [firstId, secondId] }: AgainQuestion,
+  reader: Reader,
+): Promise<Result<Reply>> => {
+  const first = await readRecord(answering.store, reader, firstId);
+  if (!first.ok) return first;
+  if (secondId === undefined) return againOne(answering, first.value);
+  const second = await readRecord(answering.store, reader, secondId);
+  return second.ok ? againTwo(first.value, second.value) : second;
+};
+
+const answerRecords = async (
+  { store, dayStartMs, timeZone }: AnsweringRecords,
+  { ticker, since, verify }: RecordsQuestion,
+  reader: Reader,
+): Promise<Result<Reply>> => {
+  if (verify) {
+    const found = await examine(store);
+    return found.ok ? succeed(examinationReply(found.value)) : found;
+  }
+  const sinceMs = since === null ? null : dayStartMs(since);
+  const lines = await readLines(store, reader, { ticker, sinceMs }, mostCounted);
+  if (!lines.ok) return lines;
+  const atLeast = lines.value.length === mostCounted;
+  return succeed(recordsReply(lines.value, { ticker, since, atLeast }, timeZone));
+};
+
+/** Answers what is asked of the records. */
+export const answerOfRecords = (
+  answering: AnsweringRecords,
+  question: RecordQuestion,
+  reader: Reader,
+): Promise<Result<Reply>> =>
+  question.verb === 'again'
+    ? answerAgain(answering, question, reader)
+    : answerRecords(answering, question, reader);
