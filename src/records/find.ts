@@ -1,5 +1,11 @@
 import type { Kysely } from 'kysely';
-import type { RecordedAnswer, RecordedAsking, RecordFilter, RecordLine } from '../terms/records.ts';
+import type {
+  RecordEntry,
+  RecordedAnswer,
+  RecordedAsking,
+  RecordFilter,
+  RecordLine,
+} from '../terms/records.ts';
 import type { Tables } from './database.ts';
 import { askingOf, unpackSeries } from './internal/rows.ts';
 
@@ -55,17 +61,12 @@ export const find = async (db: Kysely<Tables>, id: string): Promise<Found | null
   return { answer, askings: askings.map(askingOf) };
 };
 
-/** The newest askings first, at most so many. */
-export const list = async (
-  db: Kysely<Tables>,
-  { ticker, sinceMs }: RecordFilter,
-  most: number,
-): Promise<readonly RecordLine[]> => {
+/** The askings that a filter lets through, with the content of their answers. */
+const asked = (db: Kysely<Tables>, { ticker, sinceMs }: RecordFilter) => {
   let query = db
     .selectFrom('askings')
     .innerJoin('answers', 'answers.id', 'askings.answer_id')
-    .selectAll('askings')
-    .select('answers.question');
+    .selectAll('askings');
   if (sinceMs !== null) query = query.where('asked_at_ms', '>=', sinceMs);
   if (ticker !== null)
     query = query.where(({ exists, selectFrom }) =>
@@ -76,7 +77,17 @@ export const list = async (
           .where('answer_series.ticker', '=', ticker),
       ),
     );
-  const rows = await query
+  return query;
+};
+
+/** The newest askings first, at most so many. */
+export const list = async (
+  db: Kysely<Tables>,
+  filter: RecordFilter,
+  most: number,
+): Promise<readonly RecordLine[]> => {
+  const rows = await asked(db, filter)
+    .select('answers.question')
     .orderBy('asked_at_ms', 'desc')
     .orderBy('askings.number', 'desc')
     .limit(most)
@@ -85,4 +96,44 @@ export const list = async (
     const { askedAtMs, place, from } = askingOf(row);
     return { id: row.answer_id, question, askedAtMs, place, from };
   });
+};
+
+const tickersOf = async (db: Kysely<Tables>, answerId: string): Promise<readonly string[]> => {
+  const rows = await db
+    .selectFrom('answer_series')
+    .select('ticker')
+    .where('answer_id', '=', answerId)
+    .orderBy('place')
+    .execute();
+  return rows.map(({ ticker }) => ticker);
+};
+
+/** Whole entries in the order in which they were kept, from after a number on, at most so many. */
+export const page = async (
+  db: Kysely<Tables>,
+  filter: RecordFilter,
+  afterNumber: number,
+  most: number,
+): Promise<readonly RecordEntry[]> => {
+  const rows = await asked(db, filter)
+    .select(['content', 'verb', 'question', 'as_of', 'method_version', 'body'])
+    .where('askings.number', '>', afterNumber)
+    .orderBy('askings.number')
+    .limit(most)
+    .execute();
+  const entries: RecordEntry[] = [];
+  for (const row of rows)
+    entries.push({
+      number: row.number,
+      ids: await idsOf(db, row.answer_id),
+      content: row.content,
+      verb: row.verb,
+      question: row.question,
+      asOf: row.as_of,
+      methodVersion: row.method_version,
+      body: row.body,
+      tickers: await tickersOf(db, row.answer_id),
+      asking: askingOf(row),
+    });
+  return entries;
 };

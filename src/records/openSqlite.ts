@@ -1,4 +1,4 @@
-import { closeSync, mkdirSync, openSync } from 'node:fs';
+import { closeSync, mkdirSync, openSync, renameSync } from 'node:fs';
 import { dirname } from 'node:path';
 import Database from 'better-sqlite3';
 import { Kysely, SqliteDialect } from 'kysely';
@@ -25,6 +25,14 @@ const prepare = (database: Database.Database): void => {
   database.pragma('foreign_keys = ON');
 };
 
+/** The copy takes its name once it is whole, so that a copy cut short never replaces the one before. */
+const copyTo = async (database: Database.Database, path: string): Promise<void> => {
+  const unfinished = `${path}.new`;
+  makeFile(unfinished);
+  await database.backup(unfinished);
+  renameSync(unfinished, path);
+};
+
 /** Opens the store in an SQLite file, which is made where there is none, or `null`: in memory. */
 export const openSqlite = async (path: string | null): Promise<Result<Store>> => {
   let database: Database.Database | null = null;
@@ -35,7 +43,7 @@ export const openSqlite = async (path: string | null): Promise<Result<Store>> =>
     prepare(opened);
     const db = new Kysely<Tables>({ dialect: new SqliteDialect({ database: opened }) });
     await migrate(db, { bytes: 'blob' });
-    return succeed(makeStore(db, (to) => opened.backup(to)));
+    return succeed(makeStore(db, (to) => copyTo(opened, to)));
   } catch (error) {
     database?.close();
     return refuse(storeProblem(error));

@@ -2,6 +2,7 @@ import type { Kysely } from 'kysely';
 import type { InstantMs } from '../terms/clock.ts';
 import { problem } from '../terms/problem.ts';
 import type {
+  RecordEntry,
   RecordExamination,
   RecordedAnswer,
   RecordedAsking,
@@ -10,7 +11,7 @@ import type {
 } from '../terms/records.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import type { Tables } from './database.ts';
-import { type Found, find, list } from './find.ts';
+import { type Found, find, list, page } from './find.ts';
 import { forgetBefore } from './forget.ts';
 import { contentOf, keep } from './keep.ts';
 import { verify } from './verify.ts';
@@ -24,6 +25,12 @@ export type Store = {
   readonly find: (id: string) => Promise<Result<Found | null>>;
   /** The newest askings first, at most so many. */
   readonly list: (filter: RecordFilter, most: number) => Promise<Result<readonly RecordLine[]>>;
+  /** Whole entries in the order in which they were kept, from after a number on, at most so many. */
+  readonly page: (
+    filter: RecordFilter,
+    afterNumber: number,
+    most: number,
+  ) => Promise<Result<readonly RecordEntry[]>>;
   readonly verify: () => Promise<Result<RecordExamination>>;
   /** Deletes what was asked before an instant and nobody asked since; the number of askings deleted. */
   readonly forgetBefore: (beforeMs: InstantMs) => Promise<Result<number>>;
@@ -56,6 +63,7 @@ export const makeStore = (db: Kysely<Tables>, copyTo: (path: string) => Promise<
     }),
   find: (id) => guarded(() => find(db, id)),
   list: (filter, most) => guarded(() => list(db, filter, most)),
+  page: (filter, afterNumber, most) => guarded(() => page(db, filter, afterNumber, most)),
   verify: () => guarded(() => verify(db)),
   forgetBefore: (beforeMs) => guarded(() => forgetBefore(db, beforeMs)),
   backUp: (path) =>

@@ -9,6 +9,10 @@ export type Arguments = {
   readonly json: boolean;
   /** Keep the answer on record. */
   readonly keep: boolean;
+  /** Which records an export holds, and in which form. */
+  readonly ticker: string | null;
+  readonly since: string | null;
+  readonly csv: boolean;
   readonly words: readonly string[];
 };
 
@@ -25,6 +29,9 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
         records: { type: 'string' },
         json: { type: 'boolean', default: false },
         keep: { type: 'boolean', default: false },
+        ticker: { type: 'string' },
+        since: { type: 'string' },
+        csv: { type: 'boolean', default: false },
       },
     });
     return {
@@ -34,6 +41,9 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
       records: values.records ?? null,
       json: values.json ?? false,
       keep: values.keep ?? false,
+      ticker: values.ticker ?? null,
+      since: values.since ?? null,
+      csv: values.csv ?? false,
       words: positionals,
     };
   } catch (error) {

@@ -4,7 +4,7 @@ import type { Terminal } from '../workspaces/terminal/start.ts';
 const widthWithoutTerminal = 100;
 
 /** A reader that stops reading (a pager, head) ends the conversation; it is no failure. */
-const leaveQuietlyOnClosedPipe = (): void => {
+export const leaveQuietlyOnClosedPipe = (): void => {
   process.stdout.on('error', (error: NodeJS.ErrnoException) => {
     if (error.code === 'EPIPE') process.exit(0);
     throw error;

@@ -63,6 +63,13 @@ export type RecordLine = Pick<RecordedAsking, 'askedAtMs' | 'place' | 'from'> & 
   readonly question: string;
 };
 
+/** One asking with the whole answer that it got, without the prices. Numbers ascend in the order of keeping. */
+export type RecordEntry = Omit<RecordedAnswer, 'series'> & {
+  readonly number: number;
+  readonly tickers: readonly string[];
+  readonly asking: RecordedAsking;
+};
+
 export type RecordFilter = {
   readonly ticker: string | null;
   readonly sinceMs: InstantMs | null;

@@ -93,6 +93,23 @@ export const storeContract = (name: string, open: () => Promise<Store>): void =>
       expect(await idsOf(null, null, 1)).toEqual(['R-A 30']);
     });
 
+    test('gives whole entries page by page in the order in which they were kept', async () => {
+      const store = await empty();
+      const series = [seriesOf('KELP', wobbling(5)), seriesOf('TARN', wobbling(6))];
+      accepted(await store.keep(answerOf('R-A'), askingAt(30)));
+      accepted(await store.keep(answerOf('R-B', { ids: ['R-B', 'R-C'], series }), askingAt(20)));
+      accepted(await store.keep(answerOf('R-A'), askingAt(10)));
+      const all = { ticker: null, sinceMs: null };
+      const first = accepted(await store.page(all, 0, 2));
+      expect(first.map(({ ids }) => ids)).toEqual([['R-A'], ['R-B', 'R-C']]);
+      const { series: _series, ...whole } = answerOf('R-B', { ids: ['R-B', 'R-C'] });
+      expect(first[1]).toMatchObject({ ...whole, tickers: ['KELP', 'TARN'], asking: askingAt(20) });
+      const rest = accepted(await store.page(all, first[1]?.number ?? 0, 2));
+      expect(rest.map(({ asking }) => asking.askedAtMs)).toEqual([10]);
+      const tarn = accepted(await store.page({ ticker: 'TARN', sinceMs: 20 }, 0, 9));
+      expect(tarn.map(({ ids }) => ids[0])).toEqual(['R-B']);
+    });
+
     test('forgets what is old with a trace, and nothing that was asked since', async () => {
       const store = await empty();
       const tarn = { series: [seriesOf('TARN', wobbling(5))] };

@@ -1,4 +1,4 @@
-import { mkdtempSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import Database from 'better-sqlite3';
@@ -109,6 +109,17 @@ describe('a file of records', () => {
     const { head } = accepted(await store.verify());
     await store.close();
     expect(await examined(copy)).toMatchObject({ answers: 2, askings: 3, head, faults: [] });
+    expect(statSync(copy).mode & 0o077).toBe(0);
+  });
+
+  test('is not copied over a good copy where the copy cannot be finished', async () => {
+    const store = accepted(await openSqlite(await filled()));
+    const copy = join(folder, 'good-copy.db');
+    writeFileSync(copy, 'the copy of yesterday');
+    mkdirSync(`${copy}.new`);
+    expect(refusalCode(await store.backUp(copy))).toBe('storeUnavailable');
+    expect(readFileSync(copy, 'utf8')).toBe('the copy of yesterday');
+    await store.close();
   });
 
   test('goes on where an interrupted start left the tables', async () => {

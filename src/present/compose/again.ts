@@ -32,7 +32,10 @@ export type AgainInWords = {
   readonly record: RecordInWords;
   /** Why it cannot be worked out at all any more, where it cannot. */
   readonly refused: string | null;
+  /** Whether every figure is the same to the last bit. */
   readonly same: boolean;
+  /** Whether what stands around the figures (cautions, notes, working) is the same too. */
+  readonly sameWords: boolean;
   readonly differences: readonly Difference[];
   readonly methodVersionNow: string;
   readonly nodeVersionNow: string;
@@ -68,14 +71,20 @@ const sentenceOf = (again: AgainInWords): string => {
 
 const differencePassage = (again: AgainInWords): readonly Passage[] => {
   if (again.refused !== null) return [{ head: 'Why', lines: [again.refused] }];
-  if (again.same) return [];
+  if (again.same)
+    return again.sameWords
+      ? []
+      : [
+          {
+            head: null,
+            lines: ['Every figure is the same; cautions, notes or working are put otherwise now.'],
+          },
+        ];
   const shown = again.differences.slice(0, mostDifferences);
   const more = again.differences.length - shown.length;
   const lines = shown.map(({ path, before, after }) => `${path}: ${before} then, ${after} now`);
-  const none =
-    again.differences.length === 0 ? ['Every figure is the same; the words around them are not.'] : [];
   const rest = more > 0 ? [`and ${counted(more, 'more figure')}`] : [];
-  return [{ head: 'What differs', lines: [reasonFor(again), ...none, ...lines, ...rest] }];
+  return [{ head: 'What differs', lines: [reasonFor(again), ...lines, ...rest] }];
 };
 
 const changeInWords = (change: Change | string): string => {

@@ -31,6 +31,7 @@ export const reopening = (open: () => Promise<Result<Store>>): Reopening => {
     keep: (answer, asking) => using((store) => store.keep(answer, asking)),
     find: (id) => using((store) => store.find(id)),
     list: (filter, most) => using((store) => store.list(filter, most)),
+    page: (filter, afterNumber, most) => using((store) => store.page(filter, afterNumber, most)),
     verify: () => using((store) => store.verify()),
     forgetBefore: (beforeMs) => using((store) => store.forgetBefore(beforeMs)),
     backUp: (path) => using((store) => store.backUp(path)),

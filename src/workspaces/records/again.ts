@@ -44,7 +44,7 @@ const inWords = ({ answer, askings }: OnRecord, { answers }: RecordBody): Record
   };
 };
 
-type FromItsOwn = Pick<AgainInWords, 'refused' | 'same' | 'differences'>;
+type FromItsOwn = Pick<AgainInWords, 'refused' | 'same' | 'sameWords' | 'differences'>;
 
 /** The answer from the very prices that were kept with it. */
 const fromItsOwnPrices = async (
@@ -53,13 +53,11 @@ const fromItsOwnPrices = async (
   body: RecordBody,
 ): Promise<FromItsOwn> => {
   const outcome = await compute(jobOf(answer, body));
-  if (!outcome.ok) return { refused: outcome.problem.message, same: false, differences: [] };
-  const same = contentOf({ policy: body.policy, answers: outcome.value }) === answer.content;
-  return {
-    refused: null,
-    same,
-    differences: same ? [] : figureDifferences(body.answers, outcome.value),
-  };
+  if (!outcome.ok)
+    return { refused: outcome.problem.message, same: false, sameWords: false, differences: [] };
+  const differences = figureDifferences(body.answers, outcome.value);
+  const sameWords = contentOf({ policy: body.policy, answers: outcome.value }) === answer.content;
+  return { refused: null, same: differences.length === 0, sameWords, differences };
 };
 
 type OnToday = Pick<AgainInWords, 'changes' | 'restated' | 'today'>;

@@ -38,7 +38,7 @@ export const toRecord = (
 };
 
 /** What is on record, read back. A body of another form was kept by another version of the program. */
-export const fromRecord = ({ ids, body }: RecordedAnswer): Result<RecordBody> => {
+export const fromRecord = ({ ids, body }: Pick<RecordedAnswer, 'ids' | 'body'>): Result<RecordBody> => {
   // written by toRecord
   const read: RecordBody | { readonly bodyVersion: unknown } = JSON.parse(body);
   return 'answers' in read && read.bodyVersion === bodyVersion

@@ -1,10 +1,20 @@
 import { problem } from '../../terms/problem.ts';
-import type { AskedFrom, RecordExamination, RecordFilter, RecordLine } from '../../terms/records.ts';
+import {
+  type AskedFrom,
+  askedFromNowhere,
+  type RecordEntry,
+  type RecordExamination,
+  type RecordFilter,
+  type RecordLine,
+} from '../../terms/records.ts';
 import { type Refusal, type Result, refuse, succeed } from '../../terms/result.ts';
 import type { OnRecord, RecordStore } from './ports.ts';
 
 /** Who wants to read a record, and where what they read will be seen. */
 export type Reader = { readonly place: string; readonly from: AskedFrom };
+
+/** Whoever runs the bot and reads its file. */
+export const operator: Reader = { place: 'operator', from: askedFromNowhere };
 
 /** Whether a reader may see what was asked there: the one place that decides it. Everybody may, for now. */
 export const mayRead = (_reader: Reader, _record: Pick<RecordLine, 'place' | 'from'>): boolean => true;
@@ -43,6 +53,10 @@ export const readLines = async (
   const lines = await store.list(filter, most);
   return lines.ok ? succeed(lines.value.filter((line) => mayRead(reader, line))) : lines;
 };
+
+/** Whole entries for a reader: those of a page that they may see. */
+export const readable = (reader: Reader, entries: readonly RecordEntry[]): readonly RecordEntry[] =>
+  entries.filter(({ asking }) => mayRead(reader, asking));
 
 /** Counts and hashes only: an examination shows no record to anybody. */
 export const examine = (store: RecordStore): Promise<Result<RecordExamination>> => store.verify();

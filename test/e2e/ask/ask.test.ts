@@ -2,7 +2,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, test } from 'vitest';
-import { run } from './run.ts';
+import { recordsFile, run } from './run.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'leadsman-ask-'));
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
@@ -161,6 +161,32 @@ describe('answers on record', () => {
     expect(again.stdout).toContain(`${id} comes out the same to the last bit`);
     expect((await run('ask', ['records BRINE'])).stdout).toContain(id);
     expect((await run('ask', ['records verify'])).stdout).toContain('The records are whole');
+  });
+
+  test('records are exported, copied, and restored from the copy', async () => {
+    await run('ask', ['--keep', 'interval CURLEW 60d']);
+    const lines = (await run('export', ['--ticker', 'CURLEW'])).stdout.trim().split('\n');
+    expect(lines.map((line) => JSON.parse(line).words)).toEqual(['interval CURLEW 60d']);
+    expect((await run('export', ['--csv', '--since', '2100-01-01'])).stdout).toMatch(
+      /^number,askedAt,id,[\w,]+\n$/,
+    );
+    const copy = join(folder, 'copy.db');
+    expect((await run('backup', [copy])).code).toBe(0);
+    const restored = await run('ask', ['--records', copy, 'records CURLEW']);
+    expect(restored.stdout).toContain('1 answer on record about CURLEW.');
+  });
+
+  test.each([
+    ['export', ['--since', 'yesterday'], 'yesterday'],
+    ['export', ['--tickers', 'KELP'], '--tickers'],
+    ['backup', [], 'Name the one file'],
+    ['backup', [recordsFile], 'the file of the records itself'],
+    ['backup', ['--records', join(folder, 'none.db'), 'copy.db'], 'There are no records'],
+  ] as const)('%s %j is refused in words, exit 2', async (script, words, hint) => {
+    await run('ask', ['--keep', 'interval CURLEW 60d']);
+    const { code, stdout, stderr } = await run(script, words);
+    expect({ code, stdout }).toEqual({ code: 2, stdout: '' });
+    expect(stderr).toContain(hint);
   });
 
   test('records that cannot be used take no answer from anybody', async () => {

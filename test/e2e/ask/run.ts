@@ -18,7 +18,7 @@ const ownRecords = (script: string): readonly string[] =>
 
 /** Runs a built command of the project as a person would, with the given standard input. */
 export const run = (
-  script: 'ask' | 'serve' | 'inspect',
+  script: 'ask' | 'serve' | 'inspect' | 'export' | 'backup',
   words: readonly string[],
   input: string | null = null,
   env: Readonly<Record<string, string>> = {},

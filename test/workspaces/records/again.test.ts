@@ -116,6 +116,17 @@ describe('again with one id', () => {
     expect(told).toContain('Tell the operator');
   });
 
+  test('words that are put otherwise since are told apart from figures', async () => {
+    const records = await recordsInMemory();
+    const id = idIn(await sayOn(records, [kelp])('interval KELP'));
+    const compute: Desk['compute'] = async (job) => {
+      const outcome = answerQuestion(job);
+      return outcome.ok ? succeed([{ ...outcome.value[0], method: 'another name' }]) : outcome;
+    };
+    const told = await sayOn(records, [kelp], { compute })(`again ${id}`);
+    expect(told).toMatch(/same to the last bit[\s\S]*Every figure is the same; cautions/);
+  });
+
   test('another major version of Node is given as the reason', async () => {
     const records = await recordsInMemory();
     const id = idIn(await sayOn(records, [kelp])('interval KELP'));
