@@ -5,6 +5,8 @@ import { meanCoverage } from './measured/mean.ts';
 import { normalTailCoverage } from './measured/normalTail.ts';
 import { peaksTailCoverage } from './measured/peaksTail.ts';
 import { ratioCoverage } from './measured/ratio.ts';
+import { studentNuCoverage } from './measured/studentNu.ts';
+import { studentTailCoverage } from './measured/studentTail.ts';
 
 /** All cells that were measured. Each file under measured/ is written by one suite of `npm run coverage-table`. */
 export const coverageTable: readonly CoverageCell[] = [
@@ -13,5 +15,7 @@ export const coverageTable: readonly CoverageCell[] = [
   ...ratioCoverage,
   ...historicalTailCoverage,
   ...normalTailCoverage,
+  ...studentTailCoverage,
+  ...studentNuCoverage,
   ...peaksTailCoverage,
 ];
