@@ -1,5 +1,6 @@
 import type { CoverageCell } from './cell.ts';
 import { deviationCoverage } from './measured/deviation.ts';
+import { filteredTailCoverage } from './measured/filteredTail.ts';
 import { historicalTailCoverage } from './measured/historicalTail.ts';
 import { meanCoverage } from './measured/mean.ts';
 import { normalTailCoverage } from './measured/normalTail.ts';
@@ -18,4 +19,5 @@ export const coverageTable: readonly CoverageCell[] = [
   ...studentTailCoverage,
   ...studentNuCoverage,
   ...peaksTailCoverage,
+  ...filteredTailCoverage,
 ];
