@@ -40,7 +40,7 @@ const sortAndSift = async (read: ReadFiles, settings: FeedSettings, nowMs: Insta
   const { collected } = read;
   const { findings } = collected;
   const extras = extrasByTicker(collected);
-  const sorted = await sortRows(collected.names, collected.blocks, (ticker) =>
+  const sorted = await sortRows(collected.names, collected, (ticker) =>
     findings.record('daysOutOfOrder', { ticker }),
   );
   for (const [place, ticker] of sorted.tickers.entries()) {

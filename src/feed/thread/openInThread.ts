@@ -32,9 +32,6 @@ const outcomeOf = (worker: Worker): Promise<ReadingOutcome> =>
     );
   });
 
-/** The memory behind a piece of a result goes when its small object is collected; a small nursery collects it soon. */
-const resourceLimits = { maxYoungGenerationSizeMb: 1 };
-
 /**
  * Reads, checks and opens price files in a thread of their own: the calling thread goes on answering, and whatever
  * memory the reading took beside the prices is given back with the thread.
@@ -46,7 +43,7 @@ export const openInThread = async (
   threadFile: URL = new URL('./readThread.js', import.meta.url),
 ): Promise<Result<OpenSnapshot>> => {
   const workerData: ReadingJob = { files, settings, nowMs };
-  const worker = new Worker(threadFile, { workerData, resourceLimits });
+  const worker = new Worker(threadFile, { workerData });
   try {
     const outcome = await outcomeOf(worker);
     if (!outcome.ok) return outcome;

@@ -1,11 +1,10 @@
 import type { DuckDBDataChunk } from '@duckdb/node-api';
 import { type Result, succeed } from '../../../terms/result.ts';
 import type { FeedSettings } from '../../settings.ts';
-import { blankDay } from './cellCodes.ts';
 import { numberSql, textSql, unreadTextSql } from './cellSql.ts';
 import type { Collected, TickerExtras } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
-import { rawInts } from './rawVectors.ts';
+import { hasValue, rawInts, valueBits } from './rawVectors.ts';
 import type { Source } from './source.ts';
 import { doubles, texts } from './vectors.ts';
 
@@ -85,20 +84,26 @@ const volumePart = (
 };
 
 /** Keeps each ticker's latest close, to be held against its latest adjusted close. */
-const closePart = (settings: FeedSettings, source: Source, path: string): Result<Part | null> => {
+const closePart = (
+  settings: FeedSettings,
+  source: Source,
+  path: string,
+  dayColumn: number,
+): Result<Part | null> => {
   const { adjustedClose, close } = settings.columns;
   if (adjustedClose === null) return succeed(null);
   const found = findColumns(path, source.columns, { close }, 'feed.columns');
   if (!found.ok) return found;
   const read: Reader = (chunk, column, extrasOf) => {
     const { rowCount } = chunk;
-    const days = rawInts(chunk, 1);
+    const days = rawInts(chunk, dayColumn);
+    const dated = valueBits(chunk, dayColumn);
     const closes = doubles(chunk, column);
     for (let at = 0; at < rowCount; at += 1) {
       const extras = extrasOf(at);
       const day = days[at] as number;
       const value = closes.getItem(at);
-      if (extras === null || day <= blankDay || value === null || day < extras.lastDay) continue;
+      if (extras === null || !hasValue(dated, at) || value === null || day < extras.lastDay) continue;
       extras.lastDay = day;
       extras.lastClose = value;
     }
@@ -106,19 +111,20 @@ const closePart = (settings: FeedSettings, source: Source, path: string): Result
   return succeed({ sql: [numberSql(found.value.close, settings.format.decimalMark)], read });
 };
 
-/** The optional columns that the settings name. `firstColumn` is the place of their first column in the query. */
+/** The optional columns that the settings name, from the place `firstColumn` of the query on; the day stands at `dayColumn`. */
 export const makeExtras = (
   path: string,
   source: Source,
   settings: FeedSettings,
   collected: Collected,
   firstColumn: number,
+  dayColumn: number,
 ): Result<ExtraColumns> => {
   const parts: Part[] = [];
   for (const part of [
     currencyPart(settings, source, path, collected),
     volumePart(settings, source, path, collected),
-    closePart(settings, source, path),
+    closePart(settings, source, path, dayColumn),
   ]) {
     if (!part.ok) return part;
     if (part.value !== null) parts.push(part.value);

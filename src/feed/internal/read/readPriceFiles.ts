@@ -33,15 +33,14 @@ const readRows = async (
 
 /** The row that a missing line end may have cut: the last that was added is the last of the file. */
 const recordUnfinishedLine = (collected: Collected, file: string, row: number): void => {
-  const block = collected.blocks.at(-1);
-  if (block === undefined) return;
-  const at = block.count - 1;
+  const last = collected.last();
+  if (last === null) return;
   collected.findings.record('unfinishedLine', {
     file,
     row,
-    ticker: collected.names[block.tickerNumbers[at] as number] ?? null,
-    day: block.days[at] ?? null,
-    value: String(block.closes[at]),
+    ticker: collected.names[last.tickerNumber] ?? null,
+    day: last.day,
+    value: String(last.close),
   });
 };
 

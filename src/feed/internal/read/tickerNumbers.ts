@@ -1,6 +1,6 @@
 import type { DuckDBDataChunk } from '@duckdb/node-api';
 import { type Collected, isTickerName } from './collected.ts';
-import { longestWordedText, rawTextWords } from './rawVectors.ts';
+import { hasValue, longestWordedText, rawTextWords, valueBits } from './rawVectors.ts';
 import { texts } from './vectors.ts';
 
 /** Stands for a row without a ticker. */
@@ -69,7 +69,7 @@ const makeWordTable = () => {
   };
 };
 
-/** Reads the numbers of the tickers of a chunk's rows into `numbers`. The ticker column must have no nulls. */
+/** Reads the numbers of the tickers of a chunk's rows into `numbers`. */
 export type TickerReader = (chunk: DuckDBDataChunk, column: number, numbers: Int32Array) => void;
 
 export const makeTickerReader = (collected: Collected): TickerReader => {
@@ -82,8 +82,13 @@ export const makeTickerReader = (collected: Collected): TickerReader => {
   return (chunk, column, numbers) => {
     const { rowCount } = chunk;
     const words = rawTextWords(chunk, column);
+    const bits = valueBits(chunk, column);
     let [first, second, third, fourth, number] = [-1, 0, 0, 0, noTicker];
     for (let row = 0, at = 0; row < rowCount; row += 1, at += 4) {
+      if (!hasValue(bits, row)) {
+        numbers[row] = noTicker;
+        continue;
+      }
       if (
         words[at] !== first ||
         words[at + 1] !== second ||

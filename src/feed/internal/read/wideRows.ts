@@ -1,20 +1,13 @@
 import type { DuckDBConnection, DuckDBDataChunk } from '@duckdb/node-api';
 import { type Problem, problem } from '../../../terms/problem.ts';
 import type { FeedSettings } from '../../settings.ts';
-import {
-  blankDay,
-  blankPrice,
-  codedDaySql,
-  codedPriceSql,
-  codeOfNoPrice,
-  isPrice,
-  unreadDay,
-} from './cellCodes.ts';
+import { blankDay, blankPrice, codedDaySql, codedPriceSql, isPrice, unreadDay } from './cellCodes.ts';
 import type { SourceColumn } from './cellSql.ts';
 import { type Collected, isTickerName } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
 import type { FileReading } from './longRows.ts';
 import { rawDoubles, rawInts } from './rawVectors.ts';
+import { recordNoPrice } from './rowFaults.ts';
 import type { Source } from './source.ts';
 import { chunksOf } from './vectors.ts';
 import { firstRowOfFile, makeWantedTexts, textsOfRows, type WantedTexts } from './wantedTexts.ts';
@@ -58,17 +51,8 @@ const addColumn = (
       if (price !== blankPrice) firstUndated = Math.min(firstUndated, at);
     } else if (isPrice(price)) collected.add(number, day, price);
     else {
-      const code = codeOfNoPrice(price);
-      const hasNumber = code === 'priceNotPositive' || code === 'priceNotFinite';
-      const value = hasNumber ? String(price) : null;
-      const kept = collected.findings.record(code, {
-        file,
-        row: firstRow + at,
-        ticker: column.name,
-        day,
-        value,
-      });
-      if (code === 'unreadablePrice') wanted.want(kept, column, firstRow + at);
+      const place = { file, row: firstRow + at, ticker: column.name, day };
+      recordNoPrice(collected, place, price, column, wanted);
     }
   }
   return firstUndated;
