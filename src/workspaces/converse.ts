@@ -2,6 +2,7 @@ import type { Answers } from '../answers/answer.ts';
 import { answersReply, jsonReply } from '../present/answerReply.ts';
 import { feedReply, stalenessInWords, tickerReply } from '../present/compose/feed.ts';
 import { helpReply } from '../present/compose/help.ts';
+import { pricePicture } from '../present/compose/pricePicture.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
 import type { Button, Reply } from '../present/reply.ts';
 import type { ReadQuestion, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
@@ -118,17 +119,26 @@ export const createConverse = (desk: Desk): Converse => {
     return found.ok ? said(found.value) : refused(found);
   };
 
-  const answerFeed = (ticker: string | null): Spoken => {
+  /** The small picture of a ticker’s closes, where it was asked for and there are prices to draw. */
+  const withPrices = (given: Reply, ticker: string, live: Result<PriceSnapshot>): Reply => {
+    const series = live.ok ? live.value.series(ticker) : null;
+    return series === null ? given : { ...given, passages: [...given.passages, pricePicture(series)] };
+  };
+
+  const answerFeed = (
+    { wishes }: ReadQuestion,
+    ticker: string | null,
+    live: Result<PriceSnapshot>,
+  ): Spoken => {
     const status = desk.feedStatus();
     if (ticker === null) return said(feedReply(status, desk.timeZone));
     const report = status.report?.tickers.find((each) => each.ticker === ticker);
-    return report === undefined
-      ? refused(
-          refuse(
-            problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`),
-          ),
-        )
-      : said(tickerReply(report, status.freshness));
+    if (report === undefined)
+      return refused(
+        refuse(problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`)),
+      );
+    const given = tickerReply(report, status.freshness);
+    return said(wishes.includes('picture') ? withPrices(given, ticker, live) : given);
   };
 
   const answerOne = async (
@@ -142,7 +152,7 @@ export const createConverse = (desk: Desk): Converse => {
     if (isOfRecords(question)) return answerRecords(question, live, asking);
     return question.verb === 'help'
       ? said(helpReply(desk.helpPage(question.topic)))
-      : answerFeed(question.ticker);
+      : answerFeed(read, question.ticker, live);
   };
 
   return {

@@ -176,6 +176,15 @@ describe('every documented key', () => {
     );
   });
 
+  test('a ticker’s prices come with a small picture where it is asked for', async () => {
+    const heads = async (text: string) =>
+      (await converse.ask({ text, place: 'terminal' })).flatMap(({ reply }) =>
+        reply.passages.map(({ head }) => head),
+      );
+    expect(await heads('feed KELP as picture')).toContain('Closes, oldest first');
+    expect(await heads('feed KELP')).not.toContain('Closes, oldest first');
+  });
+
   test.each([
     ['tail KELP on 2m EUR', 'currencyMismatch'],
     ['backtest KELP 700d', 'windowTooLong'],
