@@ -117,6 +117,7 @@ export const storeContract = (name: string, open: () => Promise<Store>): void =>
       accepted(await store.keep(answerOf('R-B', tarn), askingAt(20)));
       accepted(await store.keep(answerOf('R-A'), askingAt(30)));
       const { head } = accepted(await store.verify());
+      expect(accepted(await store.forgetBefore(10))).toBe(0);
       expect(accepted(await store.forgetBefore(25))).toBe(2);
       expect(accepted(await store.find('R-B'))).toBe(null);
       expect(accepted(await store.find('R-A'))?.askings.map(({ askedAtMs }) => askedAtMs)).toEqual([30]);

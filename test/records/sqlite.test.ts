@@ -101,6 +101,26 @@ describe('a file of records', () => {
     expect((await examined(path)).faults.join('\n')).toMatch(fault);
   });
 
+  test.each([
+    ...['content', 'verb', 'question', 'as_of', 'method_version', 'body'].map((column) => [
+      'answers',
+      column,
+    ]),
+    ...['asked_at_ms', 'place', 'team', 'channel', 'person', 'message', 'thread', 'words', 'reply_text'].map(
+      (column) => ['askings', column],
+    ),
+    ...['bot_version', 'node_version', 'settings_hash', 'answer_id'].map((column) => ['askings', column]),
+    ...['kind', 'subject', 'digest', 'previous', 'hash'].map((column) => ['chain', column]),
+    ...['length', 'hash'].map((column) => ['chain_head', column]),
+  ])('is found not to be whole where in %s the %s is another', async (table, column) => {
+    const path = await filled();
+    const tampering = new Database(path);
+    tampering.pragma('foreign_keys = OFF');
+    tampering.exec(`UPDATE ${table} SET ${column} = 77 WHERE rowid = (SELECT min(rowid) FROM ${table})`);
+    tampering.close();
+    expect((await examined(path)).faults).not.toEqual([]);
+  });
+
   test('is copied whole while it is open', async () => {
     const path = await filled();
     const store = accepted(await openSqlite(path));

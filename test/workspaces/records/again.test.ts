@@ -78,8 +78,24 @@ describe('again with one id', () => {
     expect(told).toContain(
       'KELP: 10 of 300 closes restated, the first on 2026-11-16 and 1 new day, to 2026-11-30.',
     );
-    expect(told).toContain('On the same days, with the prices of today');
+    const [alone] = (
+      await sayOn(await recordsInMemory(), [seriesOf('KELP', restated)])('interval KELP')
+    ).split('\n');
+    expect(told).toContain(`On the same days, with the prices of today\n${alone?.replace('answer: ', '')}`);
     expect(new Set([...told.matchAll(/^KELP’s mean daily return .*$/gm)].map(([line]) => line)).size).toBe(3);
+  });
+
+  test('its own prices are worked out with the settings of then, the prices of today with those of now', async () => {
+    const records = await recordsInMemory();
+    const id = idIn(await sayOn(records, [kelp])('interval KELP'));
+    const years: number[] = [];
+    const compute: Desk['compute'] = async (job) => {
+      years.push(job.policy.periodsPerYear);
+      return answerQuestion(job);
+    };
+    const now = { compute, policy: { periodsPerYear: 260, smallestMeanThatMatters: 0.0005 } };
+    expect(await sayOn(records, [kelp], now)(`again ${id}`)).toContain('same to the last bit');
+    expect(years).toEqual([252, 260]);
   });
 
   test('a ticker that the feed has no more comes out from its own prices', async () => {
