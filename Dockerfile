@@ -1,6 +1,8 @@
 # syntax=docker/dockerfile:1
 
 FROM node:20-bookworm-slim AS build
+# The database driver is compiled where no prebuilt binary can be had.
+RUN apt-get update && apt-get install -y --no-install-recommends python3 make g++ && rm -rf /var/lib/apt/lists/*
 WORKDIR /app
 COPY package.json package-lock.json tsconfig.json ./
 COPY src ./src
