@@ -9,21 +9,13 @@ export type RowBlock = {
 };
 
 const rowsPerBlock = 262_144;
-const bytesPerRow = 16;
 
-const blockOn = (buffer: ArrayBuffer, rowCount: number): RowBlock => ({
-  closes: new Float64Array(buffer, 0, rowCount),
-  days: new Int32Array(buffer, 8 * rowCount, rowCount),
-  tickerNumbers: new Int32Array(buffer, 12 * rowCount, rowCount),
-  count: rowCount,
+const makeBlock = (): RowBlock => ({
+  tickerNumbers: new Int32Array(rowsPerBlock),
+  days: new Int32Array(rowsPerBlock),
+  closes: new Float64Array(rowsPerBlock),
+  count: 0,
 });
-
-const copyRows = (from: RowBlock, to: RowBlock, rowCount: number): void => {
-  to.closes.set(from.closes.subarray(0, rowCount));
-  to.days.set(from.days.subarray(0, rowCount));
-  to.tickerNumbers.set(from.tickerNumbers.subarray(0, rowCount));
-  to.count = rowCount;
-};
 
 /** Where the run of rows of one ticker that starts at `from` ends. Files by ticker have long runs, files by day short ones. */
 export const endOfRun = ({ tickerNumbers, count }: RowBlock, from: number): number => {
@@ -31,6 +23,74 @@ export const endOfRun = ({ tickerNumbers, count }: RowBlock, from: number): numb
   let end = from + 1;
   while (end < count && tickerNumbers[end] === number) end += 1;
   return end;
+};
+
+/** A run of rows of one ticker, by the row after its last. */
+type Run = { readonly number: number; readonly end: number };
+
+/** The runs of a block; null where there are more than `most`. */
+const runsOf = (block: RowBlock, most: number): Run[] | null => {
+  const runs: Run[] = [];
+  for (let from = 0; from < block.count; ) {
+    if (runs.length >= most) return null;
+    const end = endOfRun(block, from);
+    runs.push({ number: block.tickerNumbers[from] as number, end });
+    from = end;
+  }
+  return runs;
+};
+
+type Numbers = Uint16Array | Int32Array | readonly Run[];
+
+/** A block that was put away. Its ticker numbers are kept as runs where those are few, as in files by ticker. */
+type PutAway = {
+  readonly buffers: readonly ArrayBuffer[];
+  readonly closes: Float64Array;
+  readonly days: Int32Array;
+  readonly numbers: Numbers;
+};
+
+/** Above this share of runs the numbers themselves take less room. */
+const mostRuns = 1 / 64;
+const mostShortNumbers = 65_536;
+
+/** A buffer that can be given back at once, filled with what `source` holds. */
+const bufferOf = (source: Int32Array | Uint16Array | Float64Array): ArrayBuffer => {
+  const buffer = new ArrayBuffer(source.byteLength, { maxByteLength: source.byteLength });
+  new Uint8Array(buffer).set(new Uint8Array(source.buffer, source.byteOffset, source.byteLength));
+  return buffer;
+};
+
+const putAwayFrom = (block: RowBlock): PutAway => {
+  const { count } = block;
+  const closes = bufferOf(block.closes.subarray(0, count));
+  const days = bufferOf(block.days.subarray(0, count));
+  const views = { closes: new Float64Array(closes, 0, count), days: new Int32Array(days, 0, count) };
+  const runs = runsOf(block, mostRuns * count);
+  if (runs !== null) return { ...views, numbers: runs, buffers: [closes, days] };
+  const numbers = block.tickerNumbers.subarray(0, count);
+  if (numbers.every((number) => number < mostShortNumbers)) {
+    const short = bufferOf(Uint16Array.from(numbers));
+    return { ...views, numbers: new Uint16Array(short, 0, count), buffers: [closes, days, short] };
+  }
+  const whole = bufferOf(numbers);
+  return { ...views, numbers: new Int32Array(whole, 0, count), buffers: [closes, days, whole] };
+};
+
+/** Brings a block back into `block` and gives its buffer up. */
+const takeOut = ({ buffers, closes, days, numbers }: PutAway, block: RowBlock): void => {
+  block.count = days.length;
+  block.closes.set(closes);
+  block.days.set(days);
+  if (numbers instanceof Uint16Array || numbers instanceof Int32Array) block.tickerNumbers.set(numbers);
+  else {
+    let from = 0;
+    for (const { number, end } of numbers) {
+      block.tickerNumbers.fill(number, from, end);
+      from = end;
+    }
+  }
+  for (const buffer of buffers) buffer.resize(0);
 };
 
 const addCounts = (block: RowBlock, counts: number[]): void => {
@@ -59,17 +119,13 @@ export type RowBlocks = {
  * once: the engine frees an ordinary one whenever it likes, and rows must not be held twice while they are sorted.
  */
 export const makeRowBlocks = (): RowBlocks => {
-  const current = blockOn(new ArrayBuffer(bytesPerRow * rowsPerBlock), rowsPerBlock);
-  current.count = 0;
-  const putAway: ArrayBuffer[] = [];
+  const current = makeBlock();
+  const putAway: PutAway[] = [];
   const countsPutAway: number[] = [];
 
   const makeRoom = (): void => {
     if (current.count < rowsPerBlock) return;
-    const byteLength = bytesPerRow * current.count;
-    const buffer = new ArrayBuffer(byteLength, { maxByteLength: byteLength });
-    copyRows(current, blockOn(buffer, current.count), current.count);
-    putAway.push(buffer);
+    putAway.push(putAwayFrom(current));
     addCounts(current, countsPutAway);
     current.count = 0;
   };
@@ -107,10 +163,9 @@ export const makeRowBlocks = (): RowBlocks => {
     return all;
   };
   const takeAll: RowBlocks['takeAll'] = async (work) => {
-    const scratch = blockOn(new ArrayBuffer(bytesPerRow * rowsPerBlock), rowsPerBlock);
-    for (const buffer of putAway.splice(0)) {
-      copyRows(blockOn(buffer, buffer.byteLength / bytesPerRow), scratch, buffer.byteLength / bytesPerRow);
-      buffer.resize(0);
+    const scratch = makeBlock();
+    for (const block of putAway.splice(0)) {
+      takeOut(block, scratch);
       await work(scratch);
     }
     await work(current);

@@ -4,7 +4,7 @@ import { parentPort, workerData } from 'node:worker_threads';
 import { openFiles } from '../openFeed.ts';
 import type { ReadingJob, ReadingOutcome } from './openInThread.ts';
 
-const collectEveryMs = 50;
+const collectEveryMs = 20;
 
 /**
  * Each piece of a result holds memory that the engine does not count, behind an object that is too small for it to

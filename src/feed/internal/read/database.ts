@@ -19,7 +19,7 @@ const runOn = async <Value>(
   const connection = await instance.connect();
   try {
     // the default of 1 MB makes the reading threads wait for every few rows that are taken
-    await connection.run("SET streaming_buffer_size = '4MB'");
+    await connection.run("SET streaming_buffer_size = '2MB'");
     return await work(connection);
   } finally {
     connection.closeSync();
