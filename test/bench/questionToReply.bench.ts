@@ -8,16 +8,20 @@ import { toBlocks } from '../../src/present/blocks.ts';
 import { run } from '../e2e/ask/run.ts';
 import { demoConverse } from '../e2e/demoDesk.ts';
 
-const converse = await demoConverse();
+const converse = await demoConverse(false);
+const keeping = await demoConverse();
 
-const answer = async (text: string): Promise<void> => {
-  for (const { reply } of await converse.ask({ text, place: 'channel' })) toBlocks(reply);
+const answer = async (text: string, asked = converse): Promise<void> => {
+  for (const { reply } of await asked.ask({ text, place: 'channel' })) toBlocks(reply);
 };
 
 describe('question to rendered reply', () => {
   bench('interval KELP 60d: goal 0.5 ms', () => answer('interval KELP 60d'), { time: 1000 });
   bench('interval KELP 60d robust, with a bootstrap: goal 15 ms', () => answer('interval KELP 60d robust'), {
     time: 2000,
+  });
+  bench('interval KELP 60d, kept on record in memory', () => answer('interval KELP 60d', keeping), {
+    time: 1000,
   });
   bench('compare KELP TARN 60d', () => answer('compare KELP TARN 60d'), { time: 1000 });
   bench('tail KELP, five models: goal 150 ms', () => answer('tail KELP'), { time: 3000 });

@@ -15,10 +15,10 @@ export const exampleSettings = (): Settings => {
 };
 
 /** The whole bot on the demonstration prices, on the morning after they end, without a workspace around it. */
-export const demoConverse = async (): Promise<Converse> => {
+export const demoConverse = async (keeps = true): Promise<Converse> => {
   const settings = exampleSettings();
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
-  const records = await recordsInMemory();
+  const records = await recordsInMemory({ keeps });
   return createConverse(createDesk({ settings, clock, ...feed, compute: computeInline(), records }));
 };
