@@ -13,10 +13,11 @@ const mostLogOmega = Math.log(1e3);
 /** Beyond this sum of α and β the likelihood is not looked at: the variance would explode within the window. */
 const largestPersistence = 1.2;
 
-/** A reported fit is finished at this |gradient|·standard error; a resample is lost in its own noise far above it. */
+/** A reported fit is finished at this |gradient|·standard error. */
 const tolerance = 1e-8;
-const resampleTolerance = 1e-4;
-/** Enough for a climb with a clear summit; only the highest of them, if it needs more, is followed further. */
+/** Close enough to tell summits apart, and to lose what is left in the noise of a resample. */
+const coarseTolerance = 1e-4;
+/** Enough for a climb with a clear summit; only the highest is followed to the end. */
 const stepsToExplore = 40;
 const stepsToFinish = 300;
 /** Bands of β in which separate maxima are seen; the best start of each band is followed. */
@@ -103,29 +104,32 @@ export const climbNear = (
   innovations: Innovations,
 ): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore);
 
+/** A climb that stops short of the last digits, and need not arrive: one that creeps along α = 0 is left where it is. */
+const explore = (returns: Float64Array, start: Float64Array, innovations: Innovations): NewtonMaximum =>
+  climbFrom(returns, start, innovations, false, stepsToExplore, coarseTolerance);
+
 /**
- * The same for a resample of the returns that were fitted at `start`. Most climbs need five steps; one that creeps along
- * α = 0 is not followed, because the constant variance that it stands for is fitted by itself.
+ * The climb for a resample of the returns that were fitted at `start`. Most need five steps; one that creeps along α = 0
+ * is not followed further, because the constant variance that it stands for is fitted by itself.
  */
 export const climbResample = (
   returns: Float64Array,
   start: Float64Array,
   innovations: Innovations,
 ): NewtonMaximum => {
-  const half = stepsToExplore / 2;
-  const first = climbFrom(returns, start, innovations, false, half, resampleTolerance);
-  if (first.converged || first.point[parameter.alpha] === 0) return first;
-  return climbFrom(returns, first.point, innovations, false, half, resampleTolerance);
+  const first = explore(returns, start, innovations);
+  const unfinished = !first.converged && first.point[parameter.alpha] !== 0;
+  return unfinished ? explore(returns, first.point, innovations) : first;
 };
 
 /** Searches from every promising start. `returns` have mean 0 and mean square 1. */
 export const searchGarch = (returns: Float64Array, innovations: Innovations): GarchSearch => {
   const inverseNu = Math.min(startInverseNu, highestInverseNu(innovations));
-  const climbs = chooseStarts(returns, inverseNu).map((start) => climbNear(returns, start, innovations));
+  const climbs = chooseStarts(returns, inverseNu).map((start) => explore(returns, start, innovations));
   const highest = climbs.reduce((best, next) => (next.value > best.value ? next : best));
-  const unfinished = !highest.converged && highest.side[parameter.alpha] === 0;
+  const clusters = highest.point[parameter.alpha] !== 0;
   return {
-    clustered: unfinished ? climbFrom(returns, highest.point, innovations, false, stepsToFinish) : highest,
+    clustered: clusters ? climbFrom(returns, highest.point, innovations, false, stepsToFinish) : highest,
     constant: fitConstantVariance(returns, innovations),
   };
 };
