@@ -87,14 +87,14 @@ export const list = async (
   most: number,
 ): Promise<readonly RecordLine[]> => {
   const rows = await asked(db, filter)
-    .select('answers.question')
+    .select(['answers.verb', 'answers.question'])
     .orderBy('asked_at_ms', 'desc')
     .orderBy('askings.number', 'desc')
     .limit(most)
     .execute();
-  return rows.map(({ question, ...row }) => {
+  return rows.map(({ verb, question, ...row }) => {
     const { askedAtMs, place, from } = askingOf(row);
-    return { id: row.answer_id, question, askedAtMs, place, from };
+    return { id: row.answer_id, verb, question, askedAtMs, place, from };
   });
 };
 

@@ -6,6 +6,7 @@ import type { FeedStatus } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 import type { Desk } from '../workspaces/desk.ts';
+import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import type { DeskRecords } from '../workspaces/records/ports.ts';
 import type { Compute } from './compute/compute.ts';
 import { helpPageOf } from './helpPages.ts';
@@ -18,6 +19,8 @@ export type DeskParts = {
   readonly feedStatus: () => FeedStatus;
   readonly compute: Compute;
   readonly records: DeskRecords;
+  /** Without them: a place that belongs to one person alone. */
+  readonly permissions?: Permissions;
 };
 
 const builtVerbs = ['help', 'feed', 'again', 'records', ...answeredVerbs];
@@ -57,5 +60,6 @@ export const createDesk = (parts: DeskParts): Desk => {
     dayStartMs: (day) => dayStartMs(day, settings.deskTimeZone),
     helpPage: helpPageOf(builtVerbs),
     records,
+    permissions: parts.permissions ?? everythingAllowed,
   };
 };

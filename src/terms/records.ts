@@ -60,6 +60,7 @@ export type RecordedAsking = {
 /** One asking with the answer that it got, in few words. */
 export type RecordLine = Pick<RecordedAsking, 'askedAtMs' | 'place' | 'from'> & {
   readonly id: string;
+  readonly verb: string;
   readonly question: string;
 };
 

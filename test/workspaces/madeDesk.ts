@@ -4,6 +4,7 @@ import { createVocabulary } from '../../src/questions/vocabulary.ts';
 import type { FeedStatus } from '../../src/terms/feedReport.ts';
 import type { PriceSeries, PriceSnapshot } from '../../src/terms/prices.ts';
 import type { Desk } from '../../src/workspaces/desk.ts';
+import { everythingAllowed } from '../../src/workspaces/permissions.ts';
 import type { DeskRecords } from '../../src/workspaces/records/ports.ts';
 import { context } from '../questions/asking.ts';
 
@@ -46,5 +47,6 @@ export const deskOn = (records: DeskRecords, snapshot: Desk['snapshot'], more: P
   dayStartMs: (day) => day * millisecondsPerDay,
   helpPage: () => generalTopic(['interval']),
   records,
+  permissions: everythingAllowed,
   ...more,
 });

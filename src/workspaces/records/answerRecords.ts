@@ -4,15 +4,15 @@ import type { AgainQuestion, RecordQuestion, RecordsQuestion } from '../../quest
 import type { InstantMs } from '../../terms/clock.ts';
 import type { Day } from '../../terms/day.ts';
 import { type Result, succeed } from '../../terms/result.ts';
+import type { Asker } from '../permissions.ts';
 import { againOne, againTwo, type Recomputing } from './again.ts';
-import type { RecordStore } from './ports.ts';
-import { examine, type Reader, readLines, readRecord } from './reading.ts';
+import { examine, type Reading, readLines, readRecord } from './reading.ts';
 
-export type AnsweringRecords = Recomputing & {
-  readonly store: RecordStore;
-  /** The instant at which a day begins where the desk is. */
-  readonly dayStartMs: (day: Day) => InstantMs;
-};
+export type AnsweringRecords = Recomputing &
+  Reading & {
+    /** The instant at which a day begins where the desk is. */
+    readonly dayStartMs: (day: Day) => InstantMs;
+  };
 
 /** So many lines are counted; the reply lists far fewer. */
 const mostCounted = 1000;
@@ -20,26 +20,27 @@ const mostCounted = 1000;
 const answerAgain = async (
   answering: AnsweringRecords,
   { ids: [firstId, secondId] }: AgainQuestion,
-  reader: Reader,
+  reader: Asker,
 ): Promise<Result<Reply>> => {
-  const first = await readRecord(answering.store, reader, firstId);
+  const first = await readRecord(answering, reader, firstId);
   if (!first.ok) return first;
   if (secondId === undefined) return againOne(answering, first.value);
-  const second = await readRecord(answering.store, reader, secondId);
+  const second = await readRecord(answering, reader, secondId);
   return second.ok ? againTwo(first.value, second.value) : second;
 };
 
 const answerRecords = async (
-  { store, dayStartMs, timeZone }: AnsweringRecords,
+  answering: AnsweringRecords,
   { ticker, since, verify }: RecordsQuestion,
-  reader: Reader,
+  reader: Asker,
 ): Promise<Result<Reply>> => {
+  const { store, dayStartMs, timeZone } = answering;
   if (verify) {
     const found = await examine(store);
     return found.ok ? succeed(examinationReply(found.value)) : found;
   }
   const sinceMs = since === null ? null : dayStartMs(since);
-  const lines = await readLines(store, reader, { ticker, sinceMs }, mostCounted);
+  const lines = await readLines(answering, reader, { ticker, sinceMs }, mostCounted);
   if (!lines.ok) return lines;
   const atLeast = lines.value.length === mostCounted;
   return succeed(recordsReply(lines.value, { ticker, since, atLeast }, timeZone));
@@ -49,7 +50,7 @@ const answerRecords = async (
 export const answerOfRecords = (
   answering: AnsweringRecords,
   question: RecordQuestion,
-  reader: Reader,
+  reader: Asker,
 ): Promise<Result<Reply>> =>
   question.verb === 'again'
     ? answerAgain(answering, question, reader)

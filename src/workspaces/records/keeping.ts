@@ -7,9 +7,9 @@ import type { StatisticalQuestion } from '../../questions/question.ts';
 import type { InstantMs } from '../../terms/clock.ts';
 import type { RecordedAnswer } from '../../terms/records.ts';
 import { type Result, succeed } from '../../terms/result.ts';
+import type { Asker } from '../permissions.ts';
 import { toRecord } from './body.ts';
 import type { DeskRecords, RecordStore } from './ports.ts';
-import type { Reader } from './reading.ts';
 
 /** An answer that was just worked out, and how it is shown. */
 export type Given = {
@@ -17,7 +17,7 @@ export type Given = {
   readonly question: StatisticalQuestion;
   readonly answers: Answers;
   readonly replyTo: (answers: Answers) => Reply;
-  readonly asking: Reader & { readonly words: string; readonly askedAtMs: InstantMs };
+  readonly asking: Asker & { readonly words: string; readonly askedAtMs: InstantMs };
 };
 
 export type Kept = { readonly answers: Answers; readonly reply: Reply };
