@@ -1,97 +1,11 @@
-import { type Kysely, type SchemaModule, sql } from 'kysely';
-import type { Tables } from './database.ts';
-import { emptyHead } from './internal/chain.ts';
-
-/** The few types whose names differ between databases. */
-export type ColumnTypes = { readonly bytes: 'blob' | 'bytea' };
-
-type Migration = (db: Kysely<Tables>, types: ColumnTypes) => Promise<void>;
-
-const priceColumns = (schema: SchemaModule, { bytes }: ColumnTypes) =>
-  schema
-    .createTable('price_columns')
-    .addColumn('digest', 'text', (column) => column.primaryKey())
-    .addColumn('ticker', 'text', (column) => column.notNull())
-    .addColumn('price_count', 'integer', (column) => column.notNull())
-    .addColumn('packed', sql.raw(bytes), (column) => column.notNull())
-    .execute();
-
-const answers = async (schema: SchemaModule) => {
-  const columns = ['content', 'verb', 'question', 'as_of', 'method_version', 'body'] as const;
-  const table = schema
-    .createTable('answers')
-    .addColumn('id', 'text', (column) => column.primaryKey())
-    .addColumn('number', 'integer', (column) => column.notNull().unique());
-  await columns
-    .reduce((made, name) => made.addColumn(name, 'text', (column) => column.notNull()), table)
-    .execute();
-  await schema
-    .createTable('answer_ids')
-    .addColumn('id', 'text', (column) => column.primaryKey())
-    .addColumn('answer_id', 'text', (column) => column.notNull().references('answers.id'))
-    .addColumn('place', 'integer', (column) => column.notNull())
-    .execute();
-  await schema
-    .createTable('answer_series')
-    .addColumn('answer_id', 'text', (column) => column.notNull().references('answers.id'))
-    .addColumn('place', 'integer', (column) => column.notNull())
-    .addColumn('ticker', 'text', (column) => column.notNull())
-    .addColumn('prices', 'text', (column) => column.notNull().references('price_columns.digest'))
-    .addColumn('about', 'text', (column) => column.notNull())
-    .addPrimaryKeyConstraint('answer_series_key', ['answer_id', 'place'])
-    .execute();
-};
-
-const askings = async (schema: SchemaModule) => {
-  const from = ['team', 'channel', 'person', 'message', 'thread'] as const;
-  const said = ['words', 'reply_text', 'bot_version', 'node_version', 'settings_hash'] as const;
-  const table = schema
-    .createTable('askings')
-    .addColumn('number', 'integer', (column) => column.primaryKey())
-    .addColumn('answer_id', 'text', (column) => column.notNull().references('answers.id'))
-    .addColumn('asked_at_ms', 'bigint', (column) => column.notNull())
-    .addColumn('place', 'text', (column) => column.notNull());
-  const withFrom = from.reduce((made, name) => made.addColumn(name, 'text'), table);
-  await said
-    .reduce((made, name) => made.addColumn(name, 'text', (column) => column.notNull()), withFrom)
-    .execute();
-};
-
-const chain = async (schema: SchemaModule) => {
-  const texts = ['kind', 'subject', 'digest', 'previous', 'hash'] as const;
-  const table = schema.createTable('chain').addColumn('number', 'integer', (column) => column.primaryKey());
-  await texts
-    .reduce((made, name) => made.addColumn(name, 'text', (column) => column.notNull()), table)
-    .execute();
-  await schema
-    .createTable('chain_head')
-    .addColumn('name', 'text', (column) => column.primaryKey())
-    .addColumn('length', 'integer', (column) => column.notNull())
-    .addColumn('hash', 'text', (column) => column.notNull())
-    .execute();
-};
-
-const lookUps = async (schema: SchemaModule) => {
-  await schema.createIndex('askings_by_instant').on('askings').column('asked_at_ms').execute();
-  await schema.createIndex('askings_by_answer').on('askings').column('answer_id').execute();
-  await schema.createIndex('answer_ids_by_answer').on('answer_ids').column('answer_id').execute();
-  await schema.createIndex('answer_series_by_ticker').on('answer_series').column('ticker').execute();
-  await schema.createIndex('answer_series_by_prices').on('answer_series').column('prices').execute();
-};
-
-const answersOnRecord: Migration = async (db, types) => {
-  await priceColumns(db.schema, types);
-  await answers(db.schema);
-  await askings(db.schema);
-  await chain(db.schema);
-  await lookUps(db.schema);
-  await db.insertInto('chain_head').values({ name: 'head', length: 0, hash: emptyHead }).execute();
-};
+import type { Database } from './connection.ts';
+import { answersOnRecord } from './migrations/1-answers.ts';
+import type { ColumnTypes, Migration } from './migrations/migration.ts';
 
 /** In the order in which they are made; a migration that was ever released is never changed. */
 export const migrations: readonly Migration[] = [answersOnRecord];
 
-const versionOf = async (db: Kysely<Tables>): Promise<number> => {
+const versionOf = async (db: Database): Promise<number> => {
   await db.schema
     .createTable('schema_versions')
     .ifNotExists()
@@ -107,11 +21,21 @@ const versionOf = async (db: Kysely<Tables>): Promise<number> => {
 /** A store that a newer version of the program has made over. */
 export class StoreTooNew extends Error {}
 
+/** Notes a version first, which makes other starts wait; whether it was this start that noted it. */
+const claimed = async (change: Database, version: number): Promise<boolean> => {
+  const { numInsertedOrUpdatedRows } = await change
+    .insertInto('schema_versions')
+    .values({ version })
+    .onConflict((conflict) => conflict.column('version').doNothing())
+    .executeTakeFirstOrThrow();
+  return numInsertedOrUpdatedRows === 1n;
+};
+
 /**
  * Brings the tables to this version of the program. Each migration and the note that it was made are one transaction:
- * whatever interrupts them, the next start goes on where the last one ended.
+ * whatever interrupts them, the next start goes on where the last one ended, and of several starts at once one makes it.
  */
-export const migrate = async (db: Kysely<Tables>, types: ColumnTypes): Promise<void> => {
+export const migrate = async (db: Database, types: ColumnTypes): Promise<void> => {
   const made = await versionOf(db);
   if (made > migrations.length)
     throw new StoreTooNew(
@@ -120,11 +44,7 @@ export const migrate = async (db: Kysely<Tables>, types: ColumnTypes): Promise<v
   for (const [index, migration] of migrations.entries()) {
     if (index < made) continue;
     await db.transaction().execute(async (change) => {
-      await migration(change, types);
-      await change
-        .insertInto('schema_versions')
-        .values({ version: index + 1 })
-        .execute();
+      if (await claimed(change, index + 1)) await migration(change, types);
     });
   }
 };

@@ -3,9 +3,10 @@ import { dirname } from 'node:path';
 import Database from 'better-sqlite3';
 import { Kysely, SqliteDialect } from 'kysely';
 import { type Result, refuse, succeed } from '../terms/result.ts';
+import { type Connection, storeProblem } from './connection.ts';
 import type { Tables } from './database.ts';
 import { migrate } from './migrations.ts';
-import { makeStore, type Store, storeProblem } from './store.ts';
+import { makeStore, type Store } from './store.ts';
 
 /** The driver waits on this thread, so a store locked by another process must not hold answers up for long. */
 const lockWaitMs = 250;
@@ -33,8 +34,8 @@ const copyTo = async (database: Database.Database, path: string): Promise<void> 
   renameSync(unfinished, path);
 };
 
-/** Opens the store in an SQLite file, which is made where there is none, or `null`: in memory. */
-export const openSqlite = async (path: string | null): Promise<Result<Store>> => {
+/** Opens an SQLite file, which is made where there is none, or `null`: a database in memory. */
+export const connectSqlite = async (path: string | null): Promise<Result<Connection>> => {
   let database: Database.Database | null = null;
   try {
     if (path !== null) makeFile(path);
@@ -43,9 +44,15 @@ export const openSqlite = async (path: string | null): Promise<Result<Store>> =>
     prepare(opened);
     const db = new Kysely<Tables>({ dialect: new SqliteDialect({ database: opened }) });
     await migrate(db, { bytes: 'blob' });
-    return succeed(makeStore(db, (to) => copyTo(opened, to)));
+    return succeed({ db, copyTo: (to) => copyTo(opened, to), close: () => db.destroy() });
   } catch (error) {
     database?.close();
     return refuse(storeProblem(error));
   }
+};
+
+/** The store in an SQLite file, or in memory. */
+export const openSqlite = async (path: string | null): Promise<Result<Store>> => {
+  const connected = await connectSqlite(path);
+  return connected.ok ? succeed(makeStore(connected.value)) : connected;
 };

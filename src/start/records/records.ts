@@ -3,7 +3,7 @@ import { existsSync, readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { Settings } from '../../config/schema.ts';
-import { openSqlite } from '../../records/openSqlite.ts';
+import { connectSqlite } from '../../records/openSqlite.ts';
 import type { Clock } from '../../terms/clock.ts';
 import type { Versions } from '../../terms/records.ts';
 import { type Reopening, reopening } from './reopening.ts';
@@ -14,13 +14,13 @@ export const recordsPath = ({ records }: Settings): string => resolve(project, r
 
 /** The records of a desk, made where there are none. */
 export const recordsToKeep = (settings: Settings): Reopening =>
-  reopening(() => openSqlite(recordsPath(settings)));
+  reopening(() => connectSqlite(recordsPath(settings)));
 
 /** The records of a desk for a command that only reads: where there are none, none are made. */
 export const recordsToRead = (settings: Settings): Reopening =>
   reopening(() => {
     const path = recordsPath(settings);
-    return openSqlite(existsSync(path) ? path : null);
+    return connectSqlite(existsSync(path) ? path : null);
   });
 
 /** What answers here, as it is kept with every answer. */

@@ -1,4 +1,5 @@
-import type { Store } from '../../records/store.ts';
+import { accessTo, type Connection, type Run } from '../../records/connection.ts';
+import { copied, type Store, storeParts } from '../../records/store.ts';
 import type { Problem } from '../../terms/problem.ts';
 import type { Result } from '../../terms/result.ts';
 
@@ -7,39 +8,54 @@ export type Reopening = Store & {
   readonly trouble: () => Problem | null;
 };
 
+type Kind = 'read' | 'write';
+
+/** What went wrong last with reading and with writing. A store that was written can be read too. */
+const troubles = () => {
+  const found: Record<Kind, Problem | null> = { read: null, write: null };
+  return {
+    note: (kind: Kind, outcome: Result<unknown>): void => {
+      found[kind] = outcome.ok ? null : outcome.problem;
+      if (kind === 'write' && outcome.ok) found.read = null;
+    },
+    last: () => found.write ?? found.read,
+  };
+};
+
 /** A store that is opened when it is first used, and tried anew at each use for as long as it cannot be opened. */
-export const reopening = (open: () => Promise<Result<Store>>): Reopening => {
-  let opened: Promise<Result<Store>> | null = null;
-  let trouble: Problem | null = null;
+export const reopening = (connect: () => Promise<Result<Connection>>): Reopening => {
+  let opened: Promise<Result<Connection>> | null = null;
+  const trouble = troubles();
 
-  const ready = async (): Promise<Result<Store>> => {
-    opened ??= open();
-    const store = await opened;
-    if (!store.ok) opened = null;
-    return store;
+  const ready = async (): Promise<Result<Connection>> => {
+    const trying = opened ?? connect();
+    opened = trying;
+    const connection = await trying;
+    // another use may have begun to try anew meanwhile
+    if (!connection.ok && opened === trying) opened = null;
+    return connection;
   };
 
-  const using = async <T>(run: (store: Store) => Promise<Result<T>>): Promise<Result<T>> => {
-    const store = await ready();
-    const outcome = store.ok ? await run(store.value) : store;
-    trouble = outcome.ok ? null : outcome.problem;
-    return outcome;
-  };
+  const using =
+    (kind: Kind): Run =>
+    async (work) => {
+      const connection = await ready();
+      const outcome = connection.ok ? await accessTo(connection.value)[kind](work) : connection;
+      trouble.note(kind, outcome);
+      return outcome;
+    };
 
   return {
-    contentOf: (id) => using((store) => store.contentOf(id)),
-    keep: (answer, asking) => using((store) => store.keep(answer, asking)),
-    find: (id) => using((store) => store.find(id)),
-    list: (filter, most) => using((store) => store.list(filter, most)),
-    page: (filter, afterNumber, most) => using((store) => store.page(filter, afterNumber, most)),
-    verify: () => using((store) => store.verify()),
-    forgetBefore: (beforeMs) => using((store) => store.forgetBefore(beforeMs)),
-    backUp: (path) => using((store) => store.backUp(path)),
-    close: async () => {
-      const store = opened === null ? null : await opened;
-      opened = null;
-      if (store?.ok === true) await store.value.close();
+    ...storeParts({ read: using('read'), write: using('write') }),
+    backUp: async (path) => {
+      const connection = await ready();
+      return connection.ok ? copied(connection.value, path) : connection;
     },
-    trouble: () => trouble,
+    close: async () => {
+      const connection = opened === null ? null : await opened;
+      opened = null;
+      if (connection?.ok === true) await connection.value.close();
+    },
+    trouble: trouble.last,
   };
 };

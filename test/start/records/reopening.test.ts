@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { openSqlite } from '../../../src/records/openSqlite.ts';
-import type { Store } from '../../../src/records/store.ts';
+import type { Connection } from '../../../src/records/connection.ts';
+import { connectSqlite } from '../../../src/records/openSqlite.ts';
 import { keepTidy } from '../../../src/start/records/records.ts';
 import { reopening } from '../../../src/start/records/reopening.ts';
 import { problem } from '../../../src/terms/problem.ts';
@@ -14,9 +14,9 @@ const locked = refuse(problem('storeUnavailable', 'The file is locked.'));
 /** Opens a store in memory after so many failures, and counts how often it was tried. */
 const openingAfter = (failures: number) => {
   let tried = 0;
-  const open = async (): Promise<Result<Store>> => {
+  const open = async (): Promise<Result<Connection>> => {
     tried += 1;
-    return tried <= failures ? locked : openSqlite(null);
+    return tried <= failures ? locked : connectSqlite(null);
   };
   return { open, tried: () => tried };
 };
