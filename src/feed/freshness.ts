@@ -1,6 +1,7 @@
 import type { InstantMs } from '../terms/clock.ts';
-import { type Day, dateParts, dayFromDate, isWeekday } from '../terms/day.ts';
+import { type Day, dateParts, isWeekday } from '../terms/day.ts';
 import type { Freshness } from '../terms/feedReport.ts';
+import { localTimeAt } from '../terms/zonedTime.ts';
 import type { Holidays } from './sessions.ts';
 
 /** What the lateness of one group of tickers hangs on. `closingTime` is written like `17:30 Europe/London`. */
@@ -12,30 +13,12 @@ export type FreshnessAsked = {
   readonly nowMs: InstantMs;
 };
 
-type LocalTime = { readonly day: Day; readonly minutes: number };
-
-const localTime = (nowMs: InstantMs, timeZone: string): LocalTime => {
-  const parts = new Intl.DateTimeFormat('en-GB', {
-    timeZone,
-    hourCycle: 'h23',
-    year: 'numeric',
-    month: 'numeric',
-    day: 'numeric',
-    hour: 'numeric',
-    minute: 'numeric',
-  }).formatToParts(nowMs);
-  const part = (type: string): number => Number(parts.find((one) => one.type === type)?.value);
-  const day = dayFromDate(part('year'), part('month'), part('day'));
-  if (day === null) throw new Error('the calendar gave a date that does not exist');
-  return { day, minutes: part('hour') * 60 + part('minute') };
-};
-
 /** The last day that is closed for business at a time and place. */
 const lastClosedDay = (nowMs: InstantMs, closingTime: string | null): Day => {
   const [clock = '', zone = ''] = closingTime?.split(' ') ?? [];
   if (zone === '') return Number.POSITIVE_INFINITY;
   const [hours = 0, minutes = 0] = clock.split(':').map(Number);
-  const local = localTime(nowMs, zone);
+  const local = localTimeAt(nowMs, zone);
   return local.minutes >= hours * 60 + minutes ? local.day : local.day - 1;
 };
 
@@ -50,7 +33,7 @@ export const freshnessOf = ({
   deskTimeZone,
   nowMs,
 }: FreshnessAsked): Freshness => {
-  const dueUpTo = Math.min(localTime(nowMs, deskTimeZone).day - 1, lastClosedDay(nowMs, closingTime));
+  const dueUpTo = Math.min(localTimeAt(nowMs, deskTimeZone).day - 1, lastClosedDay(nowMs, closingTime));
   const years = new Set([...(holidays ?? [])].map((day) => dateParts(day).year));
   const isSession = (day: Day): boolean => isWeekday(day) && holidays?.has(day) !== true;
   let expectedDay = dueUpTo;
