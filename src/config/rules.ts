@@ -1,3 +1,5 @@
+import { nearestWord } from '../terms/nearest.ts';
+import { confinableVerbs, directMessages } from './permissionsSchema.ts';
 import type { Settings } from './schema.ts';
 
 /** Something wrong between settings that are each right alone. */
@@ -62,9 +64,47 @@ const decimalMarkIsNotDelimiter: Rule = ({ feed: { format } }) =>
       ]
     : [];
 
+const confinedVerbsExist: Rule = ({ permissions }) =>
+  Object.entries(permissions.verbs).flatMap(([verb, places]) => {
+    if (confinableVerbs.some((known) => known === verb)) return [];
+    const nearest = nearestWord(verb, confinableVerbs);
+    const advice =
+      nearest === null ? `the verbs are ${confinableVerbs.join(', ')}` : `${nearest} comes nearest`;
+    return [
+      {
+        path: `permissions.verbs.${verb}`,
+        value: places.join(', ') || 'empty',
+        message: `it is no verb; ${advice}`,
+      },
+    ];
+  });
+
+/** A channel that is named further down but denied further up would look open and stay shut. */
+const namedChannelsAreOpen: Rule = ({ permissions: { channels, sharedChannels, verbs } }) => {
+  if (channels.length === 0) return [];
+  const named = [
+    ...sharedChannels.map((channel) => ({ path: 'permissions.sharedChannels', channel })),
+    ...Object.entries(verbs).flatMap(([verb, places]) =>
+      places.map((channel) => ({ path: `permissions.verbs.${verb}`, channel })),
+    ),
+  ];
+  return named
+    .filter(({ channel }) => !channels.includes(channel))
+    .map(({ path, channel }) => {
+      const what = channel === directMessages ? 'direct messages are' : 'that channel is';
+      return {
+        path,
+        value: channel,
+        message: `${what} not among permissions.channels, where it has to stand too`,
+      };
+    });
+};
+
 export const rules: readonly Rule[] = [
   columnNamesDiffer,
   quoteUnitNeedsCurrency,
   wideHasNoOtherColumns,
   decimalMarkIsNotDelimiter,
+  confinedVerbsExist,
+  namedChannelsAreOpen,
 ];

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { feed } from './feedSchema.ts';
 import { described } from './internal/described.ts';
 import { decimalSize, defaultWindow, ianaZone, levelOfAtLeastHalf, probability } from './kinds.ts';
+import { permissions } from './permissionsSchema.ts';
 
 const window = (fallback: string) =>
   described({
@@ -121,6 +122,7 @@ export const settingsSchema = z.strictObject({
   }).default('auto'),
   slack: slack.prefault({}),
   records: records.prefault({}),
+  permissions: permissions.prefault({}),
 });
 
 /** Settings as a person writes them: most keys may be left out. */

@@ -51,11 +51,19 @@ const unknownKey = (help: readonly SettingHelp[], parent: Path, key: string, wri
   };
 };
 
+/** What would be right at a path, or at the nearest setting above it: an element of a list has no help of its own. */
+const expectedAt = (help: readonly SettingHelp[], path: Path): string | null => {
+  for (let length = path.length; length > 0; length -= 1) {
+    const found = help.find((one) => one.path === helpPath(path.slice(0, length)));
+    if (found !== undefined) return found.expects;
+  }
+  return null;
+};
+
 const wrongValue = (help: readonly SettingHelp[], path: Path, written: unknown): Breach => {
   const name = path.join('.') || 'the file';
   const value = shown(valueAt(written, path));
-  const expects = help.find((one) => one.path === helpPath(path))?.expects;
-  const right = expects ?? `a block with ${childrenOf(help, helpPath(path)).join(', ')}`;
+  const right = expectedAt(help, path) ?? `a block with ${childrenOf(help, helpPath(path)).join(', ')}`;
   const message =
     value === null ? `${name} is missing; it must be ${right}.` : `${name} is ${value}; it must be ${right}.`;
   return { path: path.join('.'), value, message };
