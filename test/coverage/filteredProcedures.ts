@@ -1,4 +1,5 @@
 import type { CoverageProcess } from '../../src/stats/coverage/cell.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../src/stats/losses/studentMultiplier.ts';
 import { filteredKinds } from '../../src/stats/tails/filtered/filteredKinds.ts';
 import {
   type FilterSource,
@@ -7,7 +8,6 @@ import {
 } from '../../src/stats/tails/filtered/internal/filterSource.ts';
 import { resampledFigures } from '../../src/stats/tails/filtered/internal/resampledFigures.ts';
 import { refuseTooFewForLevel } from '../../src/stats/tails/historicalTail.ts';
-import { quantileMultiplier, shortfallMultiplier } from '../../src/stats/tails/internal/tailMultiplier.ts';
 import { type Level, tailFraction } from '../../src/terms/level.ts';
 import type { Random } from '../../src/terms/random.ts';
 import { level } from '../stats/levels.ts';

@@ -9,10 +9,10 @@ import {
 } from '../../terms/level.ts';
 import { problem } from '../../terms/problem.ts';
 import { type Refusal, type Result, refuse, succeed } from '../../terms/result.ts';
+import { lossesAscending, meanBeyond } from '../losses/losses.ts';
 import { orderStatistic } from '../numerics/quantile.ts';
 import { refuseStill } from '../returns/leastCounts.ts';
 import { historicalEsInterval } from './internal/historicalEsInterval.ts';
-import { lossesAscending, meanBeyond } from './internal/losses.ts';
 import { boundingRanks, countThatBoundsAbove, countThatBoundsBelow } from './internal/rankInterval.ts';
 import type { Interval, TailFigures, TailInput, TailNote } from './tailFigures.ts';
 

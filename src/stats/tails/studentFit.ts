@@ -1,10 +1,10 @@
 import { problem } from '../../terms/problem.ts';
 import { type Refusal, type Result, refuse, succeed } from '../../terms/result.ts';
+import { type StandardSample, standardise } from '../moments/standardSample.ts';
 import type { NewtonMaximum } from '../numerics/boundedNewton.ts';
 import { maximiseByNewton } from '../numerics/boundedNewton.ts';
 import { leastCounts, refuseUnusable } from '../returns/leastCounts.ts';
-import { mostFrequentValue } from './internal/mostFrequentValue.ts';
-import { type StandardSample, standardise } from './internal/standardSample.ts';
+import { mostFrequentValue } from '../returns/mostFrequentValue.ts';
 import { type StudentLikelihood, studentLikelihood } from './internal/studentLikelihood.ts';
 import { isHigherElsewhere, studentMaxima, studentSettings } from './internal/studentMaxima.ts';
 

@@ -1,9 +1,9 @@
 import { tailFraction } from '../../terms/level.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import { chiSquareUpperQuantile } from '../distributions/chiSquare.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../losses/studentMultiplier.ts';
 import type { ProfileEnd } from './internal/profileEnd.ts';
 import { esEnds, inverseNuEnds, varEnds } from './internal/studentProfiles.ts';
-import { quantileMultiplier, shortfallMultiplier } from './internal/tailMultiplier.ts';
 import { maximiseStudent, type StudentMaximum, type StudentParameters } from './studentFit.ts';
 import { fitNotes, lowestNu, notFoundNote, nuIntervalOf } from './studentNu.ts';
 import type { Interval, TailFigures, TailInput, TailNote } from './tailFigures.ts';

@@ -1,7 +1,7 @@
 import { type Result, succeed } from '../../terms/result.ts';
+import { type StandardSample, standardise } from '../moments/standardSample.ts';
 import type { NewtonMaximum } from '../numerics/boundedNewton.ts';
 import { leastCounts, refuseUnusable } from '../returns/leastCounts.ts';
-import { type StandardSample, standardise } from '../tails/internal/standardSample.ts';
 import type { GarchProcess } from './garchPath.ts';
 import { parameter } from './internal/garchLikelihood.ts';
 import { noClustering, refuseMaximum } from './internal/garchOutcome.ts';

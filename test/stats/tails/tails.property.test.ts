@@ -1,8 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { quantileMultiplier, shortfallMultiplier } from '../../../src/stats/losses/studentMultiplier.ts';
 import { nextStudentT } from '../../../src/stats/random/studentDraw.ts';
 import { historicalTail } from '../../../src/stats/tails/historicalTail.ts';
-import { quantileMultiplier, shortfallMultiplier } from '../../../src/stats/tails/internal/tailMultiplier.ts';
 import { normalTail } from '../../../src/stats/tails/normalTail.ts';
 import { studentTail } from '../../../src/stats/tails/studentTail.ts';
 import type {

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
+import { standardise } from '../../../src/stats/moments/standardSample.ts';
 import { simpleReturns } from '../../../src/stats/returns/returns.ts';
-import { standardise } from '../../../src/stats/tails/internal/standardSample.ts';
 import { fitGarch, type GarchFit, processOf } from '../../../src/stats/volatility/garch.ts';
 import { filterByGarch } from '../../../src/stats/volatility/garchPath.ts';
 import { searchGarch } from '../../../src/stats/volatility/internal/garchSearch.ts';

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { maximiseByNewton } from '../../../src/stats/numerics/boundedNewton.ts';
-import { standardise } from '../../../src/stats/tails/internal/standardSample.ts';
+import { standardise } from '../../../src/stats/moments/standardSample.ts';
 import { differentiateGarch } from '../../../src/stats/volatility/internal/garchDerivatives.ts';
 import { parameter } from '../../../src/stats/volatility/internal/garchLikelihood.ts';
 import { pointOf, searchGarch } from '../../../src/stats/volatility/internal/garchSearch.ts';

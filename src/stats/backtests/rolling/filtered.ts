@@ -1,10 +1,10 @@
 import { ceilingOfCount, expectedBeyond } from '../../../terms/level.ts';
 import type { Problem } from '../../../terms/problem.ts';
 import { type Result, succeed } from '../../../terms/result.ts';
+import { lossesAscending, meanBeyond } from '../../losses/losses.ts';
 import { refuseStill } from '../../returns/leastCounts.ts';
 import { filteredKinds } from '../../tails/filtered/filteredKinds.ts';
 import { refuseTooFewForLevel } from '../../tails/historicalTail.ts';
-import { lossesAscending, meanBeyond } from '../../tails/internal/losses.ts';
 import { filterByEwma } from '../../volatility/ewma.ts';
 import { fitGarch, type GarchFit, processOf } from '../../volatility/garch.ts';
 import { type FilteredReturns, filterByGarch } from '../../volatility/garchPath.ts';

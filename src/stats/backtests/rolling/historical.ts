@@ -1,8 +1,8 @@
 import { ceilingOfCount, expectedBeyond } from '../../../terms/level.ts';
 import { succeed } from '../../../terms/result.ts';
+import { meanBeyond } from '../../losses/losses.ts';
 import { refuseStill } from '../../returns/leastCounts.ts';
 import { refuseTooFewForLevel } from '../../tails/historicalTail.ts';
-import { meanBeyond } from '../../tails/internal/losses.ts';
 import { createKeptTails } from './keptTails.ts';
 import { estimationWindow, type StartForecaster } from './rollingForecaster.ts';
 import { createSortedLosses } from './sortedLosses.ts';

@@ -1,8 +1,8 @@
 import { tailFraction } from '../../../terms/level.ts';
 import { succeed } from '../../../terms/result.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../losses/studentMultiplier.ts';
 import { summariseReturns } from '../../moments/summary.ts';
 import { leastCounts, refuseTooFew } from '../../returns/leastCounts.ts';
-import { quantileMultiplier, shortfallMultiplier } from '../../tails/internal/tailMultiplier.ts';
 import { estimationWindow, type StartForecaster } from './rollingForecaster.ts';
 import { drawStudentBeyond } from './studentTail.ts';
 

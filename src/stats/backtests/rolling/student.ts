@@ -1,7 +1,7 @@
 import { tailFraction } from '../../../terms/level.ts';
 import { succeed } from '../../../terms/result.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../losses/studentMultiplier.ts';
 import { leastCounts, refuseTooFew } from '../../returns/leastCounts.ts';
-import { quantileMultiplier, shortfallMultiplier } from '../../tails/internal/tailMultiplier.ts';
 import { fitStudent, type StudentParameters } from '../../tails/studentFit.ts';
 import { estimationWindow, type StartForecaster } from './rollingForecaster.ts';
 import { drawStudentBeyond } from './studentTail.ts';

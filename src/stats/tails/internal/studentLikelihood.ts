@@ -1,5 +1,6 @@
+import { fillStudentNormaliser } from '../../distributions/studentNormaliser.ts';
 import type { SmoothObjective } from '../../numerics/boundedNewton.ts';
-import { fillStudentNormaliser, type StudentNormaliser } from './studentNormaliser.ts';
+import type { SmoothValue } from '../../numerics/smoothValue.ts';
 import { fillTailSeries, type TailSeries } from './studentTailSeries.ts';
 
 /** Largest product kept before its logarithm is taken: one further factor must not overflow. */
@@ -120,7 +121,7 @@ const fillGradient = (
   inverseNu: number,
   sums: StudentSums,
   tail: TailSeries,
-  normaliser: StudentNormaliser,
+  normaliser: SmoothValue,
   gradient: Float64Array,
 ): void => {
   const weight = 1 + inverseNu;
@@ -135,7 +136,7 @@ const fillHessian = (
   inverseNu: number,
   sums: StudentSums,
   tail: TailSeries,
-  normaliser: StudentNormaliser,
+  normaliser: SmoothValue,
   hessian: Float64Array,
 ): void => {
   const weight = 1 + inverseNu;
@@ -157,7 +158,7 @@ export const studentLikelihood = (values: Float64Array): StudentLikelihood => {
   const count = values.length;
   const sums = emptySums();
   const tail: TailSeries = { square: 0, fourth: 0, sixth: 0 };
-  const normaliser: StudentNormaliser = { value: 0, slope: 0, curvature: 0 };
+  const normaliser: SmoothValue = { value: 0, slope: 0, curvature: 0 };
   const objective: SmoothObjective = (point, gradient, hessian) => {
     const logScale = point[1] as number;
     const inverseNu = point[2] as number;

@@ -1,6 +1,6 @@
+import type { StandardSample } from '../../moments/standardSample.ts';
 import { maximiseByNewton, type NewtonMaximum, type NewtonSettings } from '../../numerics/boundedNewton.ts';
 import { climbAtFixedNu, type ProfilePoint } from './fixedNu.ts';
-import type { StandardSample } from './standardSample.ts';
 import type { StudentLikelihood } from './studentLikelihood.ts';
 
 /** nu ≥ 0.5, the range in which the model is fitted. */

@@ -1,11 +1,11 @@
 import { studentTDensity } from '../../distributions/studentT.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../losses/studentMultiplier.ts';
 import type { StudentMaximum } from '../studentFit.ts';
 import { type ConstrainedPoint, maximiseUnder } from './constrainedStudent.ts';
 import { climbAtFixedNu } from './fixedNu.ts';
 import { findProfileEnd, type ProfileAt, type ProfileEnd } from './profileEnd.ts';
 import { largestInverseNu } from './studentMaxima.ts';
 import { esCoordinates, type StudentPlace, type TailCoordinates, varCoordinates } from './tailCoordinates.ts';
-import { quantileMultiplier, shortfallMultiplier } from './tailMultiplier.ts';
 
 /** Both ends of a profile-likelihood interval as the searches left them. */
 export type ProfileEnds = { readonly lower: ProfileEnd; readonly upper: ProfileEnd };

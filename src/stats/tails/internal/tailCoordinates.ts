@@ -1,11 +1,10 @@
-import { largestInverseNu } from './studentMaxima.ts';
 import {
-  fillByDifferences,
   quantileMultiplier,
-  type SmoothValue,
   shortfallMultiplier,
   shortfallNumerator,
-} from './tailMultiplier.ts';
+} from '../../losses/studentMultiplier.ts';
+import { fillByDifferences, type SmoothValue } from '../../numerics/smoothValue.ts';
+import { largestInverseNu } from './studentMaxima.ts';
 
 /** A place among the Student distributions, in standard units. */
 export type StudentPlace = {

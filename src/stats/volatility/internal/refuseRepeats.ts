@@ -1,6 +1,6 @@
 import { problem } from '../../../terms/problem.ts';
 import { type Refusal, refuse } from '../../../terms/result.ts';
-import { mostFrequentValue } from '../../tails/internal/mostFrequentValue.ts';
+import { mostFrequentValue } from '../../returns/mostFrequentValue.ts';
 
 /**
  * The refusal for returns among which one value is so frequent that the likelihood has no highest point, or null.

@@ -9,11 +9,8 @@ import type {
   StartForecaster,
 } from '../../../../src/stats/backtests/rolling/rollingForecaster.ts';
 import { startStudent } from '../../../../src/stats/backtests/rolling/student.ts';
-import { lossesAscending, meanBeyond } from '../../../../src/stats/tails/internal/losses.ts';
-import {
-  quantileMultiplier,
-  shortfallMultiplier,
-} from '../../../../src/stats/tails/internal/tailMultiplier.ts';
+import { lossesAscending, meanBeyond } from '../../../../src/stats/losses/losses.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../../../src/stats/losses/studentMultiplier.ts';
 import { fitStudent } from '../../../../src/stats/tails/studentFit.ts';
 import { filterByEwma } from '../../../../src/stats/volatility/ewma.ts';
 import { fitGarch, processOf } from '../../../../src/stats/volatility/garch.ts';

@@ -1,11 +1,9 @@
 import { describe, expect, it } from 'vitest';
+import { fillStudentNormaliser } from '../../../../src/stats/distributions/studentNormaliser.ts';
+import type { SmoothValue } from '../../../../src/stats/numerics/smoothValue.ts';
 import { nextStudentT } from '../../../../src/stats/random/studentDraw.ts';
 import { climbAtFixedNu } from '../../../../src/stats/tails/internal/fixedNu.ts';
 import { studentLikelihood } from '../../../../src/stats/tails/internal/studentLikelihood.ts';
-import {
-  fillStudentNormaliser,
-  type StudentNormaliser,
-} from '../../../../src/stats/tails/internal/studentNormaliser.ts';
 import { relativeError } from '../../../laws/relativeError.ts';
 import { testStreams } from '../../testStreams.ts';
 
@@ -23,7 +21,7 @@ const moved = (point: readonly number[], place: number, by: number) =>
   point.map((value, index) => (index === place ? value + by : value));
 
 describe('The log-density constant in 1/nu', () => {
-  const into: StudentNormaliser = { value: 0, slope: 0, curvature: 0 };
+  const into: SmoothValue = { value: 0, slope: 0, curvature: 0 };
 
   it('has the value and derivatives of mpmath on both sides of the change from series to gammas', () => {
     // mpmath 1.3.0 at 40 digits: lnΓ((nu+1)/2) − lnΓ(nu/2) − ln(nu·π)/2 and mpmath.diff of it in 1/nu

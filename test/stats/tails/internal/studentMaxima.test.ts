@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { standardise } from '../../../../src/stats/moments/standardSample.ts';
 import { nextNormal, nextOpenDouble } from '../../../../src/stats/random/draws.ts';
 import { climbAtFixedNu } from '../../../../src/stats/tails/internal/fixedNu.ts';
-import { standardise } from '../../../../src/stats/tails/internal/standardSample.ts';
 import { studentLikelihood } from '../../../../src/stats/tails/internal/studentLikelihood.ts';
 import { studentMaxima } from '../../../../src/stats/tails/internal/studentMaxima.ts';
 import { testStreams } from '../../testStreams.ts';

@@ -1,13 +1,10 @@
 import { describe, expect, it } from 'vitest';
+import { quantileMultiplier, shortfallMultiplier } from '../../../../src/stats/losses/studentMultiplier.ts';
 import {
   esCoordinates,
   type TailCoordinates,
   varCoordinates,
 } from '../../../../src/stats/tails/internal/tailCoordinates.ts';
-import {
-  quantileMultiplier,
-  shortfallMultiplier,
-} from '../../../../src/stats/tails/internal/tailMultiplier.ts';
 
 const place = (coordinates: TailCoordinates, at: readonly number[]) => {
   const parameters = new Float64Array(3);

@@ -1,6 +1,6 @@
 import { ceilingOfCount, expectedBeyond, type Level } from '../../../../terms/level.ts';
+import { lossesAscending, meanBeyond } from '../../../losses/losses.ts';
 import { orderStatistic } from '../../../numerics/quantile.ts';
-import { lossesAscending, meanBeyond } from '../../internal/losses.ts';
 import type { FilterState } from './filterSource.ts';
 
 /** Losses as positive decimal fractions. */

@@ -1,6 +1,6 @@
 import { ceilingOfCount, expectedBeyond, type Level, levelFraction } from '../../../../terms/level.ts';
+import { meanBeyond } from '../../../losses/losses.ts';
 import { orderStatistic } from '../../../numerics/quantile.ts';
-import { meanBeyond } from '../../internal/losses.ts';
 
 export type SimulatedFigures = { readonly var: number; readonly es: number };
 

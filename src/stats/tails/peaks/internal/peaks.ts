@@ -2,9 +2,9 @@ import type { Level } from '../../../../terms/level.ts';
 import { levelText, tailFraction } from '../../../../terms/level.ts';
 import { problem } from '../../../../terms/problem.ts';
 import { type Refusal, type Result, refuse, succeed } from '../../../../terms/result.ts';
+import { lossesAscending } from '../../../losses/losses.ts';
 import { orderStatistic } from '../../../numerics/quantile.ts';
 import { leastCounts, refuseUnusable } from '../../../returns/leastCounts.ts';
-import { lossesAscending } from '../../internal/losses.ts';
 
 /** The losses beyond the threshold. */
 export type Peaks = {

@@ -1,17 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import {
-  fillByDifferences,
-  quantileMultiplier,
-  type SmoothValue,
-  shortfallMultiplier,
-} from '../../../../src/stats/tails/internal/tailMultiplier.ts';
-import { normalTail } from '../../../../src/stats/tails/normalTail.ts';
-import { levelFromFraction, tailFraction } from '../../../../src/terms/level.ts';
-import { accepted } from '../../../laws/outcomes.ts';
-import { relativeError } from '../../../laws/relativeError.ts';
-import { level, level95 } from '../../levels.ts';
-import { fixtureJson } from '../../readFixture.ts';
-import { testStreams } from '../../testStreams.ts';
+import { quantileMultiplier, shortfallMultiplier } from '../../../src/stats/losses/studentMultiplier.ts';
+import { fillByDifferences, type SmoothValue } from '../../../src/stats/numerics/smoothValue.ts';
+import { normalTail } from '../../../src/stats/tails/normalTail.ts';
+import { levelFromFraction, tailFraction } from '../../../src/terms/level.ts';
+import { accepted } from '../../laws/outcomes.ts';
+import { relativeError } from '../../laws/relativeError.ts';
+import { level, level95 } from '../levels.ts';
+import { fixtureJson } from '../readFixture.ts';
+import { testStreams } from '../testStreams.ts';
 
 type Row = Readonly<Record<string, string | number>>;
 type Quantiles = { readonly cases: readonly { readonly name: string; readonly values: readonly Row[] }[] };

@@ -1,4 +1,5 @@
-import { logGammaDifference } from '../../distributions/gammaFunctions.ts';
+import type { SmoothValue } from '../numerics/smoothValue.ts';
+import { logGammaDifference } from './gammaFunctions.ts';
 
 /** 1/nu below which the series is used; there its last term is under 1e-16. */
 const seriesBelow = 1 / 30;
@@ -20,10 +21,7 @@ const oddPowerCoefficients = [
 
 const halfLogTwoPi = 0.9189385332046727;
 
-/** The logarithm of the constant of the t density and its first two derivatives, all in 1/nu. */
-export type StudentNormaliser = { value: number; slope: number; curvature: number };
-
-const fillFromSeries = (inverseNu: number, into: StudentNormaliser): void => {
+const fillFromSeries = (inverseNu: number, into: SmoothValue): void => {
   const square = inverseNu * inverseNu;
   let value = 0;
   let slope = 0;
@@ -40,7 +38,7 @@ const fillFromSeries = (inverseNu: number, into: StudentNormaliser): void => {
   into.curvature = curvature * inverseNu;
 };
 
-const fillFromGammas = (inverseNu: number, into: StudentNormaliser): void => {
+const fillFromGammas = (inverseNu: number, into: SmoothValue): void => {
   const nu = 1 / inverseNu;
   const gammas = logGammaDifference(nu);
   const slopeInNu = gammas.firstDerivative - 0.5 / nu;
@@ -51,8 +49,9 @@ const fillFromGammas = (inverseNu: number, into: StudentNormaliser): void => {
 };
 
 /**
- * ln of Γ((nu+1)/2) / (Γ(nu/2)·√(nu·π)) as a function of 1/nu, smooth down to the normal limit 1/nu = 0.
+ * ln of Γ((nu+1)/2) / (Γ(nu/2)·√(nu·π)), the constant of the t density, as a function of 1/nu, smooth down to the normal
+ * limit 1/nu = 0.
  * Written into `into`, because a fit asks for it at every step.
  */
-export const fillStudentNormaliser = (inverseNu: number, into: StudentNormaliser): void =>
+export const fillStudentNormaliser = (inverseNu: number, into: SmoothValue): void =>
   inverseNu < seriesBelow ? fillFromSeries(inverseNu, into) : fillFromGammas(inverseNu, into);

@@ -1,5 +1,5 @@
-import { centre } from '../../moments/centre.ts';
-import { sumOfTerms } from '../../moments/sumOfTerms.ts';
+import { centre } from './centre.ts';
+import { sumOfTerms } from './sumOfTerms.ts';
 
 /** Returns brought to mean 0 and second moment 1 (divisor n), so that a fit meets the same numbers in every unit. */
 export type StandardSample = {

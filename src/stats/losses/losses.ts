@@ -1,4 +1,4 @@
-import { compensatedSum } from '../../numerics/sum.ts';
+import { compensatedSum } from '../numerics/sum.ts';
 
 /** Losses −r, ascending; a return of 0 is a loss of 0, not of −0. */
 export const lossesAscending = (returns: Float64Array): Float64Array =>
