@@ -83,13 +83,20 @@ const tableBlock = ({ columns, rows }: Table): Block => ({
   column_settings: columns.map(({ align }) => ({ align, is_wrapped: true })),
 });
 
-const buttonElement = ({ action, label, answerId, question }: Button) => ({
+const buttonElement = ({ label, answerId, question, added }: Button, actionId: string) => ({
   type: 'button' as const,
-  action_id: action,
+  action_id: actionId,
   text: plain(label, longest.buttonText),
-  value: clipped(JSON.stringify({ id: answerId, question }), longest.buttonValue),
-  accessibility_label: clipped(`${label} of answer ${answerId}`, longest.buttonText),
+  value: JSON.stringify({ id: answerId, question, ...(added === undefined ? {} : { added }) }),
+  accessibility_label: clipped(`${label} of ${answerId}`, longest.buttonText),
 });
+
+/** Several buttons of one kind are told apart by what follows a full stop in their action id. */
+const buttonElements = (buttons: readonly Button[]) =>
+  buttons.map((button, index) => {
+    const before = buttons.slice(0, index).filter(({ action }) => action === button.action).length;
+    return buttonElement(button, before === 0 ? button.action : `${button.action}.${before + 1}`);
+  });
 
 /** The top-level text is read as markup by the platform, so whatever could be markup in it is made harmless. */
 export const escapeFallback = (text: string): string =>
@@ -110,6 +117,6 @@ export const toBlocks = (reply: Reply): BlockMessage => {
   if (warnings.length > 0) blocks.push(context(further === null ? warnings : [...warnings, further]));
   if (reply.quietLine !== null) blocks.push(context([reply.quietLine]));
   if (reply.caution !== null) blocks.push(context([reply.caution]));
-  if (reply.buttons.length > 0) blocks.push({ type: 'actions', elements: reply.buttons.map(buttonElement) });
+  if (reply.buttons.length > 0) blocks.push({ type: 'actions', elements: buttonElements(reply.buttons) });
   return { text: clipped(escapeFallback(inWords(reply)), longest.fallbackText), blocks };
 };

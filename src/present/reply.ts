@@ -10,15 +10,30 @@ export type Table = {
 /** A list of steps or of paragraphs under an optional head of its own. */
 export type Passage = { readonly head: string | null; readonly lines: readonly string[] };
 
-/** What pressing a button asks for, about the answer with this id. */
-export type ButtonAction = 'working';
+/** What pressing a button asks for. All are plain words: each does what its name says to the answer or subscription under it. */
+export const buttonActions = [
+  'working',
+  'more',
+  'level',
+  'picture',
+  'pin',
+  'share',
+  'pauseSubscription',
+  'resumeSubscription',
+  'stopSubscription',
+] as const;
+
+export type ButtonAction = (typeof buttonActions)[number];
 
 export type Button = {
   readonly action: ButtonAction;
   readonly label: string;
+  /** The answer, digest or watch that the button is about. */
   readonly answerId: string;
-  /** The canonical question, so that a press can be served after the answer itself has been forgotten. */
+  /** The canonical question, so that a press can be served while the store of records is in trouble. */
   readonly question: string;
+  /** Words that the press adds to the question, such as `at 99%`. */
+  readonly added?: string;
 };
 
 export type Reply = {

@@ -1,5 +1,6 @@
+import { z } from 'zod';
 import { toBlocks } from '../present/blocks.ts';
-import { type Reply, reply } from '../present/reply.ts';
+import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import type { Conversation, SpokenReply } from '../workspaces/slack/ports.ts';
 
@@ -20,15 +21,27 @@ const spokenReply = (each: Reply): SpokenReply => ({
   private: each.kind === 'refusal',
 });
 
-/** What stands in a button’s value, written by present/blocks. */
-const readValue = (value: string | null): { id: string; question: string } | null => {
+const pressable = z.object({
+  id: z.string(),
+  question: z.string().default(''),
+  added: z.string().optional(),
+});
+
+/** The action behind an action id: several buttons of one kind are told apart by what follows a full stop. */
+const readAction = (actionId: string): ButtonAction | null => {
+  const [name] = actionId.split('.');
+  return buttonActions.find((action) => action === name) ?? null;
+};
+
+/** The button that was pressed, from what present/blocks wrote into it; null where it is none of ours. */
+const readButton = (actionId: string, value: string | null): Omit<Button, 'label'> | null => {
+  const action = readAction(actionId);
+  if (action === null || value === null) return null;
   try {
-    const parsed: unknown = JSON.parse(value ?? '');
-    if (typeof parsed !== 'object' || parsed === null) return null;
-    const { id, question } = parsed as { id?: unknown; question?: unknown };
-    return typeof id === 'string' && typeof question === 'string' ? { id, question } : null;
+    const { id, question, added } = pressable.parse(JSON.parse(value));
+    return { action, answerId: id, question, ...(added === undefined ? {} : { added }) };
   } catch {
-    return null; // not a value of ours
+    return null;
   }
 };
 
@@ -39,16 +52,15 @@ export const slackConversation = (
 ): Conversation => ({
   converse: async (asking) => (await converse.ask(asking)).map((spoken) => spokenReply(spoken.reply)),
   press: async ({ actionId, value, place, from }) => {
-    const read = readValue(value);
-    if (actionId !== 'working' || read === null)
+    const button = readButton(actionId, value);
+    if (button === null)
       return [
         spokenReply(
           reply('refusal', 'This button is from an older version of the bot. Ask the question anew.'),
         ),
       ];
-    const { id: answerId, question } = read;
-    const replies = await converse.press({ action: actionId, answerId, question, place, from });
-    return replies.map(spokenReply);
+    const spoken = await converse.press({ ...button, place, from });
+    return spoken.map(({ reply: each }) => spokenReply(each));
   },
   examples: () => {
     const [ticker = 'KELP'] = firstTickers();

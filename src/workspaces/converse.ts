@@ -3,56 +3,23 @@ import { answersReply, jsonReply } from '../present/answerReply.ts';
 import { feedReply, stalenessInWords, tickerReply } from '../present/compose/feed.ts';
 import { helpReply } from '../present/compose/help.ts';
 import { pricePicture } from '../present/compose/pricePicture.ts';
-import { refusalReply } from '../present/compose/refusal.ts';
-import type { Button, Reply } from '../present/reply.ts';
+import type { Reply } from '../present/reply.ts';
 import type { ReadQuestion, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
 import { type ReadOutcome, readMessage } from '../questions/readMessage.ts';
 import type { Freshness } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
-import { type AskedFrom, askedFromNowhere } from '../terms/records.ts';
-import { type Refusal, type Result, refuse, succeed } from '../terms/result.ts';
+import { type Result, refuse, succeed } from '../terms/result.ts';
+import { type Asking, type Converse, readerOf, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
+import { answerPress } from './press.ts';
 import { isOfRecords, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
 import { keepAnswer } from './records/keeping.ts';
-import type { Reader } from './records/reading.ts';
-import { showWorking } from './showWorking.ts';
 import { workOut } from './workOut.ts';
 
+export type { Asking, Converse, Pressing, Spoken } from './conversation.ts';
 export type { Desk } from './desk.ts';
-
-/** A message that was addressed to the bot. `progress` is told, in words, how far a long answer has come. */
-export type Asking = {
-  readonly text: string;
-  readonly place: 'channel' | 'direct' | 'command' | 'terminal';
-  /** Who asked and where, in a place that knows. */
-  readonly from?: AskedFrom;
-  readonly progress?: (words: string) => void;
-};
-
-/** What the bot says to one question, and the outcome behind it where it was a statistical one. */
-export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answers> | null };
-
-/** A button that somebody presses. */
-export type Pressing = Pick<Button, 'action' | 'answerId' | 'question'> & Pick<Asking, 'place' | 'from'>;
-
-export type Converse = {
-  readonly ask: (asking: Asking) => Promise<readonly Spoken[]>;
-  readonly press: (pressing: Pressing) => Promise<readonly Reply[]>;
-};
-
-const said = (spokenReply: Reply): Spoken => ({ reply: spokenReply, outcome: null });
-
-const refused = (outcome: Refusal): Spoken => ({
-  reply: refusalReply(outcome.problem),
-  outcome,
-});
-
-const readerOf = ({ place, from }: Pick<Asking, 'place' | 'from'>): Reader => ({
-  place,
-  from: from ?? askedFromNowhere,
-});
 
 /** What can be answered while there are no prices. */
 const needsNoPrices = (outcome: ReadOutcome): boolean =>
@@ -155,7 +122,7 @@ export const createConverse = (desk: Desk): Converse => {
       : answerFeed(read, question.ticker, live);
   };
 
-  return {
+  const converse: Converse = {
     ask: async (asking) => {
       const live = desk.snapshot();
       const { questions } = readMessage(asking.text, desk.contextFor(live.ok ? live.value : null));
@@ -166,6 +133,7 @@ export const createConverse = (desk: Desk): Converse => {
         spoken.push(outcome.ok ? await answerOne(outcome.value, live, asking) : refused(outcome));
       return spoken;
     },
-    press: (pressing) => showWorking(desk, pressing, readerOf(pressing)),
+    press: (pressing) => answerPress(desk, converse.ask, pressing),
   };
+  return converse;
 };

@@ -3,8 +3,9 @@ import { answerQuestion } from '../../src/answers/answerQuestion.ts';
 import { problem } from '../../src/terms/problem.ts';
 import { refuse, succeed } from '../../src/terms/result.ts';
 import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
+import type { DeskRecords } from '../../src/workspaces/records/ports.ts';
 import { seriesOf, wobbling } from '../answers/madeSeries.ts';
-import { recordsInMemory } from '../doubles/records.ts';
+import { brokenStore, recordsInMemory } from '../doubles/records.ts';
 import { deskOn, noStatus, snapshotOf } from './madeDesk.ts';
 
 const closes = wobbling(300);
@@ -74,8 +75,8 @@ describe('the button under a reply', () => {
     const [button] = answer?.buttons ?? [];
     if (button === undefined) throw new Error('the answer has no button');
     const [working] = await converse.press({ ...button, place: 'channel' });
-    expect(working?.sentence).toBe(`The working of ${button.answerId}: ${button.question}.`);
-    expect(working?.passages[0]?.lines.length).toBeGreaterThan(8);
+    expect(working?.reply.sentence).toBe(`The working of ${button.answerId}: ${button.question}.`);
+    expect(working?.reply.passages[0]?.lines.length).toBeGreaterThan(8);
   });
 
   test('after a restart, and on other prices, it is found on record', async () => {
@@ -84,43 +85,66 @@ describe('the button under a reply', () => {
     const [button] = answer?.buttons ?? [];
     if (button === undefined) throw new Error('the answer has no button');
     const moved = succeed(snapshotOf([seriesOf('KELP', wobbling(301))]));
-    const replies = await createConverse(deskOn(own, () => moved)).press({ ...button, place: 'channel' });
-    expect(replies.map(({ kind, sentence }) => [kind, sentence])).toEqual([
+    const spoken = await createConverse(deskOn(own, () => moved)).press({ ...button, place: 'channel' });
+    expect(spoken.map(({ reply: { kind, sentence } }) => [kind, sentence])).toEqual([
       ['working', `The working of ${button.answerId}: ${button.question}.`],
     ]);
   });
 
-  test('without its record it is worked out again on the same prices', async () => {
+  /** Presses the button of an answer on a desk where records are in this state. */
+  const pressAfter = async (state: Partial<DeskRecords>, snapshot: typeof live) => {
     const [answer] = await say(createConverse(deskOn(records, () => live)), 'interval KELP');
     const [button] = answer?.buttons ?? [];
     if (button === undefined) throw new Error('the answer has no button');
-    const replies = await createConverse(deskOn(await recordsInMemory(), () => live)).press({
+    const desk = deskOn({ ...(await recordsInMemory()), ...state }, () => snapshot);
+    const spoken = await createConverse(desk).press({ ...button, place: 'channel' });
+    return { button, spoken, kinds: spoken.map(({ reply }) => reply.kind) };
+  };
+  const moved = succeed(snapshotOf([seriesOf('KELP', wobbling(301))]));
+
+  test('whose record was deleted it dies with the words of an id that never was', async () => {
+    const { button, spoken } = await pressAfter({}, live);
+    const never = await createConverse(deskOn(await recordsInMemory(), () => live)).press({
       ...button,
+      answerId: 'R-0000000000',
       place: 'channel',
     });
-    expect(replies.map(({ kind }) => kind)).toEqual(['working']);
+    expect(spoken[0]?.outcome).toMatchObject({ ok: false, problem: { code: 'unknownRecord' } });
+    const wordsOf = (all: typeof spoken) => all[0]?.reply.sentence.replaceAll(/R-\w+/g, 'R-…');
+    expect(wordsOf(spoken)).toBe(wordsOf(never));
   });
 
-  test('without its record on other prices it says that the prices have changed', async () => {
-    const [answer] = await say(createConverse(deskOn(records, () => live)), 'interval KELP');
-    const [button] = answer?.buttons ?? [];
-    if (button === undefined) throw new Error('the answer has no button');
-    const moved = succeed(snapshotOf([seriesOf('KELP', wobbling(301))]));
-    const replies = await createConverse(deskOn(await recordsInMemory(), () => moved)).press({
-      ...button,
-      place: 'channel',
-    });
-    expect(replies.map(({ kind }) => kind)).toEqual(['refusal', 'working']);
-    expect(replies[0]?.sentence).toContain(button.answerId);
+  test.each([
+    ['nothing is kept', { keeps: false }],
+    ['the store is in trouble', { store: brokenStore }],
+  ])('where %s it is worked out again on the same prices', async (_, state) => {
+    expect((await pressAfter(state, live)).kinds).toEqual(['working']);
+  });
+
+  test('where nothing is kept and prices are new it says that the prices have changed', async () => {
+    const { button, spoken, kinds } = await pressAfter({ keeps: false }, moved);
+    expect(kinds).toEqual(['refusal', 'working']);
+    expect(spoken[0]?.reply.sentence).toContain(button.answerId);
   });
 
   test('what cannot be worked out any more is said so', async () => {
-    const replies = await createConverse(deskOn(await recordsInMemory(), () => live)).press({
+    const desk = deskOn(await recordsInMemory({ keeps: false }), () => live);
+    const [spoken] = await createConverse(desk).press({
       action: 'working',
       place: 'channel',
       answerId: 'R-0000000000',
       question: 'interval GONE 60d at 95%',
     });
-    expect(replies.map(({ kind }) => kind)).toEqual(['refusal']);
+    expect(spoken?.outcome).toMatchObject({ ok: false, problem: { code: 'unknownRecord' } });
+  });
+
+  test('that nothing answers says so', async () => {
+    const [spoken] = await createConverse(deskOn(records, () => live)).press({
+      action: 'resumeSubscription',
+      place: 'channel',
+      answerId: 'D-1',
+      question: '',
+    });
+    expect(spoken?.reply.kind).toBe('refusal');
   });
 });

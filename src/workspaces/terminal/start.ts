@@ -65,7 +65,12 @@ const press = async (terminal: Terminal, converse: Converse, room: Room, number:
     );
     return room;
   }
-  return show(terminal, room, await converse.press({ ...button, place: placeOf(room) }));
+  const spoken = await converse.press({ ...button, place: placeOf(room) });
+  return show(
+    terminal,
+    room,
+    spoken.map(({ reply }) => reply),
+  );
 };
 
 const enterThread = (terminal: Terminal, room: Room, number: number | null): Room => {

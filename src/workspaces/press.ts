@@ -1,0 +1,42 @@
+import type { Answers } from '../answers/answer.ts';
+import { workingReplies } from '../present/answerReply.ts';
+import { type ButtonAction, type Reply, reply } from '../present/reply.ts';
+import { type Converse, type Pressing, refused, type Spoken, said } from './conversation.ts';
+import type { Desk } from './desk.ts';
+import { pressedAnswers } from './pressed/pressedAnswers.ts';
+
+/** What answers the presses of one kind of button. `ask` is the way of any question that was typed. */
+export type PressHandler = (
+  desk: Desk,
+  pressing: Pressing,
+  ask: Converse['ask'],
+) => Promise<readonly Spoken[]>;
+
+/** Shows something of the answers under the button. */
+const showing =
+  (show: (answers: Answers) => readonly Reply[]): PressHandler =>
+  async (desk, pressing) => {
+    const pressed = await pressedAnswers(desk, pressing);
+    if (!pressed.ok) return [refused(pressed)];
+    const { answers, changed } = pressed.value;
+    return [...(changed === null ? [] : [changed]), ...show(answers)].map(said);
+  };
+
+/** A new button is one line here. */
+const handlers: Readonly<Partial<Record<ButtonAction, PressHandler>>> = {
+  working: showing(workingReplies),
+};
+
+const doesNothing = said(
+  reply(
+    'refusal',
+    'This button does nothing here. Ask the question anew, or ask help for what can be asked.',
+  ),
+);
+
+/** Answers a press by what the button is for. */
+export const answerPress = async (
+  desk: Desk,
+  ask: Converse['ask'],
+  pressing: Pressing,
+): Promise<readonly Spoken[]> => (await handlers[pressing.action]?.(desk, pressing, ask)) ?? [doesNothing];
