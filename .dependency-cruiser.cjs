@@ -109,6 +109,18 @@ module.exports = {
       ['start'],
       'threads are machinery; the core does not know of them',
     ),
+    onlyIn(
+      'chart-grammar',
+      'node_modules/(vega|vega-lite|vega-[a-z-]+)/',
+      ['present/picture'],
+      'what a picture shows is said in one folder; nothing else hangs on the grammar',
+    ),
+    onlyIn(
+      'rasteriser',
+      'node_modules/@resvg/',
+      ['start'],
+      'a picture ends at SVG; making a file of it is machinery, and native code',
+    ),
     {
       name: 'nobody-imports-start',
       severity: 'error',

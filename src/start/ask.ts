@@ -9,6 +9,7 @@ import { computeInline } from './compute/inline.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
 import { feedOnce } from './feed.ts';
+import { drawInline } from './pictures/draw.ts';
 import { recordsToKeep, recordsToRead, versionsOf } from './records/records.ts';
 import { settingsFor } from './settings.ts';
 
@@ -58,6 +59,7 @@ const ask = async (asked: Arguments): Promise<number> => {
     clock,
     ...feed,
     compute: computeInline(),
+    drawing: drawInline(),
     records: {
       store,
       keeps: asked.keep,

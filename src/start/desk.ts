@@ -1,5 +1,6 @@
 import { answeredVerbs } from '../answers/answerQuestion.ts';
 import type { Settings } from '../config/schema.ts';
+import type { QuestionDefaults } from '../questions/readMessage.ts';
 import { createVocabulary } from '../questions/vocabulary.ts';
 import type { Clock } from '../terms/clock.ts';
 import type { FeedStatus } from '../terms/feedReport.ts';
@@ -7,6 +8,7 @@ import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 import type { Desk } from '../workspaces/desk.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
+import type { Drawing } from '../workspaces/pictures.ts';
 import type { DeskRecords } from '../workspaces/records/ports.ts';
 import type { Compute } from './compute/compute.ts';
 import { helpPageOf } from './helpPages.ts';
@@ -19,6 +21,7 @@ export type DeskParts = {
   readonly feedStatus: () => FeedStatus;
   readonly compute: Compute;
   readonly records: DeskRecords;
+  readonly drawing: Drawing;
   /** Without them: a place that belongs to one person alone. */
   readonly permissions?: Permissions;
 };
@@ -28,28 +31,40 @@ const builtVerbs = ['help', 'feed', 'again', 'records', ...answeredVerbs];
 const noVocabulary = createVocabulary([]);
 
 /** A snapshot’s vocabulary is made once; snapshots are few and long-lived. */
-const vocabularies = () => {
+const vocabularies = (cities: ReadonlyMap<string, string>) => {
   const made = new WeakMap<PriceSnapshot, ReturnType<typeof createVocabulary>>();
   return (snapshot: PriceSnapshot | null) => {
     if (snapshot === null) return noVocabulary;
     const known =
-      made.get(snapshot) ?? createVocabulary([...snapshot.tickers, ...snapshot.quarantined.keys()]);
+      made.get(snapshot) ?? createVocabulary([...snapshot.tickers, ...snapshot.quarantined.keys()], cities);
     made.set(snapshot, known);
     return known;
   };
 };
 
+/** What questions take that do not say it. */
+export const questionDefaults = ({ defaults, digests, deskTimeZone }: Settings): QuestionDefaults => ({
+  ...defaults,
+  digest: {
+    window: defaults.tail.window,
+    level: digests.level,
+    model: digests.model,
+    minutes: digests.time,
+    timeZone: deskTimeZone,
+  },
+});
+
 /** The desk as a conversation sees it, wired from settings, feed and machinery. */
 export const createDesk = (parts: DeskParts): Desk => {
   const { settings, clock, snapshot, feedStatus, compute, records } = parts;
-  const vocabularyOf = vocabularies();
+  const vocabularyOf = vocabularies(new Map(Object.entries(settings.digests.cities)));
   const { periodsPerYear, smallestMeanThatMatters } = settings;
   return {
     snapshot,
     contextFor: (live) => ({
       vocabulary: vocabularyOf(live),
       today: dayAt(clock.nowMs(), settings.deskTimeZone),
-      defaults: settings.defaults,
+      defaults: questionDefaults(settings),
       builtVerbs,
     }),
     compute: compute.answer,
@@ -60,6 +75,7 @@ export const createDesk = (parts: DeskParts): Desk => {
     dayStartMs: (day) => dayStartMs(day, settings.deskTimeZone),
     helpPage: helpPageOf(builtVerbs),
     records,
+    drawing: parts.drawing,
     permissions: parts.permissions ?? everythingAllowed,
   };
 };

@@ -12,6 +12,7 @@ import { exitCodes } from './exit.ts';
 import { eventInWords, feedLive } from './feed.ts';
 import { startHeartbeat } from './heartbeat.ts';
 import { operatorLog, silentLog } from './log.ts';
+import { drawInThread } from './pictures/draw.ts';
 import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
 import type { Reopening } from './records/reopening.ts';
 import { settingsFor } from './settings.ts';
@@ -77,6 +78,7 @@ const main = async (): Promise<number> => {
   const first = feed.snapshot();
   if (!first.ok) return refuseWith([first.problem]);
   const compute = computeInPool();
+  const drawing = drawInThread();
   const store = recordsToKeep(settings);
   const stopTidying = keepTidy(store, settings, clock, log.error);
   const records = { store, keeps: true, versions: versionsOf(settings), tell: log.error };
@@ -87,6 +89,7 @@ const main = async (): Promise<number> => {
     feedStatus: feed.status,
     compute,
     records,
+    drawing,
   });
   const serving = { converse: createConverse(desk), tickers: () => tickersOf(feed), records: store };
   try {
@@ -97,6 +100,7 @@ const main = async (): Promise<number> => {
     stopTidying();
     feed.close();
     await compute.close();
+    await drawing.close();
     await store.close();
   }
 };

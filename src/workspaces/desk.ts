@@ -9,6 +9,7 @@ import type { FeedStatus } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 import type { Permissions } from './permissions.ts';
+import type { Drawing } from './pictures.ts';
 import type { DeskRecords } from './records/ports.ts';
 
 /** What a conversation needs of the rest of the house. */
@@ -26,5 +27,6 @@ export type Desk = {
   readonly dayStartMs: (day: Day) => InstantMs;
   readonly helpPage: (topic: string | null) => HelpPage;
   readonly records: DeskRecords;
+  readonly drawing: Drawing;
   readonly permissions: Permissions;
 };

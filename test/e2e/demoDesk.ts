@@ -4,6 +4,7 @@ import { computeInline } from '../../src/start/compute/inline.ts';
 import { createDesk } from '../../src/start/desk.ts';
 import { feedOnce } from '../../src/start/feed.ts';
 import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
+import { layingOut } from '../doubles/drawing.ts';
 import { recordsInMemory } from '../doubles/records.ts';
 
 const example = new URL('../../config/example-settings.yaml', import.meta.url).pathname;
@@ -20,5 +21,7 @@ export const demoConverse = async (keeps = true): Promise<Converse> => {
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
   const records = await recordsInMemory({ keeps });
-  return createConverse(createDesk({ settings, clock, ...feed, compute: computeInline(), records }));
+  return createConverse(
+    createDesk({ settings, clock, ...feed, compute: computeInline(), records, drawing: layingOut }),
+  );
 };

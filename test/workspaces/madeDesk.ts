@@ -6,6 +6,7 @@ import type { PriceSeries, PriceSnapshot } from '../../src/terms/prices.ts';
 import type { Desk } from '../../src/workspaces/desk.ts';
 import { everythingAllowed } from '../../src/workspaces/permissions.ts';
 import type { DeskRecords } from '../../src/workspaces/records/ports.ts';
+import { layingOut } from '../doubles/drawing.ts';
 import { context } from '../questions/asking.ts';
 
 export const noStatus: FeedStatus = {
@@ -47,6 +48,7 @@ export const deskOn = (records: DeskRecords, snapshot: Desk['snapshot'], more: P
   dayStartMs: (day) => day * millisecondsPerDay,
   helpPage: () => generalTopic(['interval']),
   records,
+  drawing: layingOut,
   permissions: everythingAllowed,
   ...more,
 });

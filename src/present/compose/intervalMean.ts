@@ -6,7 +6,8 @@ import { possessive } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
 import { againstZero, dailyAndAnnual, framed, placeInWords, windowInWords } from './parts.ts';
 
-const trustedBounds = (figures: MeanFigures): Bounds =>
+/** The interval that the verdict rests on. */
+export const trustedBounds = (figures: MeanFigures): Bounds =>
   ({
     plain: { lower: figures.lower, upper: figures.upper },
     neweyWest: { lower: figures.neweyWestLower, upper: figures.neweyWestUpper },
