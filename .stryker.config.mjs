@@ -1,18 +1,31 @@
-/** Mutation testing of the statistics core: `npm run mutate`, or a part of it with `-- --mutate 'src/stats/mean/**'`. */
+import { parts } from './test/mutation/parts.mjs';
+
+/**
+ * Mutation testing of the statistics core. `npm run mutate` goes through `test/mutation/parts.mjs`; a piece is
+ * `npm run mutate -- --mutate 'src/stats/mean/**'`, judged by the tests of the folder it lies in.
+ */
+const afterOption = (name) => process.argv[process.argv.indexOf(name) + 1];
+const pattern = process.argv.includes('--mutate') ? afterOption('--mutate') : '';
+const folderOf = (path) => path.replace(/\*.*$/, '').replace(/[^/]*\.ts.*$/, '');
+const named = parts.find(({ name }) => name === process.env.MUTATION_PART);
+const around = parts.filter(({ mutate }) =>
+  mutate.some((path) => folderOf(pattern).startsWith(folderOf(path))),
+);
+const part = named ?? around.at(-1);
+
 export default {
-  testRunner: 'vitest',
+  testRunner: 'in-process',
+  plugins: ['./test/mutation/runner.mjs', '@stryker-mutator/vitest-runner'],
   vitest: { configFile: 'test/vitest.mutate.config.ts' },
-  plugins: ['@stryker-mutator/vitest-runner'],
-  mutate: ['src/stats/**/*.ts', '!src/stats/coverage/measured/*.ts'],
+  mutate: part?.mutate ?? ['src/stats/**/*.ts', '!src/stats/coverage/measured/*.ts'],
+  testFiles: part?.testFiles ?? ['test/stats/**/*.test.ts'],
   coverageAnalysis: 'perTest',
-  ignoreStatic: true,
-  concurrency: 2,
-  timeoutMS: 20_000,
-  timeoutFactor: 2,
-  incremental: true,
-  incrementalFile: '.stryker-tmp/incremental.json',
+  concurrency: 1,
+  timeoutMS: 60_000,
+  timeoutFactor: 3,
   tempDirName: '.stryker-tmp/sandboxes',
   ignorePatterns: [
+    '.stryker-tmp',
     'dist',
     'coverage',
     'config',
@@ -24,7 +37,8 @@ export default {
     'test/questions',
   ],
   reporters: ['clear-text', 'json'],
-  jsonReporter: { fileName: '.stryker-tmp/mutation.json' },
+  jsonReporter: { fileName: `.stryker-tmp/reports/${part?.name ?? 'mutation'}.json` },
   clearTextReporter: { allowColor: false, logTests: false, reportTests: false, reportScoreTable: true },
-  thresholds: { high: 90, low: 85, break: 85 },
+  warnings: { slow: false },
+  thresholds: { high: 90, low: 85, break: null },
 };

@@ -1,0 +1,149 @@
+import { readFileSync, writeFileSync } from 'node:fs';
+import { relative } from 'node:path';
+import { declareFactoryPlugin, PluginKind } from '@stryker-mutator/api/plugin';
+import {
+  DryRunStatus,
+  determineHitLimitReached,
+  MutantRunStatus,
+  TestStatus,
+} from '@stryker-mutator/api/test-runner';
+import { openEnvironment } from './environment.mjs';
+
+/**
+ * Runs the statistics tests inside one process that stays: a mutant costs the tests that cover it, cheapest
+ * first, up to the first that fails, instead of a worker and all its imports. Sources and tests are loaded
+ * once; they keep no state between tests except what a mutant damages, so
+ *
+ * - a kill counts only if the killing test passes again without the mutant, or if the environment was fresh;
+ *   after any other kill everything is loaded anew and the mutant is judged again;
+ * - a mutant that is not killed within `millisecondsPerMutant` of tests (as timed without mutants) counts as
+ *   survived, so the score is never flattered by what was not run.
+ */
+const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 5000);
+
+const instrumented = () => {
+  globalThis.__stryker__ ??= {};
+  return globalThis.__stryker__;
+};
+
+const failureOf = async (body) => {
+  try {
+    await body();
+    return null;
+  } catch (error) {
+    return error instanceof Error ? error.message : String(error);
+  }
+};
+
+/** What the first run learned, kept in the sandbox for the process that follows one that was ended. */
+const learnedFile = '.mutation-first-run.json';
+
+class InProcessRunner {
+  environment = null;
+  tests = new Map();
+  learned = { testFiles: [], durations: {}, coverage: {} };
+  isFresh = false;
+
+  capabilities() {
+    return { reloadEnvironment: true };
+  }
+
+  async load() {
+    this.tests = await this.environment.load();
+    this.isFresh = true;
+  }
+
+  async dryRun({ testFiles }) {
+    const stryker = instrumented();
+    this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
+    this.environment = await openEnvironment(this.learned.testFiles);
+    await this.load();
+    const results = [];
+    for (const { id, name, body } of this.tests.values()) {
+      stryker.currentTestId = id;
+      const start = performance.now();
+      const failureMessage = await failureOf(body);
+      const timeSpentMs = performance.now() - start;
+      stryker.currentTestId = undefined;
+      this.learned.durations[id] = timeSpentMs;
+      const status = failureMessage === null ? TestStatus.Success : TestStatus.Failed;
+      results.push({ id, name, timeSpentMs, status, failureMessage: failureMessage ?? '' });
+    }
+    this.learned.coverage = stryker.mutantCoverage?.perTest ?? {};
+    writeFileSync(learnedFile, JSON.stringify(this.learned));
+    return { status: DryRunStatus.Complete, tests: results, mutantCoverage: stryker.mutantCoverage };
+  }
+
+  async resume() {
+    this.learned = JSON.parse(readFileSync(learnedFile, 'utf8'));
+    this.environment = await openEnvironment(this.learned.testFiles);
+    await this.load();
+  }
+
+  /** The tests that reach the mutant before the others (which only load it), cheap before dear, within the allowance. */
+  chosen(mutant, isStatic) {
+    const { durations, coverage } = this.learned;
+    const candidates = Object.keys(durations)
+      .map((id) => ({ id, cost: durations[id], reaches: coverage[id]?.[mutant] !== undefined }))
+      .filter(({ reaches }) => isStatic || reaches)
+      .sort((a, b) => Number(b.reaches) - Number(a.reaches) || a.cost - b.cost);
+    let spent = 0;
+    return candidates.filter(({ cost }, index) => {
+      spent += cost;
+      return index === 0 || spent <= millisecondsPerMutant;
+    });
+  }
+
+  /** The first test that fails with the mutant, or none. */
+  async judge({ activeMutant, reloadEnvironment, hitLimit }) {
+    const stryker = instrumented();
+    Object.assign(stryker, { hitCount: 0, hitLimit, activeMutant: activeMutant.id });
+    let nrOfTests = 0;
+    try {
+      if (reloadEnvironment) await this.load();
+      for (const { id } of this.chosen(activeMutant.id, reloadEnvironment)) {
+        nrOfTests += 1;
+        const test = this.tests.get(id);
+        const failureMessage =
+          test === undefined ? 'the test is no longer declared' : await failureOf(test.body);
+        if (failureMessage !== null) return { killer: id, failureMessage, nrOfTests };
+      }
+      return { killer: null, nrOfTests };
+    } catch (error) {
+      return { killer: 'loading the tests', failureMessage: String(error), nrOfTests };
+    } finally {
+      stryker.activeMutant = undefined;
+    }
+  }
+
+  async passesWithoutMutant(id) {
+    const test = this.tests.get(id);
+    return test !== undefined && (await failureOf(test.body)) === null;
+  }
+
+  async mutantRun(options) {
+    if (this.environment === null) await this.resume();
+    const { reloadEnvironment, hitLimit } = options;
+    for (;;) {
+      const wasFresh = this.isFresh || reloadEnvironment;
+      this.isFresh = false;
+      const { killer, failureMessage, nrOfTests } = await this.judge(options);
+      const endless = determineHitLimitReached(instrumented().hitCount, hitLimit);
+      const isSound = !reloadEnvironment && (killer === null || (await this.passesWithoutMutant(killer)));
+      if (!isSound) await this.load();
+      if (!isSound && !wasFresh) continue;
+      if (endless) return { status: MutantRunStatus.Timeout, reason: endless.reason };
+      if (killer === null) return { status: MutantRunStatus.Survived, nrOfTests };
+      return { status: MutantRunStatus.Killed, killedBy: [killer], failureMessage, nrOfTests };
+    }
+  }
+
+  async dispose() {
+    await this.environment?.close();
+  }
+}
+
+const createRunner = () => new InProcessRunner();
+createRunner.inject = [];
+
+export const strykerPlugins = [declareFactoryPlugin(PluginKind.TestRunner, 'in-process', createRunner)];
