@@ -9,3 +9,7 @@ export const accepted = <T>(result: Result<T>): T => {
 /** The code of an outcome that must be a refusal, or 'not refused'. */
 export const refusalCode = (result: Result<unknown>): string =>
   result.ok ? 'not refused' : result.problem.code;
+
+/** The sentence of an outcome that must be a refusal. It begins with the figure that cannot be had. */
+export const refusalMessage = (result: Result<unknown>): string =>
+  result.ok ? 'not refused' : result.problem.message;

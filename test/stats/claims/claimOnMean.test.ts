@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { claimOnMean, type MeanClaim } from '../../../src/stats/claims/claimOnMean.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level95 } from '../levels.ts';
@@ -87,6 +87,13 @@ describe('dependence', () => {
     const returns = alternating(18);
     expect(accepted(ask(returns)).decidedBy).toBe('plain');
     expect(refusalCode(ask(returns, { robust: true }))).toBe('tooFewReturns');
+    expect(refusalMessage(ask(returns, { robust: true }))).toMatch(
+      /^A verdict that allows for autocorrelation needs at least 20 returns/,
+    );
+  });
+
+  test('with 20 returns Newey-West decides', () => {
+    expect(accepted(ask(alternating(20))).decidedBy).toBe('neweyWest');
   });
 });
 
@@ -116,7 +123,10 @@ describe('verdicts on DAX over 60 days (mean −0.8 bp, 95% interval −35.1 to 
 });
 
 describe('refusals', () => {
-  test('one return', () => expect(refusalCode(ask([0.01]))).toBe('tooFewReturns'));
+  test('one return', () => {
+    expect(refusalCode(ask([0.01]))).toBe('tooFewReturns');
+    expect(refusalMessage(ask([0.01]))).toMatch(/^A claim on the mean needs at least 2 returns/);
+  });
   test('a price that stands still', () =>
     expect(refusalCode(ask([0.01, 0.01, 0.01]))).toBe('priceDoesNotMove'));
 });

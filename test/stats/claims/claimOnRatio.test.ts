@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { claimOnRatio, type RatioClaim } from '../../../src/stats/claims/claimOnRatio.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level, level95 } from '../levels.ts';
@@ -37,6 +37,26 @@ describe('DAX over 60 days, ratio -0.00634 a day, against 0.15', () => {
     expect(relativeError(accepted(ask({ claimed: 0.15 })).returnsNeeded ?? 0, 351)).toBe(0);
   });
 
+  test('reach of a one-sided claim, on the side that is looked at alone', () => {
+    // brentq on nct.sf(nct.ppf(0.95, 59, 60**.5*0.15), 59, 60**.5*(0.15 + d)) - 0.8; below with ppf(0.05) and cdf.
+    expect(relativeError(accepted(ask({ side: 'above' })).detectableAt80, 0.3319384914342866)).toBeLessThan(
+      tolerance,
+    );
+    expect(relativeError(accepted(ask({ side: 'below' })).detectableAt80, 0.3213227691081578)).toBeLessThan(
+      tolerance,
+    );
+  });
+
+  test('the mirrored claim has the same reach, found on the other side', () => {
+    // Exact by symmetry; the root is found to a few units in the last place of the noncentral t, 1e-12.
+    const mirrored = accepted(ask({ claimed: -0.15 }));
+    expect(relativeError(mirrored.detectableAt80, claim.detectableAt80)).toBeLessThan(1e-12);
+  });
+
+  test('a level of 10% rejects so often that nothing has to be found', () => {
+    expect(accepted(ask({ level: level('0.1') })).detectableAt80).toBe(0);
+  });
+
   test('one-sided: the end at 95% alone', () => {
     const above = accepted(ask({ side: 'above' }));
     expect(relativeError(above.lower ?? 0, -0.21866242592807703)).toBeLessThan(tolerance);
@@ -63,11 +83,16 @@ describe('verdicts and edges', () => {
   });
 
   test('a one-sided level of 50% excludes nothing', () => {
-    expect(refusalCode(ask({ side: 'above', level: level('0.5') }))).toBe('levelOutside');
+    const refused = ask({ side: 'above', level: level('0.5') });
+    expect(refusalCode(refused)).toBe('levelOutside');
+    expect(refusalMessage(refused)).toMatch(/^A one-sided claim on a ratio at 50% /);
   });
 
   test('too few, or still', () => {
     expect(refusalCode(ask({ returns: [0.01] }))).toBe('tooFewReturns');
     expect(refusalCode(ask({ returns: [0.01, 0.01] }))).toBe('priceDoesNotMove');
+    expect(refusalMessage(ask({ returns: [0.01] }))).toMatch(
+      /^A claim on the ratio of mean to deviation needs /,
+    );
   });
 });

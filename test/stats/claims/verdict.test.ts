@@ -16,7 +16,25 @@ test.each([
   [20, 21, null, 'contradicted'],
   [20, -1, null, 'cannot tell'],
   [20, null, 19, 'contradicted'],
+  [-20, null, 19, 'cannot tell'],
 ] as const)('claimed %d in %s to %s: %s', (claimed, lower, upper, verdict) => {
   const estimate = lower === null ? (upper ?? 0) - 5 : upper === null ? lower + 5 : (lower + upper) / 2;
   expect(verdictOn({ claimed, estimate, ends: { lower, upper }, smallestThatMatters: 5 })).toBe(verdict);
 });
+
+// By hand: the estimate 1 is 7 from the farther end of a two-sided interval, 5 or 6 from the one end of the others.
+test.each([
+  [-6, 3, 6.5, 'cannot tell'],
+  [-6, 3, 7, 'consistent'],
+  [-1, 8, 6.5, 'cannot tell'],
+  [-1, 8, 7, 'consistent'],
+  [-4, null, 5, 'consistent'],
+  [-5, null, 5, 'cannot tell'],
+  [null, 6, 5, 'consistent'],
+  [null, 7, 5, 'cannot tell'],
+] as const)(
+  'a claim of zero in %s to %s, where %d matters: %s',
+  (lower, upper, smallestThatMatters, verdict) => {
+    expect(verdictOn({ claimed: 0, estimate: 1, ends: { lower, upper }, smallestThatMatters })).toBe(verdict);
+  },
+);
