@@ -63,6 +63,44 @@ export type ChainHeadRow = { readonly name: 'head'; readonly length: number; rea
 
 export type SchemaVersionRow = { readonly version: number };
 
+/** What somebody deals with: until when nobody else may, and when it was done with. */
+export type LeasedRow = {
+  readonly key: string;
+  readonly holder: string | null;
+  readonly lease_until_ms: number;
+  readonly settled_at_ms: number | null;
+};
+
+export type InboxRow = LeasedRow & {
+  /** The same before and after an edit; null for what cannot be edited. */
+  readonly message_key: string | null;
+  readonly kind: 'question' | 'command' | 'press';
+  readonly asked_at_ms: number;
+  /** What arrived, as JSON; emptied some time after it was dealt with. */
+  readonly body: string;
+  /** How often somebody began to deal with it. */
+  readonly tries: number;
+  /** The message that was to be changed into the answer, as JSON. */
+  readonly editing: string | null;
+};
+
+export type DeliveryRow = LeasedRow & {
+  readonly delivery_id: string;
+  readonly team: string;
+  readonly channel: string;
+  readonly thread: string | null;
+  /** What is said, as JSON; emptied some time after it was settled. */
+  readonly content: string;
+  readonly urgent: number;
+  readonly expires_at_ms: number | null;
+  readonly created_at_ms: number;
+  readonly first_attempt_ms: number | null;
+  readonly last_attempt_ms: number | null;
+  readonly unsure: number;
+  /** As JSON, once it is settled. */
+  readonly outcome: string | null;
+};
+
 export type Tables = {
   readonly price_columns: PriceColumnsRow;
   readonly answers: AnswerRow;
@@ -71,5 +109,7 @@ export type Tables = {
   readonly askings: AskingRow;
   readonly chain: ChainRow;
   readonly chain_head: ChainHeadRow;
+  readonly inbox: InboxRow;
+  readonly deliveries: DeliveryRow;
   readonly schema_versions: SchemaVersionRow;
 };

@@ -1,9 +1,14 @@
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import { type AnswerStore, answerStore } from './answers.ts';
 import { type Access, accessTo, type Connection, storeProblem } from './connection.ts';
+import { type DeliveryStore, deliveryStore } from './deliveries.ts';
+import { type InboxStore, inboxStore } from './inbox.ts';
 
 /** Each part of the records in a file of its own, all of them on one database. */
-export type StoreParts = AnswerStore;
+export type StoreParts = AnswerStore & {
+  readonly inbox: InboxStore;
+  readonly deliveries: DeliveryStore;
+};
 
 /** The records. Whatever the machinery beneath does wrong comes back as a problem, never as an exception. */
 export type Store = StoreParts & {
@@ -12,7 +17,11 @@ export type Store = StoreParts & {
   readonly close: () => Promise<void>;
 };
 
-export const storeParts = (access: Access): StoreParts => answerStore(access);
+export const storeParts = (access: Access): StoreParts => ({
+  ...answerStore(access),
+  inbox: inboxStore(access),
+  deliveries: deliveryStore(access),
+});
 
 export const copied = async (connection: Connection, path: string): Promise<Result<null>> => {
   try {

@@ -4,6 +4,8 @@ import { join } from 'node:path';
 import Database from 'better-sqlite3';
 import { afterAll, describe, expect, test } from 'vitest';
 import { openSqlite } from '../../src/records/openSqlite.ts';
+import { deliveriesContract } from '../contracts/deliveries.contract.ts';
+import { inboxContract } from '../contracts/inbox.contract.ts';
 import { storeContract } from '../contracts/store.contract.ts';
 import { accepted, refusalCode } from '../laws/outcomes.ts';
 import { answerOf, askingAt } from './madeRecords.ts';
@@ -17,8 +19,11 @@ const newPath = (): string => {
   return join(folder, `below-${files}`, 'records.db');
 };
 
-storeContract('in memory', async () => accepted(await openSqlite(null)));
+const inMemory = async () => accepted(await openSqlite(null));
+storeContract('in memory', inMemory);
 storeContract('in a file', async () => accepted(await openSqlite(newPath())));
+inboxContract('in memory', inMemory);
+deliveriesContract('in memory', inMemory);
 
 /** A file with two answers, one of them asked twice. */
 const filled = async (): Promise<string> => {
@@ -155,6 +160,8 @@ describe('a file of records', () => {
       'price_columns',
       'chain',
       'chain_head',
+      'inbox',
+      'deliveries',
     ])
       tampering.exec(`DROP TABLE ${table}`);
     tampering.exec('DELETE FROM schema_versions');
