@@ -22,8 +22,7 @@ const studentisedMean = ({
   const root = Math.sqrt(count);
   return ([picks]) => {
     writeResampledMoments(scaled, picks, moments);
-    const deviation = moments[1] as number;
-    return deviation > 0 ? ((moments[0] as number) * root) / deviation : Number.NaN;
+    return ((moments[0] as number) * root) / (moments[1] as number);
   };
 };
 

@@ -99,6 +99,8 @@ describe('which interval of the mean to believe', () => {
     expect(three.lag1Autocorrelation).not.toBeNull();
     expect(three.skewness).not.toBeNull();
     expect(three.excessKurtosis).toBeNull();
+    // By hand: of 0, 0, 0, 1 the fourth central moment is 21/256 and the second 3/16, so m4/m2² − 3 = −2/3.
+    expect(trusted([0, 0, 0, 1]).evidence.excessKurtosis).toBeCloseTo(-2 / 3, 14);
     expect(trusted([0, 0.01, 0.05, 0.02, 0]).evidence.ljungBox?.lags).toBe(1);
   });
 
