@@ -1,7 +1,10 @@
 import { z } from 'zod';
 import { toBlocks } from '../present/blocks.ts';
 import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
+import { admission } from '../workspaces/admission.ts';
+import type { Spoken } from '../workspaces/conversation.ts';
 import type { Converse } from '../workspaces/converse.ts';
+import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import type { Conversation, SpokenReply } from '../workspaces/slack/ports.ts';
 
 const examples = ['interval KELP 60d', 'interval vol KELP 3m', 'help'];
@@ -20,6 +23,8 @@ const spokenReply = (each: Reply): SpokenReply => ({
   kind: kinds[each.kind],
   private: each.kind === 'refusal',
 });
+
+const inBlocks = ({ reply: each }: Spoken): SpokenReply => spokenReply(each);
 
 const pressable = z.object({
   id: z.string(),
@@ -49,8 +54,10 @@ const readButton = (actionId: string, value: string | null): Omit<Button, 'label
 export const slackConversation = (
   converse: Converse,
   firstTickers: () => readonly string[],
+  permissions: Permissions = everythingAllowed,
 ): Conversation => ({
-  converse: async (asking) => (await converse.ask(asking)).map((spoken) => spokenReply(spoken.reply)),
+  ready: permissions.learn,
+  converse: async (asking) => (await converse.ask(asking)).map(inBlocks),
   press: async ({ actionId, value, place, from }) => {
     const button = readButton(actionId, value);
     if (button === null)
@@ -60,9 +67,11 @@ export const slackConversation = (
         ),
       ];
     const spoken = await converse.press({ ...button, place, from });
-    return spoken.map(({ reply: each }) => spokenReply(each));
+    return spoken.map(inBlocks);
   },
-  examples: () => {
+  examples: async (asker) => {
+    const barred = await admission(permissions, asker);
+    if (barred !== null) return barred.map(inBlocks);
     const [ticker = 'KELP'] = firstTickers();
     const lines = examples.map((example) => example.replace('KELP', ticker));
     return [

@@ -10,10 +10,11 @@ import type { Freshness } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
+import { behindDoor, denied } from './admission.ts';
 import { type Asking, type Converse, readerOf, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
 import { answerPress } from './press.ts';
-import { isOfRecords, isStatistical } from './questionKinds.ts';
+import { isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
 import { keepAnswer } from './records/keeping.ts';
 import { workOut } from './workOut.ts';
@@ -117,6 +118,10 @@ export const createConverse = (desk: Desk): Converse => {
     if (isStatistical(question))
       return live.ok ? answerStatistical(read, question, live.value, asking) : refused(live);
     if (isOfRecords(question)) return answerRecords(question, live, asking);
+    if (isOfSubscriptions(question))
+      return refused(
+        refuse(problem('verbNotBuilt', `${question.verb} cannot be asked here. Ask help for what can.`)),
+      );
     return question.verb === 'help'
       ? said(helpReply(desk.helpPage(question.topic)))
       : answerFeed(read, question.ticker, live);
@@ -129,11 +134,16 @@ export const createConverse = (desk: Desk): Converse => {
       // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
       if (!live.ok && !questions.some(needsNoPrices)) return questions.length === 0 ? [] : [refused(live)];
       const spoken: Spoken[] = [];
-      for (const outcome of questions)
-        spoken.push(outcome.ok ? await answerOne(outcome.value, live, asking) : refused(outcome));
+      for (const outcome of questions) {
+        if (!outcome.ok) spoken.push(refused(outcome));
+        else {
+          const may = desk.permissions.mayAsk(readerOf(asking), outcome.value.question.verb);
+          spoken.push(...(may.ok ? [await answerOne(outcome.value, live, asking)] : denied(may)));
+        }
+      }
       return spoken;
     },
     press: (pressing) => answerPress(desk, converse.ask, pressing),
   };
-  return converse;
+  return behindDoor(desk.permissions, converse);
 };

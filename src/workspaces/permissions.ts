@@ -16,8 +16,7 @@ export type Managed = { readonly team: string; readonly channel: string; readonl
 
 /**
  * Whether something may be posted into a place on somebody's behalf. `paused` can become right again by itself and is
- * taken up then; `stopped` is not, since others can read along now. `unknown`: the platform did not say, so nothing is
- * posted and the question is put again later.
+ * taken up then; `stopped` is not, since others can read along now.
  */
 export type PlaceVerdict =
   | { readonly kind: 'fine' }
@@ -25,8 +24,7 @@ export type PlaceVerdict =
       readonly kind: 'paused';
       readonly why: 'archived' | 'notMember' | 'gone' | 'restricted' | 'ownerLeft';
     }
-  | { readonly kind: 'stopped'; readonly why: 'shared' | 'guests' }
-  | { readonly kind: 'unknown' };
+  | { readonly kind: 'stopped'; readonly why: 'shared' | 'guests' };
 
 /** Who may do what: the one thing that every way to a figure or a record asks. */
 export type Permissions = {

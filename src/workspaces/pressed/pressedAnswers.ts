@@ -24,11 +24,14 @@ const changedPrices = (answerId: string, todayId: string): Reply =>
   );
 
 /** The same question on the prices of today: what is left where nothing is kept or the store is in trouble. */
-const onToday = async (desk: Desk, { answerId, question }: Pressing): Promise<Result<PressedAnswers>> => {
+const onToday = async (desk: Desk, pressing: Pressing): Promise<Result<PressedAnswers>> => {
+  const { answerId, question } = pressing;
   const live = desk.snapshot();
   if (!live.ok) return live;
   const [read] = readMessage(question, desk.contextFor(live.value)).questions;
   if (read?.ok !== true || !isStatistical(read.value.question)) return noSuchRecord(answerId);
+  const may = desk.permissions.mayAsk(readerOf(pressing), read.value.question.verb);
+  if (!may.ok) return noSuchRecord(answerId);
   const worked = await workOut(desk, read.value, read.value.question, live.value);
   if (!worked.ok) return worked;
   const [{ id }] = worked.value.answers;

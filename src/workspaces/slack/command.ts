@@ -34,7 +34,9 @@ export const answerCommand = async (commanding: Commanding, command: unknown): P
   const words = text.trim();
   const from = { team: team_id, channel: channel_id, person: user_id, message: null, thread: null };
   const replies = await repliesOrApology(log, async () =>
-    words === '' ? conversation.examples() : conversation.converse({ text: words, place: 'command', from }),
+    words === ''
+      ? conversation.examples({ place: 'command', from })
+      : conversation.converse({ text: words, place: 'command', from }),
   );
   await respond(response_url, replies);
 };

@@ -40,8 +40,10 @@ export type Converse = (asking: Asking) => Promise<readonly SpokenReply[]>;
 export type Conversation = {
   readonly converse: Converse;
   readonly press: (press: Press) => Promise<readonly SpokenReply[]>;
+  /** Finds out who is listening there. Before it is done nothing may be shown in the place. */
+  readonly ready: (asker: Pick<Asking, 'place' | 'from'>) => Promise<void>;
   /** Three questions that work here, for a mention without a word. */
-  readonly examples: () => readonly SpokenReply[];
+  readonly examples: (asker: Pick<Asking, 'place' | 'from'>) => Promise<readonly SpokenReply[]>;
 };
 
 /** `error` is for the operator: something that people did not get although they should have. */

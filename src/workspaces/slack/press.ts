@@ -79,6 +79,7 @@ export const answerPress = async (pressing: Pressing, body: unknown): Promise<vo
       from: fromOf(read.data),
     };
     const make = () => pressing.conversation.press(press);
+    if (!isPrivate) await pressing.conversation.ready(press);
     if (isPrivate) await pressing.respond(response_url, await repliesOrApology(pressing.log, make));
     else await answerIn(pressing, place, make);
   }

@@ -2,7 +2,7 @@ import { answerIn, type Posted, type ReplyPlace, type Speaking } from './answer.
 import { type Asked, type AskedQuestions, editWindowMs } from './asked.ts';
 import { headed } from './content.ts';
 import type { Heard } from './heard.ts';
-import type { Conversation, SeenEvents, SpokenReply } from './ports.ts';
+import type { Asking, Conversation, SeenEvents, SpokenReply } from './ports.ts';
 
 const editedNote = 'Reply to the edited question.';
 const supersededNote = 'Superseded: the question was edited; the newer reply stands below.';
@@ -29,14 +29,17 @@ const placeOf = (heard: Heard): ReplyPlace => ({
 const editAgeMs = (heard: Heard): number =>
   heard.editedTs === null ? 0 : (Number(heard.editedTs) - Number(heard.ts)) * 1_000;
 
+const askerOf = ({ direct, team, channel, user, ts, threadTs }: Heard): Pick<Asking, 'place' | 'from'> => ({
+  place: direct ? 'direct' : 'channel',
+  from: { team, channel, person: user, message: ts, thread: threadTs },
+});
+
 const produceFor =
   ({ conversation }: Questioning, heard: Heard, dress: (reply: SpokenReply) => SpokenReply) =>
   async (progress: (words: string) => void): Promise<readonly SpokenReply[]> => {
-    if (heard.words === '') return conversation.examples().map(dress);
-    const place = heard.direct ? 'direct' : 'channel';
-    const { team, channel, user: person, ts: message, threadTs: thread } = heard;
-    const from = { team, channel, person, message, thread };
-    const replies = await conversation.converse({ text: heard.words, place, from, progress });
+    const asker = askerOf(heard);
+    if (heard.words === '') return (await conversation.examples(asker)).map(dress);
+    const replies = await conversation.converse({ text: heard.words, ...asker, progress });
     return replies.map(dress);
   };
 
@@ -51,7 +54,10 @@ const answer = (
   heard: Heard,
   dress: (reply: SpokenReply) => SpokenReply,
 ): Promise<readonly Posted[]> => {
-  const replies = answerIn(questioning, placeOf(heard), produceFor(questioning, heard, dress));
+  // in a place that is not answered not even a placeholder may be seen
+  const replies = questioning.conversation
+    .ready(askerOf(heard))
+    .then(() => answerIn(questioning, placeOf(heard), produceFor(questioning, heard, dress)));
   questioning.asked.remember(heard.messageKey, { words: heard.words, replies });
   return replies;
 };

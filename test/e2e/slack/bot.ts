@@ -48,7 +48,8 @@ export const echo: Conversation = {
     ]);
   },
   press: ({ value }) => Promise.resolve([spoken(`Working of: ${value}`)]),
-  examples: () => [spoken('Try: interval KELP 60d', { kind: 'help' })],
+  ready: async () => {},
+  examples: async () => [spoken('Try: interval KELP 60d', { kind: 'help' })],
 };
 
 /** Answers each question only when the test says so. */

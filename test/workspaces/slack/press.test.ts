@@ -46,7 +46,8 @@ const setUp = () => {
         presses.push(press);
         return Promise.resolve([said]);
       },
-      examples: () => [said],
+      ready: async () => {},
+      examples: async () => [said],
     },
   };
 };
