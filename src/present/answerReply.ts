@@ -6,6 +6,7 @@ import { intervalMeanReply } from './compose/intervalMean.ts';
 import { intervalRatioReply } from './compose/intervalRatio.ts';
 import { intervalVolReply } from './compose/intervalVol.ts';
 import { needReply } from './compose/need.ts';
+import { onRecord } from './compose/parts.ts';
 import { shapeReply } from './compose/shape.ts';
 import { tailReply } from './compose/tail.ts';
 import { tailBeyondReply } from './compose/tailBeyond.ts';
@@ -56,6 +57,7 @@ const workingReply = (answer: Answer): Reply =>
       ...(answer.notes.length > 0 ? [{ head: 'Notes', lines: answer.notes.map(({ text }) => text) }] : []),
       { head: 'Sources', lines: answer.sources },
     ],
+    whole: onRecord(answer),
   });
 
 /** The working, posted beneath: the formula with this sample's numbers in it, step by step. */

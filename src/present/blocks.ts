@@ -1,5 +1,7 @@
+import { clipped, cutLines, firstLines, gathered, restInWords } from './limits/cut.ts';
+import { platformLimits as limits } from './limits/platformLimits.ts';
 import type { Button, Passage, Reply, Table } from './reply.ts';
-import { furtherWarnings, inWords, shownWarnings } from './words.ts';
+import { furtherWarnings, partsInWords, shownWarnings } from './words.ts';
 
 /** The platform's plain text object: nothing in it is ever read as markup, a link, a mention or an emoji. */
 export type PlainText = { readonly type: 'plain_text'; readonly text: string; readonly emoji: false };
@@ -25,75 +27,105 @@ export type Block =
 
 export type BlockMessage = { readonly text: string; readonly blocks: readonly Block[] };
 
-/** The platform's figures for a message, from its published block reference. */
-const longest = {
-  sectionText: 3000,
-  contextText: 2000,
-  fallbackText: 4000,
-  buttonText: 75,
-  buttonValue: 2000,
-};
+/** Room for the parts of a reply that are short by nature, so that table and passages have the rest of the message. */
+const room = { sentence: limits.section.text, warning: 1200, quietLine: 1500, caution: 600 };
 
-/** A message holds 50 blocks; the parts around the passages take at most ten. */
-const mostPassageBlocks = 40;
+/** The parts around the passages take at most ten of a message's blocks. */
+const mostPassages = limits.message.blocks - 10;
+
+/** Kept free for the lines that say how much is left out. */
+const noteRoom = 400;
 
 const emptyCell = '–';
 const zeroWidthJoiner = '\u200d';
 
-/** Cut at a word, with an ellipsis, so that the platform takes it. */
-const clipped = (text: string, room: number): string =>
-  text.length <= room ? text : `${text.slice(0, room - 1).replace(/\s+\S*$/, '')}…`;
-
-const plain = (text: string, room: number): PlainText => ({
+export const plain = (text: string, most: number): PlainText => ({
   type: 'plain_text',
-  text: clipped(text === '' ? emptyCell : text, room),
+  text: clipped(text === '' ? emptyCell : text, most),
   emoji: false,
 });
 
-const section = (text: string): Block => ({ type: 'section', text: plain(text, longest.sectionText) });
-
-const context = (texts: readonly string[]): Block => ({
-  type: 'context',
-  elements: texts.map((text) => plain(text, longest.contextText)),
+const section = (text: string, most: number = limits.section.text): Block => ({
+  type: 'section',
+  text: plain(text, most),
 });
 
-/** Lines gathered into as few texts as the room of a section allows. */
-const gathered = (lines: readonly string[]): readonly string[] => {
-  const texts: string[] = [];
-  for (const line of lines) {
-    const last = texts.at(-1);
-    if (last !== undefined && last.length + 1 + line.length <= longest.sectionText)
-      texts[texts.length - 1] = `${last}\n${line}`;
-    else texts.push(line);
+const context = (texts: readonly string[], most: number): Block => ({
+  type: 'context',
+  elements: texts.map((text) => plain(text, most)),
+});
+
+type Row = readonly { readonly type: 'raw_text'; readonly text: string }[];
+
+const row = (texts: readonly string[]): Row =>
+  texts.map((text) => ({ type: 'raw_text', text: text === '' ? emptyCell : text }));
+
+const lengthOf = (cells: Row): number => cells.reduce((sum, { text }) => sum + text.length, 0);
+
+/** The table with as many of its rows as have room, and how many have none. */
+const tableParts = (
+  table: Table,
+  most: number,
+): { readonly blocks: readonly Block[]; readonly restCount: number } => {
+  const columns = table.columns.slice(0, limits.table.columns);
+  const all = [
+    row(columns.map(({ head }) => head)),
+    ...table.rows.map((cells) => row(columns.map((_, index) => cells[index] ?? ''))),
+  ];
+  const shown: Row[] = [];
+  let used = 0;
+  for (const cells of all.slice(0, limits.table.rows)) {
+    used += lengthOf(cells);
+    if (used > most) break;
+    shown.push(cells);
   }
-  return texts;
+  const column_settings = columns.map(({ align }) => ({ align, is_wrapped: true }));
+  const restCount = table.rows.length - Math.max(0, shown.length - 1);
+  return { blocks: shown.length === 0 ? [] : [{ type: 'table', rows: shown, column_settings }], restCount };
 };
 
-const passageBlocks = ({ head, lines }: Passage): readonly Block[] =>
-  gathered([...(head === null ? [] : [head]), ...lines]).map(section);
+/** Passages as sections, cut after the last whole line that has room. */
+const passageBlocks = (passages: readonly Passage[], most: number, reply: Reply): readonly Block[] => {
+  const lines = passages.flatMap(({ head, lines: own }, index) =>
+    [...(head === null ? [] : [head]), ...own].map((line) => ({
+      line,
+      at: Math.min(index, mostPassages - 1),
+    })),
+  );
+  const { shown, restCount } = firstLines(
+    lines.map(({ line }) => line),
+    most,
+  );
+  const kept = lines.slice(0, shown.length);
+  const texts = [...new Set(kept.map(({ at }) => at))].flatMap((at) =>
+    gathered(
+      kept.filter((each) => each.at === at).map(({ line }) => line),
+      limits.section.text,
+    ),
+  );
+  return [...texts, ...(restCount > 0 ? [restInWords(restCount, 'line', reply)] : [])].map((text) =>
+    section(text),
+  );
+};
 
-const cell = (text: string) => ({ type: 'raw_text' as const, text: text === '' ? emptyCell : text });
+/** What a button carries. A question that is too long to stand there is left to the record. */
+const buttonValue = ({ answerId: id, question, added }: Button): string => {
+  const more = added === undefined ? {} : { added };
+  const whole = JSON.stringify({ id, question, ...more });
+  return whole.length <= limits.button.value ? whole : JSON.stringify({ id, ...more });
+};
 
-const tableBlock = ({ columns, rows }: Table): Block => ({
-  type: 'table',
-  rows: [
-    columns.map(({ head }) => cell(head)),
-    ...rows.map((row) => columns.map((_, index) => cell(row[index] ?? ''))),
-  ],
-  column_settings: columns.map(({ align }) => ({ align, is_wrapped: true })),
-});
-
-const buttonElement = ({ label, answerId, question, added }: Button, actionId: string) => ({
+const buttonElement = (button: Button, actionId: string) => ({
   type: 'button' as const,
   action_id: actionId,
-  text: plain(label, longest.buttonText),
-  value: JSON.stringify({ id: answerId, question, ...(added === undefined ? {} : { added }) }),
-  accessibility_label: clipped(`${label} of ${answerId}`, longest.buttonText),
+  text: plain(button.label, limits.button.text),
+  value: buttonValue(button),
+  accessibility_label: clipped(`${button.label} of ${button.answerId}`, limits.button.accessibilityLabel),
 });
 
 /** Several buttons of one kind are told apart by what follows a full stop in their action id. */
 const buttonElements = (buttons: readonly Button[]) =>
-  buttons.map((button, index) => {
+  buttons.slice(0, limits.actions.elements).map((button, index) => {
     const before = buttons.slice(0, index).filter(({ action }) => action === button.action).length;
     return buttonElement(button, before === 0 ? button.action : `${button.action}.${before + 1}`);
   });
@@ -107,16 +139,57 @@ export const escapeFallback = (text: string): string =>
     .replace(/[@#]/g, (mark) => `${mark}${zeroWidthJoiner}`)
     .replace(/:\/\//g, `:${zeroWidthJoiner}//`);
 
+/** All that notifications and screen readers get: where there is no room for everything, what is told at length is cut. */
+const fallbackText = (reply: Reply): string => {
+  const { head, body, foot } = partsInWords(reply);
+  const escaped = (lines: readonly string[]) => lines.map(escapeFallback);
+  const ends = [...escaped(head), ...escaped(foot)].join('\n').length;
+  const middle = cutLines(escaped(body), limits.message.textAdvised - ends - 2, (count) =>
+    escapeFallback(restInWords(count, 'line', reply)),
+  );
+  return clipped([...escaped(head), ...middle, ...escaped(foot)].join('\n'), limits.message.textAdvised);
+};
+
+const footBlocks = (reply: Reply): readonly Block[] => {
+  const further = furtherWarnings(reply);
+  const warnings = shownWarnings(reply).map((warning) => `Caution: ${warning}`);
+  return [
+    ...(warnings.length > 0
+      ? [context(further === null ? warnings : [...warnings, further], room.warning)]
+      : []),
+    ...(reply.quietLine === null ? [] : [context([reply.quietLine], room.quietLine)]),
+    ...(reply.caution === null ? [] : [context([reply.caution], room.caution)]),
+    ...(reply.buttons.length > 0
+      ? [{ type: 'actions' as const, elements: buttonElements(reply.buttons) }]
+      : []),
+  ];
+};
+
+const charactersOf = (blocks: readonly Block[]): number =>
+  blocks
+    .map((block) => {
+      if (block.type === 'section') return block.text.text.length;
+      if (block.type === 'table') return block.rows.reduce((sum, cells) => sum + lengthOf(cells), 0);
+      return block.elements.reduce(
+        (sum, element) => sum + (element.type === 'button' ? element.text.text : element.text).length,
+        0,
+      );
+    })
+    .reduce((sum, each) => sum + each, 0);
+
 /** The reply as a message of the workspace: blocks for the eye, and one text for notifications and screen readers. */
 export const toBlocks = (reply: Reply): BlockMessage => {
-  const further = furtherWarnings(reply);
-  const blocks: Block[] = [section(reply.sentence)];
-  if (reply.table !== null) blocks.push(tableBlock(reply.table));
-  blocks.push(...reply.passages.flatMap(passageBlocks).slice(0, mostPassageBlocks));
-  const warnings = shownWarnings(reply).map((warning) => `Caution: ${warning}`);
-  if (warnings.length > 0) blocks.push(context(further === null ? warnings : [...warnings, further]));
-  if (reply.quietLine !== null) blocks.push(context([reply.quietLine]));
-  if (reply.caution !== null) blocks.push(context([reply.caution]));
-  if (reply.buttons.length > 0) blocks.push({ type: 'actions', elements: buttonElements(reply.buttons) });
-  return { text: clipped(escapeFallback(inWords(reply)), longest.fallbackText), blocks };
+  const sentence = section(reply.sentence, room.sentence);
+  const foot = footBlocks(reply);
+  const most = limits.message.blocksTotalCharactersAdvised - noteRoom - charactersOf([sentence, ...foot]);
+  const table =
+    reply.table === null
+      ? { blocks: [], restCount: 0 }
+      : tableParts(reply.table, Math.min(most, limits.table.charactersAllCells));
+  const rowsLeft = table.restCount > 0 ? [section(restInWords(table.restCount, 'row', reply))] : [];
+  const passages = passageBlocks(reply.passages, most - charactersOf(table.blocks), reply);
+  return {
+    text: fallbackText(reply),
+    blocks: [sentence, ...table.blocks, ...rowsLeft, ...passages, ...foot],
+  };
 };

@@ -49,6 +49,8 @@ export type Reply = {
   readonly quietLine: string | null;
   readonly caution: string | null;
   readonly buttons: readonly Button[];
+  /** Where all of it is to be had, said where a medium has room for a part only. */
+  readonly whole: string | null;
 };
 
 /** The caution at the foot of every answer; the full text stands in help. */
@@ -65,6 +67,7 @@ const blank: Omit<Reply, 'kind' | 'sentence'> = {
   quietLine: null,
   caution: null,
   buttons: [],
+  whole: null,
 };
 
 export const reply = (

@@ -12,16 +12,23 @@ export const furtherWarnings = (reply: Reply): string | null => {
   return rest > 0 ? `and ${counted(rest, 'more caution')} with the working` : null;
 };
 
-/** The whole reply as running words: what a notification shows and a screen reader reads. */
-export const inWords = (reply: Reply): string => {
+/** A reply as running words in three parts, a line each: the verdict and its figures, what is told at length, and the foot. */
+export const partsInWords = (reply: Reply) => {
   const further = furtherWarnings(reply);
-  return [
-    ended(reply.sentence),
-    ...(reply.figuresInWords === '' ? [] : [ended(reply.figuresInWords)]),
-    ...reply.passages.map(({ head, lines }) => [...(head === null ? [] : [head]), ...lines].join('\n')),
-    ...shownWarnings(reply).map((warning) => `Caution: ${ended(warning)}`),
-    ...(further === null ? [] : [ended(further.charAt(0).toUpperCase() + further.slice(1))]),
-    ...(reply.quietLine === null ? [] : [ended(reply.quietLine)]),
-    ...(reply.caution === null ? [] : [reply.caution]),
-  ].join('\n');
+  return {
+    head: [ended(reply.sentence), ...(reply.figuresInWords === '' ? [] : [ended(reply.figuresInWords)])],
+    body: reply.passages.flatMap(({ head, lines }) => [...(head === null ? [] : [head]), ...lines]),
+    foot: [
+      ...shownWarnings(reply).map((warning) => `Caution: ${ended(warning)}`),
+      ...(further === null ? [] : [ended(further.charAt(0).toUpperCase() + further.slice(1))]),
+      ...(reply.quietLine === null ? [] : [ended(reply.quietLine)]),
+      ...(reply.caution === null ? [] : [reply.caution]),
+    ],
+  };
+};
+
+/** The whole reply as running words: what goes on record, and what a program is given. */
+export const inWords = (reply: Reply): string => {
+  const { head, body, foot } = partsInWords(reply);
+  return [...head, ...body, ...foot].join('\n');
 };

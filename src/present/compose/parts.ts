@@ -32,6 +32,9 @@ const buttonsOf = ({ id, question }: Answer): readonly Button[] => [
   { action: 'working', label: 'Show the working', answerId: id, question },
 ];
 
+/** Where the whole of a long answer stands. */
+export const onRecord = ({ id }: Pick<Answer, 'id'>): string => `the whole is on record as ${id}`;
+
 /** The frame that every answer's reply has: warnings, quiet line, caution and buttons around its own sentence and table. */
 export const framed = (
   answer: Answer,
@@ -43,6 +46,7 @@ export const framed = (
     quietLine: quietLine(answer),
     caution,
     buttons: buttonsOf(answer),
+    whole: onRecord(answer),
     ...parts,
   });
 
