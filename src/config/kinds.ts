@@ -52,6 +52,12 @@ export const decimalSize = readFrom((text): number | null => {
   return fraction > 0 && fraction <= largestSize ? fraction : null;
 });
 
+/** A time such as `08:30`, as minutes after midnight. */
+export const timeOfDay = readFrom((text): number | null => {
+  const parts = /^([01]?\d|2[0-3]):([0-5]\d)$/.exec(text);
+  return parts === null ? null : Number(parts[1]) * 60 + Number(parts[2]);
+});
+
 const isZone = (zone: string): boolean => {
   try {
     return new Intl.DateTimeFormat('en', { timeZone: zone }).format(0) !== '';

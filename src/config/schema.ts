@@ -1,8 +1,10 @@
 import { z } from 'zod';
+import { digests } from './digestSchema.ts';
 import { feed } from './feedSchema.ts';
 import { described } from './internal/described.ts';
 import { decimalSize, defaultWindow, ianaZone, levelOfAtLeastHalf, probability } from './kinds.ts';
 import { permissions } from './permissionsSchema.ts';
+import { records } from './recordsSchema.ts';
 
 const window = (fallback: string) =>
   described({
@@ -79,19 +81,13 @@ const slack = z.strictObject({
     says: 'answer follow-ups without a mention in threads where the bot has just answered',
     expects: 'true or false',
   }).default(false),
-});
-
-const records = z.strictObject({
-  path: described({
-    kind: z.string().trim().min(1),
-    says: 'file in which answers are kept on record; a relative path starts at the folder of the program',
-    expects: 'the path of a file, which is made where there is none',
-  }).default('.leadsman/records.db'),
-  keepDays: described({
-    kind: z.int().min(1).max(36_500).nullable(),
-    says: 'how long an asking and its answer are kept; what is older is deleted and leaves a trace of its deletion',
-    expects: 'a whole number of days from 1 to 36500, or null for ever',
-  }).default(null),
+  whenUnsure: described({
+    kind: z.enum(['leave', 'repeat']),
+    says:
+      'what to do with a post whose acceptance the platform did not confirm, where the bot may not read the history of ' +
+      'channels: leave it, so that it may be missing, or repeat it, so that it may stand twice',
+    expects: 'leave or repeat',
+  }).default('leave'),
 });
 
 /** Every setting with its description, its default and what may stand there. Help and the example file are printed from it. */
@@ -115,6 +111,7 @@ export const settingsSchema = z.strictObject({
     expects: 'a size such as 5bp or 0.05%, above zero and at most 10%',
   }).prefault('5bp'),
   defaults: defaults.prefault({}),
+  digests: digests.prefault({}),
   workspace: described({
     kind: z.enum(['auto', 'slack', 'terminal']),
     says: 'where people ask; auto takes Slack when its tokens are set in the environment and the terminal when none is',

@@ -1,6 +1,7 @@
 import type { Day } from '../terms/day.ts';
 import type { Level } from '../terms/level.ts';
 import type { Window } from '../terms/window.ts';
+import type { TailModel } from './question.ts';
 
 /** What the reader of questions must know of the feed and the desk. */
 export type Vocabulary = {
@@ -25,6 +26,12 @@ export type QuestionDefaults = {
   readonly shape: { readonly window: Window; readonly confidence: Level };
   /** `window` holds the days that are judged, `estimationReturns` the returns behind each day's figure. */
   readonly backtest: WindowAndLevel & { readonly estimationReturns: number };
+  /** `minutes` after midnight and the zone of a scheduled post; the figures that it and a watch are about. */
+  readonly digest: WindowAndLevel & {
+    readonly model: TailModel;
+    readonly minutes: number;
+    readonly timeZone: string;
+  };
 };
 
 export type ReadContext = {

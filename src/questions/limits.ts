@@ -3,6 +3,8 @@ export const limits = {
   messageCharacters: 2000,
   questionsPerMessage: 3,
   tickersPerQuestion: 5,
+  /** As many lines as still fit in one table of the workspace with their figures. */
+  tickersPerDigest: 50,
   /** A word of the person is repeated to them up to this length. */
   shownCharacters: 40,
   suggestionsPerProblem: 3,

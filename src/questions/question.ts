@@ -3,6 +3,7 @@ import type { Level } from '../terms/level.ts';
 import type { Position } from '../terms/problem.ts';
 import type { ReturnType } from '../terms/returns.ts';
 import type { Side } from '../terms/side.ts';
+import type { Schedule, ScheduleDays } from '../terms/subscriptions.ts';
 import type { Window } from '../terms/window.ts';
 
 /** A size as a decimal fraction per day or per year: 20bp is 0.002. */
@@ -117,6 +118,56 @@ export type RecordsQuestion = {
   readonly verify: boolean;
 };
 
+/** What a digest says of each of its tickers: the tail figure of this model over this window. */
+export type DigestFigure = {
+  readonly window: Window;
+  readonly tailLevel: Level;
+  readonly model: TailModel;
+};
+
+/** What is to be another way in a digest; null and no tickers: as it was. */
+export type DigestChange = {
+  readonly tickers: readonly string[];
+  readonly days: ScheduleDays | null;
+  readonly minutes: number | null;
+  readonly timeZone: string | null;
+  readonly window: Window | null;
+  readonly tailLevel: Level | null;
+  readonly model: TailModel | null;
+};
+
+/** A scheduled post: made, listed, shown now, paused, resumed, changed, stopped. */
+export type DigestQuestion = { readonly verb: 'digest' } & (
+  | ({
+      readonly do: 'add';
+      readonly tickers: readonly string[];
+      readonly schedule: Schedule;
+    } & DigestFigure)
+  | { readonly do: 'list' }
+  | { readonly do: 'now' | 'pause' | 'resume' | 'stop'; readonly id: string }
+  | { readonly do: 'change'; readonly id: string; readonly change: DigestChange }
+);
+
+/** The line that a watched figure crosses, as a positive decimal fraction. */
+export type Crossing = { readonly side: 'above' | 'below'; readonly fraction: number };
+
+/** A line that somebody wants to be told of: made, listed, paused, resumed, stopped. */
+export type WatchQuestion = { readonly verb: 'watch' } & (
+  | {
+      readonly do: 'add';
+      readonly watched: 'var' | 'es' | 'loss';
+      /** null for a loss, which is held against the tail figure itself. */
+      readonly crossing: Crossing | null;
+      /** The tail question behind it, of one model. */
+      readonly tail: TailQuestion;
+    }
+  | { readonly do: 'list' }
+  | { readonly do: 'pause' | 'resume' | 'stop'; readonly id: string }
+);
+
+/** What is asked of digests and watches. */
+export type SubscriptionQuestion = DigestQuestion | WatchQuestion;
+
 /** What is asked of the records rather than of the prices. */
 export type RecordQuestion = AgainQuestion | RecordsQuestion;
 
@@ -129,7 +180,12 @@ export type StatisticalQuestion =
   | ShapeQuestion
   | BacktestQuestion;
 
-export type Question = StatisticalQuestion | RecordQuestion | HelpQuestion | FeedQuestion;
+export type Question =
+  | StatisticalQuestion
+  | RecordQuestion
+  | SubscriptionQuestion
+  | HelpQuestion
+  | FeedQuestion;
 
 export type Verb = Question['verb'];
 

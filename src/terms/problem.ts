@@ -15,6 +15,7 @@ export const problemCodes = {
   levelOutside: 'a level outside its range',
   sizeOutside: 'a size outside its range',
   badDate: 'a date that does not exist or is not written as asked',
+  badTime: 'a time of day that does not exist or a time zone that is not known',
   tooManyLines: 'more questions in one message than are answered',
   messageTooLong: 'a message longer than is read',
   // the data a question meets

@@ -1,7 +1,18 @@
-import type { Question, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
+import type {
+  Question,
+  RecordQuestion,
+  StatisticalQuestion,
+  SubscriptionQuestion,
+} from '../questions/question.ts';
 
 export const isOfRecords = (question: Question): question is RecordQuestion =>
   question.verb === 'again' || question.verb === 'records';
 
+export const isOfSubscriptions = (question: Question): question is SubscriptionQuestion =>
+  question.verb === 'digest' || question.verb === 'watch';
+
 export const isStatistical = (question: Question): question is StatisticalQuestion =>
-  question.verb !== 'help' && question.verb !== 'feed' && !isOfRecords(question);
+  question.verb !== 'help' &&
+  question.verb !== 'feed' &&
+  !isOfRecords(question) &&
+  !isOfSubscriptions(question);

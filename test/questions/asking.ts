@@ -24,6 +24,8 @@ const everyVerb = [
   'need',
   'compare',
   'backtest',
+  'digest',
+  'watch',
   'again',
   'records',
   'feed',
@@ -48,7 +50,13 @@ export const tickers = [
 
 /** A desk on Friday 27 November 2026. */
 export const context: ReadContext = {
-  vocabulary: createVocabulary(tickers, new Map([['London', 'Europe/London']])),
+  vocabulary: createVocabulary(
+    tickers,
+    new Map([
+      ['London', 'Europe/London'],
+      ['New York', 'America/New_York'],
+    ]),
+  ),
   today: dayOf('2026-11-27'),
   builtVerbs: everyVerb,
   defaults: {
@@ -59,6 +67,13 @@ export const context: ReadContext = {
     tail: { window: returns(500), level: percent(99), confidence: percent(95), horizonDays: 1 },
     shape: { window: returns(500), confidence: percent(95) },
     backtest: { window: returns(500), level: percent(99), estimationReturns: 250 },
+    digest: {
+      window: returns(500),
+      level: percent(99),
+      model: 'student',
+      minutes: 510,
+      timeZone: 'Europe/London',
+    },
   },
 };
 

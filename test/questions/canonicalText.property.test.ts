@@ -188,6 +188,115 @@ const question: fc.Arbitrary<Question> = fc.oneof(
   }),
 );
 
+const minutes = fc.integer({ min: 0, max: 1439 });
+const zone = fc.constantFrom(
+  'UTC',
+  'Europe/London',
+  'America/New_York',
+  'America/Argentina/Ushuaia',
+  'Asia/Tokyo',
+);
+const scheduleDays = fc.oneof(
+  fc
+    .constantFrom(
+      'sessions' as const,
+      'weekdays' as const,
+      'daily' as const,
+      'monthStart' as const,
+      'monthEnd' as const,
+    )
+    .map((kind) => ({ kind })),
+  fc.subarray([1, 2, 3, 4, 5, 6, 7], { minLength: 1 }).map((weekdays) => ({ kind: 'on' as const, weekdays })),
+);
+const someModel = fc.constantFrom(...tailModels);
+const digestId = fc.constantFrom('D-1', 'D-12', 'D-999999999');
+const watchId = fc.constantFrom('W-1', 'W-7');
+
+const digest = fc.oneof(
+  fc.record({
+    verb: fc.constant('digest' as const),
+    do: fc.constant('add' as const),
+    tickers: fc.uniqueArray(ticker, { minLength: 1 }),
+    schedule: fc.record({ days: scheduleDays, minutes, timeZone: zone }),
+    window,
+    tailLevel: level,
+    model: someModel,
+  }),
+  fc.constant({ verb: 'digest', do: 'list' } as const),
+  fc.record({
+    verb: fc.constant('digest' as const),
+    do: fc.constantFrom('now' as const, 'pause' as const, 'resume' as const, 'stop' as const),
+    id: digestId,
+  }),
+  fc.record({
+    verb: fc.constant('digest' as const),
+    do: fc.constant('change' as const),
+    id: digestId,
+    change: fc.record({
+      tickers: fc.uniqueArray(ticker),
+      days: fc.option(scheduleDays),
+      minutes,
+      timeZone: fc.option(zone),
+      window: fc.option(window),
+      tailLevel: fc.option(level),
+      model,
+    }),
+  }),
+);
+
+const watchedTail = fc.record({
+  verb: fc.constant('tail' as const),
+  ticker,
+  ...sample,
+  tailLevel: level,
+  confidence: level,
+  horizonDays: fc.constant(1),
+  exposure: fc.constant(null),
+  model: someModel,
+  beyond: fc.constant(null),
+});
+
+const watch = fc.oneof(
+  fc.record({
+    verb: fc.constant('watch' as const),
+    do: fc.constant('add' as const),
+    watched: fc.constantFrom('var' as const, 'es' as const),
+    crossing: fc.record({
+      side: fc.constantFrom('above' as const, 'below' as const),
+      fraction: hundredthsOfBasisPoint(1, 999_999),
+    }),
+    tail: fc
+      .tuple(watchedTail, fc.integer({ min: 1, max: 250 }))
+      .map(([tail, horizonDays]) => ({ ...tail, horizonDays })),
+  }),
+  fc.record({
+    verb: fc.constant('watch' as const),
+    do: fc.constant('add' as const),
+    watched: fc.constant('loss' as const),
+    crossing: fc.constant(null),
+    tail: watchedTail,
+  }),
+  fc.constant({ verb: 'watch', do: 'list' } as const),
+  fc.record({
+    verb: fc.constant('watch' as const),
+    do: fc.constantFrom('pause' as const, 'resume' as const, 'stop' as const),
+    id: watchId,
+  }),
+);
+
+test('a digest and a watch are read from their canonical text as they are, and keep it', () => {
+  fc.assert(
+    fc.property(fc.oneof(digest, watch), (asked) => {
+      const text = canonicalText(asked);
+      const read = questionIn(text);
+      expect(read.question).toEqual(asked);
+      expect(read.canonical).toBe(text);
+      expect(read.assumed).toEqual([]);
+    }),
+    settings,
+  );
+});
+
 test('the canonical text is read as the same question, with nothing assumed and the same text again', () => {
   fc.assert(
     fc.property(question, (asked) => {

@@ -2,12 +2,18 @@ import { figureTopics } from './figureTopics.ts';
 import { languageTopics } from './languageTopics.ts';
 import { notAskedTopics } from './notAskedTopics.ts';
 import { recordTopics } from './recordTopics.ts';
+import { subscriptionTopics } from './subscriptionTopics.ts';
 import { tailTopics } from './tailTopics.ts';
 import type { HelpTopic, NotAskedTopic, VerbTopic } from './topic.ts';
 
 export type { HelpTopic, NotAskedTopic, VerbTopic } from './topic.ts';
 
-export const verbTopics: readonly VerbTopic[] = [...figureTopics, ...tailTopics, ...recordTopics];
+export const verbTopics: readonly VerbTopic[] = [
+  ...figureTopics,
+  ...tailTopics,
+  ...subscriptionTopics,
+  ...recordTopics,
+];
 
 export const helpTopics: readonly HelpTopic[] = [...verbTopics, ...languageTopics, ...notAskedTopics];
 

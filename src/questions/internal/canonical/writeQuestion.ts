@@ -11,9 +11,11 @@ import type {
   RecordsQuestion,
   Sample,
   ShapeQuestion,
+  SubscriptionQuestion,
   TailQuestion,
 } from '../../question.ts';
 import { writeExposure, writeFraction, writeRatio, writeSize } from './writeFigures.ts';
+import { digestWords, watchWords } from './writeSubscription.ts';
 import { writeTicker } from './writeTicker.ts';
 
 /** Words of a question in their fixed order; empty ones fall away. */
@@ -106,10 +108,24 @@ const records = (question: RecordsQuestion, subject: string): Words => [
   when(question.verify, 'verify'),
 ];
 
+const subjectOfSubscription = (question: SubscriptionQuestion): string => {
+  if (question.do === 'list') return '';
+  if (question.do !== 'add') return question.id;
+  return question.verb === 'digest'
+    ? question.tickers.map(writeTicker).join(' ')
+    : writeTicker(question.tail.ticker);
+};
+
+const subscription = (question: SubscriptionQuestion, subject: string): Words =>
+  question.verb === 'digest'
+    ? digestWords(question, subject)
+    : watchWords(question, subject, question.do === 'add' ? tail(question.tail, subject) : []);
+
 /** The tickers or ids that a question is about, as the question writes them. */
 export const subjectText = (question: Question): string => {
   if (question.verb === 'help') return question.topic ?? '';
   if (question.verb === 'again') return question.ids.join(' ');
+  if (question.verb === 'digest' || question.verb === 'watch') return subjectOfSubscription(question);
   if (question.verb === 'compare' && question.between === 'tickers')
     return question.tickers.map(writeTicker).join(' ');
   return question.ticker === null ? '' : writeTicker(question.ticker);
@@ -133,6 +149,9 @@ const wordsOf = (question: Question, subject: string): Words => {
       return backtest(question, subject);
     case 'records':
       return records(question, subject);
+    case 'digest':
+    case 'watch':
+      return subscription(question, subject);
     case 'again':
     case 'feed':
     case 'help':

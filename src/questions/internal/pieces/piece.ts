@@ -1,7 +1,8 @@
 import type { Day } from '../../../terms/day.ts';
 import type { Level } from '../../../terms/level.ts';
+import type { ScheduleDays } from '../../../terms/subscriptions.ts';
 import type { Window } from '../../../terms/window.ts';
-import type { Exposure, TailModel, Wish } from '../../question.ts';
+import type { Crossing, Exposure, TailModel, Wish } from '../../question.ts';
 import type { Fault } from '../faults/fault.ts';
 
 /** What a recogniser knows of some words, before it is clear what the verb makes of them. */
@@ -35,7 +36,16 @@ export type Piece =
   | { readonly kind: 'topic'; readonly topic: string }
   | { readonly kind: 'verify' }
   | { readonly kind: 'recordId'; readonly id: string }
-  | { readonly kind: 'subscriptionId'; readonly id: string };
+  | { readonly kind: 'subscriptionId'; readonly id: string }
+  /** What is to be done with a digest or a watch. */
+  | { readonly kind: 'doing'; readonly doing: Doing }
+  | { readonly kind: 'scheduleDays'; readonly days: ScheduleDays }
+  | { readonly kind: 'clock'; readonly minutes: number }
+  | { readonly kind: 'timeZone'; readonly timeZone: string }
+  | { readonly kind: 'watched'; readonly watched: 'var' | 'es' | 'loss' }
+  | { readonly kind: 'crossing'; readonly crossing: Crossing };
+
+export type Doing = 'list' | 'now' | 'pause' | 'resume' | 'change' | 'stop';
 
 export type PieceKind = Piece['kind'];
 

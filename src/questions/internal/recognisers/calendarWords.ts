@@ -37,3 +37,6 @@ export const monthName = (month: number): string => {
   const name = months[month - 1] ?? '';
   return name.charAt(0).toUpperCase() + name.slice(1);
 };
+
+/** `mon` for 1: ISO 8601 weekday numbers as schedules write them. */
+export const weekdayWord = (weekday: number): string => (weekdays[weekday - 1] ?? '').slice(0, 3);

@@ -3,7 +3,7 @@ import type { Word } from '../words/word.ts';
 import { faultAt, found, foundFault, type Recogniser } from './recogniser.ts';
 
 /** Powers of ten of the units: a basis point is a hundredth of a percent. */
-const sizeUnits: ReadonlyMap<string, number> = new Map([
+export const sizeUnits: ReadonlyMap<string, number> = new Map([
   ['bp', -4],
   ['bps', -4],
   ['%', -2],

@@ -10,6 +10,8 @@ import { confidence, level, percent, power } from './levels.ts';
 import { model } from './models.ts';
 import { plainWords } from './plainWords.ts';
 import type { Found, Line, Recogniser } from './recogniser.ts';
+import { scheduleDayWords } from './schedule/days.ts';
+import { doingWords } from './schedule/doings.ts';
 import { since } from './since.ts';
 import { basisPoints, beyond, sizeUnitWords } from './sizes.ts';
 import { splitDay } from './splitDay.ts';
@@ -63,6 +65,11 @@ export const languageWords: ReadonlySet<string> = new Set([
   ...sizeUnitWords,
   ...amountWords,
   ...calendarWords,
+  ...scheduleDayWords,
+  ...doingWords,
+  'loss',
+  'losses',
+  'utc',
   'window',
   'picture',
   'json',

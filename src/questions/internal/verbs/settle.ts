@@ -40,12 +40,21 @@ const percentAsLevel = (
     : attained(replacePiece(pieces, placed, { kind: 'level', level }));
 };
 
-/** For verbs without a size: percentages are levels, and bare numbers nothing. */
-export const settleLevels: Settle = (line, pieces) => {
+/**
+ * For verbs without a size: percentages are levels, and bare numbers nothing. `others` are texts that a bare number may
+ * be short for with this verb alone.
+ */
+export const settleLevels = (
+  line: Line,
+  pieces: readonly Placed[],
+  others: (decimal: string) => readonly string[] = () => [],
+): ReturnType<Settle> => {
   const [number] = allOf(pieces, 'number');
   const { today } = line.context;
   if (number !== undefined)
-    return faulty(bareNumberFault(line, number, (decimal) => levelOrWindow(decimal, today)));
+    return faulty(
+      bareNumberFault(line, number, (decimal) => [...others(decimal), ...levelOrWindow(decimal, today)]),
+    );
   let settled = pieces;
   for (const placed of allOf(pieces, 'percent')) {
     const attempt = percentAsLevel(line, settled, placed);

@@ -2,6 +2,7 @@ import { again } from './again.ts';
 import { backtest } from './backtest.ts';
 import { claim } from './claim.ts';
 import { compare } from './compare.ts';
+import { digest } from './digest.ts';
 import { feed } from './feed.ts';
 import { help } from './help.ts';
 import { interval } from './interval.ts';
@@ -10,6 +11,7 @@ import { records } from './records.ts';
 import { shape } from './shape.ts';
 import { tail } from './tail.ts';
 import type { VerbReader } from './verbReader.ts';
+import { watch } from './watch.ts';
 
 /** The verbs that can be read whole. */
 const readers: readonly VerbReader[] = [
@@ -20,6 +22,8 @@ const readers: readonly VerbReader[] = [
   need,
   compare,
   backtest,
+  digest,
+  watch,
   again,
   records,
   feed,
