@@ -21,6 +21,14 @@ import { openEnvironment } from './environment.mjs';
  */
 const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 5000);
 
+/** Without mutants each test passes a mutated place a known number of times; this often at least it may. */
+const leastHitLimit = 1_000;
+const hitFactor = 100;
+
+const goneTest = () => {
+  throw new Error('the test is no longer declared');
+};
+
 const instrumented = () => {
   globalThis.__stryker__ ??= {};
   return globalThis.__stryker__;
@@ -84,9 +92,9 @@ class InProcessRunner {
   chosen(mutant, isStatic) {
     const { durations, coverage } = this.learned;
     const candidates = Object.keys(durations)
-      .map((id) => ({ id, cost: durations[id], reaches: coverage[id]?.[mutant] !== undefined }))
-      .filter(({ reaches }) => isStatic || reaches)
-      .sort((a, b) => Number(b.reaches) - Number(a.reaches) || a.cost - b.cost);
+      .map((id) => ({ id, cost: durations[id], hits: coverage[id]?.[mutant] ?? 0 }))
+      .filter(({ hits }) => isStatic || hits > 0)
+      .sort((a, b) => Number(b.hits > 0) - Number(a.hits > 0) || a.cost - b.cost);
     let spent = 0;
     return candidates.filter(({ cost }, index) => {
       spent += cost;
@@ -94,19 +102,21 @@ class InProcessRunner {
     });
   }
 
-  /** The first test that fails with the mutant, or none. */
+  /** The first test that fails with the mutant, or none; `endless` where the mutant was passed a hundred times as often as without it. */
   async judge({ activeMutant, reloadEnvironment, hitLimit }) {
     const stryker = instrumented();
     Object.assign(stryker, { hitCount: 0, hitLimit, activeMutant: activeMutant.id });
     let nrOfTests = 0;
     try {
       if (reloadEnvironment) await this.load();
-      for (const { id } of this.chosen(activeMutant.id, reloadEnvironment)) {
+      for (const { id, hits } of this.chosen(activeMutant.id, reloadEnvironment)) {
         nrOfTests += 1;
-        const test = this.tests.get(id);
-        const failureMessage =
-          test === undefined ? 'the test is no longer declared' : await failureOf(test.body);
-        if (failureMessage !== null) return { killer: id, failureMessage, nrOfTests };
+        const limit = hits > 0 ? leastHitLimit + hitFactor * hits : hitLimit;
+        Object.assign(stryker, { hitCount: 0, hitLimit: limit });
+        const body = this.tests.get(id)?.body ?? goneTest;
+        const failureMessage = await failureOf(body);
+        const endless = determineHitLimitReached(stryker.hitCount, limit);
+        if (endless || failureMessage !== null) return { killer: id, failureMessage, nrOfTests, endless };
       }
       return { killer: null, nrOfTests };
     } catch (error) {
@@ -123,12 +133,11 @@ class InProcessRunner {
 
   async mutantRun(options) {
     if (this.environment === null) await this.resume();
-    const { reloadEnvironment, hitLimit } = options;
+    const { reloadEnvironment } = options;
     for (;;) {
       const wasFresh = this.isFresh || reloadEnvironment;
       this.isFresh = false;
-      const { killer, failureMessage, nrOfTests } = await this.judge(options);
-      const endless = determineHitLimitReached(instrumented().hitCount, hitLimit);
+      const { killer, failureMessage, nrOfTests, endless } = await this.judge(options);
       const isSound = !reloadEnvironment && (killer === null || (await this.passesWithoutMutant(killer)));
       if (!isSound) await this.load();
       if (!isSound && !wasFresh) continue;

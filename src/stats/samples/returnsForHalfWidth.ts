@@ -19,7 +19,7 @@ export const returnsForHalfWidth = (widthInDeviations: number, level: Level, sid
     throw new RangeError(`returnsForHalfWidth: expected a half-width above 0, got ${widthInDeviations}`);
   const normal = criticalNormal(level, side);
   if (normal <= 0) return 2;
-  const guess = (normal / widthInDeviations) ** 2 + normal ** 2 / 2;
+  const guess = (normal / widthInDeviations) ** 2 + (normal ** 2 + 1) / 2;
   if (guess > mostSearched) return Math.ceil(guess);
   return smallestCount(
     (count) => criticalT(level, side, count - 1) <= widthInDeviations * Math.sqrt(count),

@@ -1,9 +1,10 @@
 import { describe, expect, test } from 'vitest';
 import { normalQuantile } from '../../../src/stats/distributions/normal.ts';
 import { need } from '../../../src/stats/samples/need.ts';
+import { claimPower, detectableNoncentrality } from '../../../src/stats/samples/power.ts';
 import { returnsForHalfWidth } from '../../../src/stats/samples/returnsForHalfWidth.ts';
 import { returnsForPower } from '../../../src/stats/samples/returnsForPower.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level, level95 } from '../levels.ts';
@@ -26,9 +27,55 @@ describe('returns for a half-width', () => {
     expect(returnsForHalfWidth(width, level(text))).toBe(count);
   });
 
-  test('beyond a million by formula: 4 times as many for half the width', () => {
-    const count = returnsForHalfWidth(0.001, level95);
-    expect(relativeError(returnsForHalfWidth(0.0005, level95), 4 * count)).toBeLessThan(1e-5);
+  test.each([
+    [0.001, '0.95', 3_841_462],
+    [0.0005, '0.95', 15_365_838],
+    [0.0015, '0.95', 1_707_318],
+    [0.0007, '0.99', 13_540_610],
+  ])('beyond a million by formula, and still exact: %d deviations at %s', (width, text, count) => {
+    expect(returnsForHalfWidth(width, level(text))).toBe(count);
+  });
+
+  test('a one-sided level of 50% or less has nothing to narrow, however small the width', () => {
+    expect(returnsForHalfWidth(1e-4, level('0.4'), 'above')).toBe(2);
+    expect(returnsForHalfWidth(1e-4, level('0.5'), 'above')).toBe(2);
+  });
+
+  test.each([0, -0.1, Number.NaN])('%d deviations are no width', (width) => {
+    expect(() => returnsForHalfWidth(width, level95)).toThrow(
+      'returnsForHalfWidth: expected a half-width above 0',
+    );
+  });
+});
+
+describe('returns for a power', () => {
+  // mpmath 1.3.0 at 25 digits: E[Φ(δ − cS) + Φ(−δ − cS)] over S = √(χ²/ν), c the t quantile: the first n at or above the
+  // power. The wrong tail saves 5 returns at 80% and 8% of them all at 10%.
+  test.each([
+    [0.002, '0.8', 1_962_218],
+    [0.001, '0.9', 10_507_422],
+    [0.0005, '0.1', 1_702_287],
+  ])(
+    'beyond a million by formula, both tails counted: %d deviations at power %s',
+    (difference, text, count) => {
+      expect(returnsForPower(difference, level(text), { level: level95, side: 'both' })).toBe(count);
+    },
+  );
+
+  test('a power that chance alone gives needs two returns, however small the difference', () => {
+    expect(returnsForPower(1e-5, level('0.01'), { level: level95, side: 'both' })).toBe(2);
+  });
+
+  test.each([0, -0.1, Number.NaN])('%d deviations are no difference', (difference) => {
+    expect(() => returnsForPower(difference, power, { level: level95, side: 'both' })).toThrow(
+      'returnsForPower: expected a difference above 0',
+    );
+  });
+
+  test('the power that is usual is 80%', () => {
+    // SciPy 1.17.1: brentq on nct.sf(t975, 59, d) + nct.cdf(-t975, 59, d) - 0.8, good to 1e-10.
+    const found = detectableNoncentrality(claimPower, 59, { level: level95, side: 'both' });
+    expect(relativeError(found, 2.8482253850697603)).toBeLessThan(1e-9);
   });
 });
 
@@ -91,8 +138,17 @@ describe('need', () => {
     expect(answer.forDetection.returns).toBe(Math.ceil(answer.dependenceFactor * free));
   });
 
+  test('the dependence factor counts from 20 returns on', () => {
+    const days = (count: number) => Float64Array.from({ length: count }, (_, day) => (day < 10 ? 1 : -1));
+    expect(accepted(ask(0.1, days(19))).dependenceFactor).toBe(1);
+    expect(accepted(ask(0.1, days(20))).dependenceFactor).toBeGreaterThan(2);
+  });
+
   test('refusals', () => {
     expect(refusalCode(ask(0))).toBe('sizeOutside');
+    expect(refusalCode(ask(Number.POSITIVE_INFINITY))).toBe('sizeOutside');
+    expect(refusalMessage(ask(0))).toMatch(/^A size of 0 can never be told from zero\./);
+    expect(refusalMessage(ask(0.01, [0.01]))).toMatch(/^A count of returns needed needs at least 2 returns/);
     expect(refusalCode(ask(-0.1))).toBe('sizeOutside');
     expect(refusalCode(ask(0.01, [0.01]))).toBe('tooFewReturns');
     expect(refusalCode(ask(0.01, [0.01, 0.01]))).toBe('priceDoesNotMove');

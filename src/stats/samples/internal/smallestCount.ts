@@ -24,7 +24,7 @@ export const smallestCount = (isEnough: (count: number) => boolean, guess: numbe
 };
 
 /**
- * Above a million returns the t distribution is the normal one but for a shift of z²/2 returns, whose error is less than one
- * return in a million: the formula then stands for the search.
+ * Above a million returns the t distribution is the normal one but for a shift of about z²/2 returns; what the shift leaves
+ * is of the order of one divided by the count: the formula then stands for the search.
  */
 export const mostSearched = 1e6;
