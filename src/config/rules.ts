@@ -1,5 +1,6 @@
 import { nearestWord } from '../terms/nearest.ts';
 import { confinableVerbs, directMessages } from './permissionsSchema.ts';
+import { defaultRecordsPath } from './recordsSchema.ts';
 import type { Settings } from './schema.ts';
 
 /** Something wrong between settings that are each right alone. */
@@ -100,7 +101,19 @@ const namedChannelsAreOpen: Rule = ({ permissions: { channels, sharedChannels, v
     });
 };
 
+const oneStoreOfRecords: Rule = ({ records: { path, url } }) =>
+  url !== null && path !== defaultRecordsPath
+    ? [
+        {
+          path: 'records.path',
+          value: path,
+          message: 'records.url is set too, and the records are kept in one place; take one of them out',
+        },
+      ]
+    : [];
+
 export const rules: readonly Rule[] = [
+  oneStoreOfRecords,
   columnNamesDiffer,
   quoteUnitNeedsCurrency,
   wideHasNoOtherColumns,

@@ -1,9 +1,7 @@
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import type { Settings } from './schema.ts';
-
-/** A token that does not show itself when it is printed, logged or turned into JSON. */
-export type Secret = { readonly reveal: () => string };
+import { type Secret, secret } from './secret.ts';
 
 export type WorkspaceToStart =
   | { readonly kind: 'terminal' }
@@ -32,8 +30,6 @@ const present = (env: Environment, name: string): string | null => {
   const value = env[name]?.trim() ?? '';
   return value === '' ? null : value;
 };
-
-const secret = (value: string): Secret => ({ reveal: () => value });
 
 const missing = (names: readonly TokenName[], connection: string) =>
   refuse(

@@ -19,6 +19,13 @@ const run = async (asked: Arguments): Promise<number> => {
     return refuseWith([{ message: `Name the one file to copy the records to. Write ${usage}.` }]);
   const reading = settingsFor(asked);
   if (!reading.ok) return refuseWith(reading.problems);
+  if (reading.settings.records.url !== null)
+    return refuseWith([
+      {
+        message:
+          'The records are in PostgreSQL, which has its own way to be copied. Run pg_dump --format=custom --file=COPY on that database.',
+      },
+    ]);
   const [path, own] = [resolve(copy), recordsPath(reading.settings)];
   if (!existsSync(own))
     return refuseWith([{ message: `There are no records at ${own}. Set records.path or say --records.` }]);

@@ -10,7 +10,10 @@ type Kind = 'auto' | 'slack' | 'terminal';
 type Connection = 'socket' | 'http';
 
 const read = (kind: Kind, connection: Connection, env: Record<string, string>) =>
-  readTokens(env, { workspace: kind, slack: { connection, port: 3000, listenInThreads: false } });
+  readTokens(env, {
+    workspace: kind,
+    slack: { connection, port: 3000, listenInThreads: false, whenUnsure: 'leave' },
+  });
 
 const whole = { SLACK_BOT_TOKEN: bot, SLACK_APP_TOKEN: app, SLACK_SIGNING_SECRET: signing };
 

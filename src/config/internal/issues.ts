@@ -15,8 +15,8 @@ const valueAt = (written: unknown, path: Path): unknown =>
 const longestShown = 60;
 
 /** Tokens belong in the environment; one that was written here by mistake must not reach a log. */
-const looksSecret = /xox[a-z]|xapp|[0-9a-f]{32}/i;
-const nameOfSecret = /token|secret|password/i;
+const looksSecret = /xox[a-z]|xapp|[0-9a-f]{32}|:\/\/\S*@/i;
+const nameOfSecret = /token|secret|password|url$/i;
 
 const shown = (value: unknown): string | null => {
   if (value === undefined) return null;
@@ -62,7 +62,8 @@ const expectedAt = (help: readonly SettingHelp[], path: Path): string | null => 
 
 const wrongValue = (help: readonly SettingHelp[], path: Path, written: unknown): Breach => {
   const name = path.join('.') || 'the file';
-  const value = shown(valueAt(written, path));
+  const found = shown(valueAt(written, path));
+  const value = found !== null && nameOfSecret.test(name) ? '(not shown)' : found;
   const right = expectedAt(help, path) ?? `a block with ${childrenOf(help, helpPath(path)).join(', ')}`;
   const message =
     value === null ? `${name} is missing; it must be ${right}.` : `${name} is ${value}; it must be ${right}.`;

@@ -3,6 +3,7 @@ import { existsSync, readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { Settings } from '../../config/schema.ts';
+import { connectPostgres } from '../../records/openPostgres.ts';
 import { connectSqlite } from '../../records/openSqlite.ts';
 import type { Clock } from '../../terms/clock.ts';
 import type { Versions } from '../../terms/records.ts';
@@ -13,15 +14,18 @@ const project = fileURLToPath(new URL('../../../', import.meta.url));
 export const recordsPath = ({ records }: Settings): string => resolve(project, records.path);
 
 /** The records of a desk, made where there are none. */
-export const recordsToKeep = (settings: Settings): Reopening =>
-  reopening(() => connectSqlite(recordsPath(settings)));
+export const recordsToKeep = (settings: Settings): Reopening => {
+  const { url } = settings.records;
+  return reopening(() =>
+    url === null ? connectSqlite(recordsPath(settings)) : connectPostgres(url.reveal()),
+  );
+};
 
-/** The records of a desk for a command that only reads: where there are none, none are made. */
+/** The records of a desk for a command that only reads: where there is no file, none is made. */
 export const recordsToRead = (settings: Settings): Reopening =>
-  reopening(() => {
-    const path = recordsPath(settings);
-    return connectSqlite(existsSync(path) ? path : null);
-  });
+  settings.records.url === null && !existsSync(recordsPath(settings))
+    ? reopening(() => connectSqlite(null))
+    : recordsToKeep(settings);
 
 /** What answers here, as it is kept with every answer. */
 export const versionsOf = (settings: Settings): Versions => {
