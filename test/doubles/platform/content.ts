@@ -1,3 +1,4 @@
+import { limitFaults } from '../../../src/present/limits/limitFaults.ts';
 import limits from '../../fixtures/platform/limits.json' with { type: 'json' };
 import { Refused, words } from './arguments.ts';
 import { blockProblems, filesShown } from './blocks.ts';
@@ -33,6 +34,7 @@ export const contentOf = (desk: Desk, args: Arguments): Content => {
   const text = words(args, 'text') ?? '';
   const blocks = args['blocks'] ?? [];
   if (!Array.isArray(blocks) || !blocks.every(isBlock)) throw new Refused('invalid_blocks_format');
+  desk.records.limitFaults.push(...limitFaults({ text, blocks }));
   const problems = blockProblems(blocks, 'message');
   if (problems.length > 0) refuseBlocks(problems);
   checkFiles(desk, blocks);

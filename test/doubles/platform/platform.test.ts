@@ -12,7 +12,7 @@ afterEach(async () => {
 
 /** The platform with its own client, and an app that only listens. */
 const setUp = async (options: PlatformOptions = {}) => {
-  const platform = await startPlatform(options);
+  const platform = await startPlatform({ breaksLimits: true, ...options });
   const app = await startListener();
   running.push(platform, app);
   platform.sendTo(app.url);

@@ -50,6 +50,8 @@ export const makeRecords = () => ({
   responses: makeTray<Responded>('responses'),
   pins: makeTray<{ readonly channel: string; readonly ts: string; readonly pinned: boolean }>('pins'),
   uploads: makeTray<{ readonly id: string; readonly bytes: Buffer }>('uploads'),
+  /** How what was sent broke the platform's limits; a platform that is stopped with any among them throws. */
+  limitFaults: [] as string[],
   views: makeTray<{ readonly kind: 'open' | 'update' | 'publish'; readonly view: unknown }>('views'),
 });
 

@@ -21,6 +21,8 @@ export type PlatformOptions = {
   readonly time?: ManualTime;
   readonly scopes?: readonly string[];
   readonly subscriptions?: readonly string[];
+  /** Messages are sent that break a limit on purpose. */
+  readonly breaksLimits?: boolean;
 };
 
 /** A messaging platform on loopback, as strict as the real one where it matters to the bot. */
@@ -118,6 +120,8 @@ export const startPlatform = async (options: PlatformOptions = {}) => {
       sockets.close();
       server.closeAllConnections();
       await new Promise((resolve) => server.close(resolve));
+      const broken = options.breaksLimits === true ? [] : desk.records.limitFaults;
+      if (broken.length > 0) throw new Error(`what was sent breaks limits: ${broken.join('; ')}`);
     },
   };
 };

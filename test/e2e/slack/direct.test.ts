@@ -77,6 +77,7 @@ describe('a slash command', () => {
   it('loses only the looks of a reply whose blocks are refused', async () => {
     const table = { type: 'table', rows: [[{ type: 'raw_text', text: '' }]] };
     const { platform, log } = await startBot({
+      breaksLimits: true,
       conversation: { converse: () => Promise.resolve([spoken('plain words', { blocks: [table] })]) },
     });
     platform.command({ channel: 'C0DESK', text: 'shape KELP' });

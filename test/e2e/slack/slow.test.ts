@@ -2,9 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { answeringLater, settled, spoken, startBot } from './bot.ts';
 
 /** A bot with one question under way whose answer is still awaited. */
-const askSlowly = async () => {
+const askSlowly = async (breaksLimits = false) => {
   const { questions, conversation } = answeringLater();
-  const stage = await startBot({ conversation });
+  const stage = await startBot({ conversation, breaksLimits });
   const question = stage.platform.mention({ channel: 'C0DESK', text: 'backtest KELP' });
   const asked = await questions.next();
   return { ...stage, stage, question, asked };
@@ -81,7 +81,7 @@ describe('an answer that takes long', () => {
   });
 
   it('whose blocks are refused takes the place of the placeholder as text alone', async () => {
-    const { platform, asked, log } = await askSlowly();
+    const { platform, asked, log } = await askSlowly(true);
     platform.time.advance(1_500);
     const placeholder = await platform.posts.next();
     asked.answer(spoken('plain words', { blocks: [{ type: 'banner' }] }));

@@ -111,6 +111,7 @@ describe('a post', () => {
   it('whose blocks are refused goes out as text alone, and the operator is told', async () => {
     const table = { type: 'table', rows: [[{ type: 'raw_text', text: '' }]] };
     const stage = await startBot({
+      breaksLimits: true,
       conversation: { converse: () => Promise.resolve([spoken('plain words', { blocks: [table] })]) },
     });
     const question = stage.platform.mention({ channel: 'C0DESK', text: 'interval KELP' });

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { viewFaults } from '../../../../src/present/limits/viewFaults.ts';
 import limits from '../../../fixtures/platform/limits.json' with { type: 'json' };
 import { needed, Refused, words } from '../arguments.ts';
 import { blockProblems } from '../blocks.ts';
@@ -18,7 +19,8 @@ const shape = z.looseObject({
   callback_id: z.string().max(limits.view.callbackId).optional(),
 });
 
-const checked = (args: Arguments, type: 'modal' | 'home') => {
+const checked = (desk: Desk, args: Arguments, type: 'modal' | 'home') => {
+  desk.records.limitFaults.push(...viewFaults(args['view']));
   const read = shape.safeParse(args['view']);
   const problems = read.success
     ? blockProblems(read.data.blocks, 'view')
@@ -42,7 +44,7 @@ const spendTrigger = (desk: Desk, id: string): void => {
 const shown = (view: OpenView) => ({ view: { id: view.id, hash: view.hash } });
 
 const open: Method = (desk, args) => {
-  const view = checked(args, 'modal');
+  const view = checked(desk, args, 'modal');
   spendTrigger(desk, needed(args, 'trigger_id'));
   const opened = { id: desk.newId('V'), hash: desk.newId('h'), view };
   desk.views.set(opened.id, opened);
@@ -60,7 +62,7 @@ const replace = (desk: Desk, held: OpenView, args: Arguments, view: unknown): vo
 const update: Method = (desk, args) => {
   const held = desk.views.get(needed(args, 'view_id'));
   if (held === undefined) throw new Refused('not_found');
-  const view = checked(args, 'modal');
+  const view = checked(desk, args, 'modal');
   replace(desk, held, args, view);
   desk.records.views.add({ kind: 'update', view });
   return shown(held);
@@ -69,7 +71,7 @@ const update: Method = (desk, args) => {
 const publish: Method = (desk, args) => {
   const user = needed(args, 'user_id');
   if (!desk.workspace.people.has(user)) throw new Refused('user_not_found');
-  const view = checked(args, 'home');
+  const view = checked(desk, args, 'home');
   const held = desk.homes.get(user) ?? { id: desk.newId('V'), hash: '', view };
   replace(desk, held, held.hash === '' ? {} : args, view);
   desk.homes.set(user, held);
