@@ -1,8 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { adjustedForSeveral, type CompareQuestion, compare } from '../../../src/stats/comparisons/compare.ts';
 import { deviationRatio } from '../../../src/stats/comparisons/deviationRatio.ts';
+import { brownForsytheTest } from '../../../src/stats/comparisons/spread.ts';
 import { nextNormal } from '../../../src/stats/random/draws.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level95 } from '../levels.ts';
 import { testStreams } from '../testStreams.ts';
@@ -60,6 +61,35 @@ describe('ratio of standard deviations, BCa', () => {
   });
 });
 
+describe('a ratio of standard deviations is refused', () => {
+  const figure = 'An interval for the ratio of two standard deviations';
+  const periods = (first: ArrayLike<number>, second: ArrayLike<number>) =>
+    deviationRatio(question({ first, second, paired: false, replicates: 199 }));
+
+  test('where either has fewer than ten returns', () => {
+    expect(refusalMessage(periods(dax.slice(0, 9), smi))).toContain(
+      `${figure} needs at least 10 returns, and there are 9.`,
+    );
+    expect(refusalMessage(periods(dax, smi.slice(0, 8)))).toContain(
+      `${figure} needs at least 10 returns, and there are 8.`,
+    );
+  });
+
+  test('where pairs are not as many', () => {
+    expect(() => deviationRatio(question({ first: dax, replicates: 199 }))).toThrow(
+      'deviationRatio: 120 and 60 returns are not pairs',
+    );
+  });
+
+  test('where the resamples do not reach both ends, drawn singly or in blocks', () => {
+    // (19 + 1)·0.025 is half a rank: one end at 95% would be the first of them, two ends are none.
+    expect(refusalCode(deviationRatio(question({ replicates: 19 })))).toBe('levelOutside');
+    const all = { first: indexReturns('DAX', 'all'), second: indexReturns('SMI', 'all') };
+    expect(refusalCode(deviationRatio(question({ ...all, replicates: 19 })))).toBe('levelOutside');
+    expect(accepted(deviationRatio(question({ ...all, replicates: 39 }))).method).toBe('stationary');
+  });
+});
+
 test('clustered squares are drawn in blocks', () => {
   const ratio = accepted(
     deviationRatio(
@@ -79,7 +109,11 @@ test('of a clustered and an unclustered series the longer blocks are taken', () 
   const runs = sizes.map((size, day) => (day % 100 < 50 ? 1 : 4) * size);
   const alternating = sizes.map((size, day) => (day % 2 === 0 ? 1 : 4) * size);
   const width = (first: Float64Array) => {
-    const { lower, upper } = accepted(deviationRatio(question({ first, second: steady, replicates: 999 })));
+    const { lower, upper, method } = accepted(
+      deviationRatio(question({ first, second: steady, replicates: 999 })),
+    );
+    // One that is clustered is enough, as it is for the days that alternate: their squares are autocorrelated at lag 2.
+    expect(method).toBe('stationary');
     return Math.log(upper / lower);
   };
   // Blocks of one day would leave the width as it is for alternating days, near 0.3.
@@ -97,6 +131,7 @@ describe('compare', () => {
     expect([periods.kind, periods.spreadTest]).toEqual(['welch', 'brownForsythe']);
     expect(periods.mean.degreesOfFreedom).toBeGreaterThan(39);
     expect(periods.mean.degreesOfFreedom).toBeLessThan(118);
+    expect(periods.spread).toEqual(brownForsytheTest([dax.slice(0, 40), dax.slice(40)]));
   });
 
   test('nine returns have no ratio, and the rest stands', () => {
@@ -111,6 +146,31 @@ describe('compare', () => {
     expect(refusalCode(compare(question({ first: [0.1], second: [0.2] })))).toBe('tooFewReturns');
     expect(refusalCode(compare(question({ first: [0.1, 0.1], paired: false })))).toBe('priceDoesNotMove');
     expect(() => compare(question({ first: [1, 2, 4] }))).toThrow(RangeError);
+  });
+
+  test('each refusal names what cannot be had', () => {
+    const message = (more: Partial<CompareQuestion>) => refusalMessage(compare(question(more)));
+    expect(message({ first: [0.1], second: [0.2] })).toContain(
+      'A comparison of two tickers needs at least 2 returns',
+    );
+    // Binary fractions, so that both differences are 0.25 exactly.
+    expect(message({ first: [0.5, 0.75], second: [0.25, 0.5] })).toContain(
+      'the two differ by the same 0.25 on all 2 days',
+    );
+    const one = { paired: false, first: [0.1] };
+    expect(message(one)).toContain('The first period of a comparison needs at least 2 returns');
+    const other = { paired: false, second: [0.1] };
+    expect(message(other)).toContain('The second period of a comparison needs at least 2 returns');
+    expect(() => compare(question({ first: [1, 2, 4] }))).toThrow(
+      'pairedDifferences: 3 and 60 returns are not pairs',
+    );
+  });
+
+  test('a comparison without a test of spread has no adjusted p for it', () => {
+    const full = accepted(compare(question({ replicates: 199 })));
+    const two = accepted(compare(question({ first: [0.1, 0.2], second: [0.4, 0.1] })));
+    expect(two.spread).toBeNull();
+    expect(adjustedForSeveral([full, two]).map(({ spread }) => spread)).toEqual([full.spread?.p, null]);
   });
 
   test('several at once: means and spreads adjusted each among themselves', () => {

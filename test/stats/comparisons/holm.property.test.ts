@@ -74,7 +74,8 @@ describe('Holm', () => {
   });
 
   test('a p-value outside [0, 1] is a bug of the caller', () => {
-    expect(() => holmAdjusted([1.1])).toThrow(RangeError);
+    expect(() => holmAdjusted([1.1])).toThrow('holmAdjusted: a p-value lies in [0, 1], got 1.1');
+    expect(() => holmAdjusted([-0.1])).toThrow(RangeError);
     expect(() => holmAdjusted([Number.NaN])).toThrow(RangeError);
   });
 });

@@ -35,6 +35,33 @@ describe('two periods', () => {
   });
 });
 
+describe('the least that can be tested', () => {
+  // SciPy 1.17.1: scipy.stats.levene(a, b, center='median'), ttest_1samp(abs(a - median(a)) - abs(b - median(b)), 0).
+  test.each([
+    [
+      [1, 2, 4],
+      [1, 5, 30],
+      [1.2426470588235292, 0.3274179261060634],
+    ],
+    [
+      [1, -1, 1, -1],
+      [1, 2, 4, 9],
+      [1.588235294117647, 0.25437353970150745],
+    ],
+  ])('%j against %j', (first, second, [statistic, p]) => {
+    const actual = brownForsytheTest([first, second]);
+    // Small whole numbers lose nothing on the way; SciPy's F is good to about 13 digits.
+    expect(relativeError(actual?.statistic ?? 0, statistic)).toBeLessThan(1e-12);
+    expect(relativeError(actual?.p ?? 0, p)).toBeLessThan(1e-12);
+  });
+
+  test('three pairs', () => {
+    const actual = pairedSpreadTest([1, 2, 4], [1, 5, 30]);
+    expect(relativeError(actual?.statistic ?? 0, -1.2005684510029864)).toBeLessThan(1e-12);
+    expect(relativeError(actual?.p ?? 0, 0.3528252229347988)).toBeLessThan(1e-12);
+  });
+});
+
 describe('nothing to test', () => {
   test('a group of two lies at one distance from its median', () => {
     expect(
@@ -45,6 +72,7 @@ describe('nothing to test', () => {
     ).toBeNull();
     expect(brownForsytheTest([[1, 2, 3]])).toBeNull();
     expect(pairedSpreadTest([1, 2], [3, 9])).toBeNull();
+    expect(pairedSpreadTest([], [])).toBeNull();
   });
 
   test('distances that do not vary, exactly or but for rounding', () => {
