@@ -1,3 +1,5 @@
+import type { Subscription, SubscriptionKind, SubscriptionState } from '../terms/subscriptions.ts';
+
 /** The tables as the query builder sees them. Column names are the names in the database. */
 export type PriceColumnsRow = {
   readonly digest: string;
@@ -101,6 +103,36 @@ export type DeliveryRow = LeasedRow & {
   readonly outcome: string | null;
 };
 
+export type SubscriptionRow = {
+  readonly team: string;
+  readonly id: string;
+  readonly kind: SubscriptionKind;
+  /** What the id counts: ids ascend as numbers do, not as texts. */
+  readonly number: number;
+  readonly owner: string;
+  readonly place: Subscription['place'];
+  readonly channel: string;
+  /** Canonical questions, as JSON. */
+  readonly questions: string;
+  readonly body: string;
+  /** As JSON. */
+  readonly schedule: string | null;
+  readonly state: SubscriptionState;
+  readonly paused_why: Subscription['pausedWhy'];
+  readonly revision: number;
+  readonly created_at_ms: number;
+  readonly next_due_ms: number | null;
+  readonly last_due_ms: number | null;
+  readonly awaiting_until_ms: number | null;
+  readonly memory: string;
+};
+
+export type SubscriptionCounterRow = {
+  readonly team: string;
+  readonly kind: SubscriptionKind;
+  readonly last: number;
+};
+
 export type Tables = {
   readonly price_columns: PriceColumnsRow;
   readonly answers: AnswerRow;
@@ -111,5 +143,8 @@ export type Tables = {
   readonly chain_head: ChainHeadRow;
   readonly inbox: InboxRow;
   readonly deliveries: DeliveryRow;
+  readonly subscriptions: SubscriptionRow;
+  readonly subscription_counters: SubscriptionCounterRow;
+  readonly subscription_claims: LeasedRow;
   readonly schema_versions: SchemaVersionRow;
 };

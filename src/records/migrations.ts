@@ -1,10 +1,11 @@
 import type { Database } from './connection.ts';
 import { answersOnRecord } from './migrations/1-answers.ts';
 import { inboxAndDeliveries } from './migrations/2-inboxAndDeliveries.ts';
+import { digestsAndWatches } from './migrations/3-subscriptions.ts';
 import type { ColumnTypes, Migration } from './migrations/migration.ts';
 
 /** In the order in which they are made; a migration that was ever released is never changed. */
-export const migrations: readonly Migration[] = [answersOnRecord, inboxAndDeliveries];
+export const migrations: readonly Migration[] = [answersOnRecord, inboxAndDeliveries, digestsAndWatches];
 
 const versionOf = async (db: Database): Promise<number> => {
   await db.schema

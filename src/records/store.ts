@@ -3,11 +3,13 @@ import { type AnswerStore, answerStore } from './answers.ts';
 import { type Access, accessTo, type Connection, storeProblem } from './connection.ts';
 import { type DeliveryStore, deliveryStore } from './deliveries.ts';
 import { type InboxStore, inboxStore } from './inbox.ts';
+import { type SubscriptionStore, subscriptionStore } from './subscriptions.ts';
 
 /** Each part of the records in a file of its own, all of them on one database. */
 export type StoreParts = AnswerStore & {
   readonly inbox: InboxStore;
   readonly deliveries: DeliveryStore;
+  readonly subscriptions: SubscriptionStore;
 };
 
 /** The records. Whatever the machinery beneath does wrong comes back as a problem, never as an exception. */
@@ -21,6 +23,7 @@ export const storeParts = (access: Access): StoreParts => ({
   ...answerStore(access),
   inbox: inboxStore(access),
   deliveries: deliveryStore(access),
+  subscriptions: subscriptionStore(access),
 });
 
 export const copied = async (connection: Connection, path: string): Promise<Result<null>> => {

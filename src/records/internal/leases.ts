@@ -4,7 +4,7 @@ import type { Lease } from '../../terms/delivery.ts';
 import type { Database } from '../connection.ts';
 import type { Tables } from '../database.ts';
 
-type Leased = 'inbox' | 'deliveries';
+type Leased = 'inbox' | 'deliveries' | 'subscription_claims';
 
 /** Nobody has it, nobody any more, or this very holder. */
 export const isFree =
