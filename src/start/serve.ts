@@ -3,7 +3,10 @@ import { readTokens, type WorkspaceToStart } from '../config/tokens.ts';
 import type { LiveFeed } from '../feed/live/liveFeed.ts';
 import type { Problem } from '../terms/problem.ts';
 import { problem } from '../terms/problem.ts';
+import { createPermissions } from '../workspaces/access/createPermissions.ts';
 import { type Converse, createConverse } from '../workspaces/converse.ts';
+import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
+import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
 import { startTerminal } from '../workspaces/terminal/start.ts';
 import { readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
@@ -12,6 +15,7 @@ import { exitCodes } from './exit.ts';
 import { eventInWords, feedLive } from './feed.ts';
 import { startHeartbeat } from './heartbeat.ts';
 import { operatorLog, silentLog } from './log.ts';
+import { machineTime } from './machineTime.ts';
 import { drawInThread } from './pictures/draw.ts';
 import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
 import type { Reopening } from './records/reopening.ts';
@@ -29,6 +33,8 @@ type Serving = {
   readonly converse: Converse;
   readonly tickers: () => readonly string[];
   readonly records: Reopening;
+  readonly permissions: Permissions;
+  readonly places: Places;
 };
 
 /** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
@@ -45,7 +51,7 @@ const serveSlack = async (
   // The chat library is slow to load; nobody in the terminal should wait for it.
   const { runSlack } = await import('./slack.ts');
   const stopBeating = startHeartbeat(() => stateOf(serving.records), log.warn);
-  const problemFound = await runSlack(workspace, serving.converse, serving.tickers, log, randomUUID);
+  const problemFound = await runSlack(workspace, serving, log, randomUUID);
   stopBeating();
   return problemFound === null ? exitCodes.answered : refuseWith([problemFound]);
 };
@@ -82,6 +88,11 @@ const main = async (): Promise<number> => {
   const store = recordsToKeep(settings);
   const stopTidying = keepTidy(store, settings, clock, log.error);
   const records = { store, keeps: true, versions: versionsOf(settings), tell: log.error };
+  const places = makePlaces(machineTime, log);
+  const permissions =
+    workspace.value.kind === 'slack'
+      ? createPermissions(settings.permissions, places, clock)
+      : everythingAllowed;
   const desk = createDesk({
     settings,
     clock,
@@ -89,9 +100,16 @@ const main = async (): Promise<number> => {
     feedStatus: feed.status,
     compute,
     records,
+    permissions,
     drawing,
   });
-  const serving = { converse: createConverse(desk), tickers: () => tickersOf(feed), records: store };
+  const serving = {
+    converse: createConverse(desk),
+    tickers: () => tickersOf(feed),
+    records: store,
+    permissions,
+    places,
+  };
   try {
     return workspace.value.kind === 'slack'
       ? await serveSlack(workspace.value, serving, log)

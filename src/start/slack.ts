@@ -1,10 +1,13 @@
 import type { WorkspaceToStart } from '../config/tokens.ts';
 import type { Problem } from '../terms/problem.ts';
 import type { Converse } from '../workspaces/converse.ts';
-import type { Logger, Time } from '../workspaces/slack/ports.ts';
+import type { Permissions } from '../workspaces/permissions.ts';
+import type { Places } from '../workspaces/slack/places/places.ts';
+import type { Logger } from '../workspaces/slack/ports.ts';
 import { noInbox, seenInMemory } from '../workspaces/slack/seen.ts';
 import type { SlackSettings } from '../workspaces/slack/settings.ts';
 import { startSlack } from '../workspaces/slack/start.ts';
+import { machineTime } from './machineTime.ts';
 import { slackConversation } from './slackConversation.ts';
 
 /** Two sockets, so that one can be opened anew while the other hears. */
@@ -24,34 +27,35 @@ const settingsOf = (workspace: WorkspaceToStart & { kind: 'slack' }): SlackSetti
         },
 });
 
-const machineTime: Time = {
-  nowMs: Date.now,
-  after: (delayMs, run) => {
-    const timer = setTimeout(run, delayMs);
-    return () => clearTimeout(timer);
-  },
-};
-
 const untilTold = (): Promise<string> =>
   new Promise((resolve) => {
     for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => resolve(signal));
   });
 
+/** What the bot is in Slack. */
+export type InSlack = {
+  readonly converse: Converse;
+  readonly tickers: () => readonly string[];
+  readonly permissions: Permissions;
+  readonly places: Places;
+};
+
 /** Answers in Slack until the process is told to stop; the problem where it could not begin. */
 export const runSlack = async (
   workspace: WorkspaceToStart & { kind: 'slack' },
-  converse: Converse,
-  tickers: () => readonly string[],
+  { converse, tickers, permissions, places }: InSlack,
   log: Logger,
   newId: () => string,
 ): Promise<Problem | null> => {
   const started = await startSlack(settingsOf(workspace), {
-    conversation: slackConversation(converse, tickers),
+    conversation: slackConversation(converse, tickers, permissions),
     log,
     time: machineTime,
     newId,
     seen: seenInMemory(),
     inbox: noInbox,
+    places,
+    onNews: async () => {},
   });
   if (!started.ok) return started.problem;
   const { port } = started.value;

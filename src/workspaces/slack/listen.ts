@@ -1,13 +1,33 @@
 import type { App } from '@slack/bolt';
+import type { News } from '../news.ts';
 import { answerCommand, type Commanding, commandName } from './command.ts';
 import { heardIn } from './heard.ts';
 import { inWords } from './log.ts';
 import type { Self } from './lookup.ts';
+import { newsOf } from './places/newsOf.ts';
+import type { Places } from './places/places.ts';
 import { answerPress, type Pressing } from './press.ts';
 import { answerQuestion, type Questioning } from './question.ts';
-import type { Feature } from './scopes.ts';
+import { type Feature, featureEvents } from './scopes.ts';
 
-export type Listening = Questioning & Commanding & Pressing & { readonly self: Self };
+export type Listening = Questioning &
+  Commanding &
+  Pressing & {
+    readonly self: Self;
+    readonly places: Places;
+    readonly onNews: (news: News) => Promise<void>;
+  };
+
+/** What the platform tells of the workspace itself, for the features that live by it. */
+const hearNews = (app: App, features: ReadonlySet<Feature>, { self, places, onNews }: Listening): void => {
+  for (const feature of ['members', 'channelKind', 'pin'] as const)
+    if (features.has(feature))
+      for (const name of featureEvents[feature])
+        app.event(name, async ({ event, body }) => {
+          const news = newsOf(event, body.team_id, places, self.userId);
+          if (news !== null) await onNews(news);
+        });
+};
 
 /** Hands what arrives to whoever answers it, feature by feature. */
 export const listen = (app: App, features: ReadonlySet<Feature>, listening: Listening): void => {
@@ -34,6 +54,8 @@ export const listen = (app: App, features: ReadonlySet<Feature>, listening: List
     await ack();
     await answerPress(listening, body);
   });
+
+  hearNews(app, features, listening);
 
   app.error(async (error) => {
     log.error(`What arrived could not be dealt with: ${inWords(error)}`);

@@ -1,5 +1,7 @@
 import type { Clock } from '../../terms/clock.ts';
 import type { AskedFrom } from '../../terms/records.ts';
+import type { News } from '../news.ts';
+import type { Places } from './places/places.ts';
 
 /** Where a question was asked. */
 export type AskedWhere = 'channel' | 'direct' | 'command' | 'terminal';
@@ -77,4 +79,8 @@ export type SlackPorts = {
   readonly newId: () => string;
   readonly seen: SeenEvents;
   readonly inbox: Inbox;
+  /** What is known of channels and people. */
+  readonly places: Places;
+  /** What the platform tells of the workspace itself goes there. */
+  readonly onNews: (news: News) => Promise<void>;
 };

@@ -1,3 +1,4 @@
+import { channelEvents } from './places/newsOf.ts';
 import type { Logger } from './ports.ts';
 
 /** What the bot does, and the scopes of its token without which it cannot. */
@@ -22,16 +23,7 @@ export const featureEvents = {
   directMessage: ['message.im'],
   slashCommand: [],
   members: ['user_change'],
-  channelKind: [
-    'channel_archive',
-    'channel_unarchive',
-    'channel_rename',
-    'group_archive',
-    'group_unarchive',
-    'group_rename',
-    'channel_id_changed',
-    'member_left_channel',
-  ],
+  channelKind: channelEvents,
   lookUp: [],
   followUp: ['message.channels', 'message.groups'],
   pin: ['pin_removed'],

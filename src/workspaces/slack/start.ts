@@ -8,6 +8,7 @@ import { listen } from './listen.ts';
 import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
 import type { Self } from './lookup.ts';
 import { editPace, makePace, messagePace } from './pace.ts';
+import { lookupsOver } from './places/lookups.ts';
 import type { SlackPorts } from './ports.ts';
 import { makeVoice, type Voice } from './post.ts';
 import { type Reception, receptionOf } from './receive.ts';
@@ -87,7 +88,7 @@ export const startSlack = async (
   ports: SlackPorts,
 ): Promise<Result<SlackWorkspace>> => {
   const { botToken, receiving } = settings;
-  const { conversation, time, newId, seen, inbox } = ports;
+  const { conversation, time, newId, seen, inbox, places, onNews } = ports;
   const secret = receiving.mode === 'socket' ? receiving.appToken : receiving.signingSecret;
   const log = maskedLog(ports.log, [botToken, secret]);
   const clientOptions = {
@@ -102,6 +103,7 @@ export const startSlack = async (
   if (!identified.ok) return identified;
 
   const { scopes, ...self } = identified.value;
+  places.connect(lookupsOver(wire), self.userId);
   const features = featuresOf(scopes, log);
   const pace = makePace(time, messagePace);
   const canLookUp = features.has('lookUp');
@@ -122,7 +124,8 @@ export const startSlack = async (
   });
   const asked = askedInMemory(time);
   const respond = makeRespond(time, log);
-  listen(app, features, { voice, time, log, conversation, seen, asked, respond, self });
+  const said = { voice, time, log, conversation, seen, asked, respond };
+  listen(app, features, { ...said, self, places, onNews });
   const opened = await open(reception);
   if (!opened.ok) return opened;
 

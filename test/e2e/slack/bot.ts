@@ -1,4 +1,6 @@
 import { afterEach } from 'vitest';
+import type { News } from '../../../src/workspaces/news.ts';
+import { makePlaces, type Places } from '../../../src/workspaces/slack/places/places.ts';
 import type {
   Asking,
   Block,
@@ -71,6 +73,8 @@ type BotOptions = PlatformOptions & {
   readonly conversation?: Partial<Conversation>;
   readonly mode?: Receiving['mode'];
   readonly inbox?: Inbox;
+  readonly places?: Places;
+  readonly onNews?: (news: News) => Promise<void>;
 };
 
 export type Stage = {
@@ -137,6 +141,8 @@ export const prepare = async (options: BotOptions = {}) => {
         newId: identifiers(),
         seen: seenInMemory(),
         inbox: options.inbox ?? noInbox,
+        places: options.places ?? makePlaces(platform.time, logInto(log)),
+        onNews: options.onNews ?? (async () => {}),
       },
     );
   return { platform, log, asked, pressed, start };
