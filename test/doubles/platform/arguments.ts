@@ -42,3 +42,17 @@ export const count = (args: Arguments, name: string, otherwise: number): number 
   const value = Number(args[name] ?? otherwise);
   return Number.isFinite(value) ? value : otherwise;
 };
+
+/** One page of a list; the cursor is the place to go on from, opaque to the caller. */
+export const page = <T>(all: readonly T[], args: Arguments, most: number) => {
+  const limit = Math.min(count(args, 'limit', 100), most);
+  const cursor = words(args, 'cursor');
+  const from = cursor === null ? 0 : Number(Buffer.from(cursor, 'base64').toString());
+  if (!Number.isInteger(from)) throw new Refused('invalid_cursor');
+  const next = from + limit;
+  return {
+    items: all.slice(from, next),
+    hasMore: next < all.length,
+    response_metadata: { next_cursor: next < all.length ? Buffer.from(String(next)).toString('base64') : '' },
+  };
+};

@@ -62,6 +62,9 @@ export const makeEvents = ({ desk, subscriptions, deliver }: Stage) => {
   };
 
   return {
+    /** News of the workspace itself, where the app is subscribed to that kind. */
+    told: (news: { readonly type: string; readonly [key: string]: unknown }): readonly Sent[] =>
+      subscriptions.includes(news.type) ? [event({ ...news, event_ts: workspace.stamp() })] : [],
     /** A mention is told twice to an app that also listens to the channel's messages. */
     said: (channel: Channel, message: Message): readonly Sent[] => [
       ...mentioned(channel, message),

@@ -8,6 +8,7 @@ const byMethod: Readonly<Record<string, string>> = {
   'chat.delete': 'chat:write',
   'chat.postEphemeral': 'chat:write',
   'users.info': 'users:read',
+  'users.list': 'users:read',
   'pins.add': 'pins:write',
   'pins.remove': 'pins:write',
   'pins.list': 'pins:read',

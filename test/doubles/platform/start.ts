@@ -4,6 +4,7 @@ import { makeCommands } from './commands.ts';
 import { type Delivery, makeDeliveries } from './deliveries.ts';
 import type { Desk } from './desk.ts';
 import { makeFaults } from './faults.ts';
+import { makeHousekeeping } from './housekeeping.ts';
 import { makePeople } from './people.ts';
 import { makeRecords } from './records.ts';
 import { requestTransport, type Signing, sendRequest } from './requests.ts';
@@ -99,6 +100,7 @@ export const startPlatform = async (options: PlatformOptions = {}) => {
   return {
     ...makePeople(stage),
     ...makeCommands(stage),
+    ...makeHousekeeping(stage),
     ...desk.records,
     time,
     faults,

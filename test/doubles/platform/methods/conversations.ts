@@ -1,21 +1,7 @@
-import { count, flag, needed, Refused, words } from '../arguments.ts';
+import { flag, needed, page, Refused, words } from '../arguments.ts';
 import { joinedChannel, knownChannel, type Method, type Methods } from '../desk.ts';
 import type { Arguments } from '../records.ts';
 import { bot, type Channel, type Message, writtenOut } from '../workspace.ts';
-
-/** One page of a list; the cursor is the place to go on from, opaque to the caller. */
-const page = <T>(all: readonly T[], args: Arguments, most: number) => {
-  const limit = Math.min(count(args, 'limit', 100), most);
-  const cursor = words(args, 'cursor');
-  const from = cursor === null ? 0 : Number(Buffer.from(cursor, 'base64').toString());
-  if (!Number.isInteger(from)) throw new Refused('invalid_cursor');
-  const next = from + limit;
-  return {
-    items: all.slice(from, next),
-    hasMore: next < all.length,
-    response_metadata: { next_cursor: next < all.length ? Buffer.from(String(next)).toString('base64') : '' },
-  };
-};
 
 const within = (args: Arguments) => (message: Message) => {
   const oldest = words(args, 'oldest') ?? '0';
