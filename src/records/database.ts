@@ -122,7 +122,7 @@ export type SubscriptionRow = {
   readonly revision: number;
   readonly created_at_ms: number;
   readonly next_due_ms: number | null;
-  readonly last_due_ms: number | null;
+  readonly settled_up_to_ms: number;
   readonly awaiting_until_ms: number | null;
   readonly memory: string;
 };

@@ -1,6 +1,6 @@
 import type { InstantMs } from '../terms/clock.ts';
 import type { Lease } from '../terms/delivery.ts';
-import type { InboxEvent, KeptEvent, MessagePlace } from '../terms/inbox.ts';
+import type { InboxEvent, KeptEvent, PostedContent } from '../terms/inbox.ts';
 import type { Result } from '../terms/result.ts';
 import type { Access, Database } from './connection.ts';
 import type { InboxRow } from './database.ts';
@@ -14,7 +14,7 @@ export type InboxStore = {
    */
   readonly keep: (event: InboxEvent, lease: Lease, nowMs: InstantMs) => Promise<Result<KeptEvent | null>>;
   /** Notes that a message is about to be changed into the answer. */
-  readonly willEdit: (key: string, at: MessagePlace) => Promise<Result<null>>;
+  readonly willEdit: (key: string, into: PostedContent) => Promise<Result<null>>;
   readonly settle: (key: string, nowMs: InstantMs) => Promise<Result<null>>;
   readonly renew: (keys: readonly string[], lease: Lease) => Promise<Result<null>>;
   /** Takes what nobody holds and is not dealt with, the oldest first, at most so many. */
@@ -33,7 +33,7 @@ export type InboxStore = {
 
 const keptOf = (row: InboxRow): KeptEvent => {
   // written by willEdit below
-  const editing: MessagePlace | null = row.editing === null ? null : JSON.parse(row.editing);
+  const editing: PostedContent | null = row.editing === null ? null : JSON.parse(row.editing);
   return {
     key: row.key,
     messageKey: row.message_key,
@@ -110,12 +110,12 @@ const done = async (work: Promise<unknown>): Promise<null> => {
 
 export const inboxStore = ({ read, write }: Access): InboxStore => ({
   keep: (event, lease, nowMs) => write((db) => keep(db, event, lease, nowMs)),
-  willEdit: (key, at) =>
+  willEdit: (key, into) =>
     write((db) =>
       done(
         db
           .updateTable('inbox')
-          .set({ editing: JSON.stringify(at) })
+          .set({ editing: JSON.stringify(into) })
           .where('key', '=', key)
           .execute(),
       ),

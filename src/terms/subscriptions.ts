@@ -42,8 +42,8 @@ export type Subscription = {
   readonly createdAtMs: InstantMs;
   /** null where nothing is due by the clock: a watch, and whatever a person paused or stopped. */
   readonly nextDueMs: InstantMs | null;
-  /** The last due instant that was settled, posted or not. */
-  readonly lastDueMs: InstantMs | null;
+  /** Whatever was due up to this instant is settled, posted or not. */
+  readonly settledUpToMs: InstantMs;
   /** Until when a digest posted on old prices waits for the new ones. */
   readonly awaitingUntilMs: InstantMs | null;
   /** What it must remember from one time to the next, as data that its own room reads: JSON. */

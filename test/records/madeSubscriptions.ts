@@ -14,7 +14,7 @@ export const newDigest = (more: Partial<NewSubscription> = {}): NewSubscription 
   pausedWhy: null,
   createdAtMs: 1_796_114_400_000,
   nextDueMs: 1_796_200_200_000,
-  lastDueMs: null,
+  settledUpToMs: 1_796_114_400_000,
   awaitingUntilMs: null,
   memory: '{}',
   ...more,

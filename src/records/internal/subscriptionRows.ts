@@ -16,7 +16,7 @@ export const subscriptionRow = (given: Subscription): Omit<SubscriptionRow, 'num
   revision: given.revision,
   created_at_ms: given.createdAtMs,
   next_due_ms: given.nextDueMs,
-  last_due_ms: given.lastDueMs,
+  settled_up_to_ms: given.settledUpToMs,
   awaiting_until_ms: given.awaitingUntilMs,
   memory: given.memory,
 });
@@ -40,7 +40,7 @@ export const subscriptionOf = (row: SubscriptionRow): Subscription => {
     revision: row.revision,
     createdAtMs: row.created_at_ms,
     nextDueMs: row.next_due_ms,
-    lastDueMs: row.last_due_ms,
+    settledUpToMs: row.settled_up_to_ms,
     awaitingUntilMs: row.awaiting_until_ms,
     memory: row.memory,
   };

@@ -1,11 +1,12 @@
-import type { SchemaModule } from 'kysely';
+import type { CreateTableBuilder, SchemaModule } from 'kysely';
 import type { Migration } from './migration.ts';
 
 const subscriptions = (schema: SchemaModule) => {
   const given = ['team', 'id', 'kind', 'owner', 'place', 'channel', 'questions', 'body'] as const;
+  const empty: CreateTableBuilder<string, string> = schema.createTable('subscriptions');
   const table = given.reduce(
     (made, name) => made.addColumn(name, 'text', (column) => column.notNull()),
-    schema.createTable('subscriptions'),
+    empty,
   );
   return table
     .addColumn('number', 'integer', (column) => column.notNull())
@@ -15,7 +16,7 @@ const subscriptions = (schema: SchemaModule) => {
     .addColumn('revision', 'integer', (column) => column.notNull())
     .addColumn('created_at_ms', 'bigint', (column) => column.notNull())
     .addColumn('next_due_ms', 'bigint')
-    .addColumn('last_due_ms', 'bigint')
+    .addColumn('settled_up_to_ms', 'bigint', (column) => column.notNull())
     .addColumn('awaiting_until_ms', 'bigint')
     .addColumn('memory', 'text', (column) => column.notNull())
     .addPrimaryKeyConstraint('subscriptions_key', ['team', 'id'])
