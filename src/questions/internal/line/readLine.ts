@@ -12,7 +12,7 @@ import { unreadFault } from './unreadWords.ts';
 export type WholeLine = ReadLine & { readonly wishes: readonly Wish[] };
 
 /** A recogniser's own fault or unread words, whichever stands first in the line. */
-const recognitionFault = (line: Line, reader: VerbReader, pieces: readonly Placed[]): Fault | null => {
+export const recognitionFault = (line: Line, reader: VerbReader, pieces: readonly Placed[]): Fault | null => {
   const [recognised] = allOf(pieces, 'fault');
   const fault = recognised?.piece.fault ?? null;
   const unread = unreadFault(line, reader, pieces);
@@ -20,7 +20,8 @@ const recognitionFault = (line: Line, reader: VerbReader, pieces: readonly Place
   return fault.first < unread.first ? fault : unread;
 };
 
-const assemble = (line: Line, reader: VerbReader, pieces: readonly Placed[]): Attempt<ReadLine> => {
+/** Settles the pieces by the verb, checks them and makes the questions. */
+export const assemble = (line: Line, reader: VerbReader, pieces: readonly Placed[]): Attempt<ReadLine> => {
   const settled = reader.settle(line, pieces);
   if (!settled.ok) return settled;
   const fault = checkPieces(line, reader, settled.value) ?? checkTickers(line, reader, settled.value);
