@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { readFileSync, writeFileSync } from 'node:fs';
 import { relative } from 'node:path';
 import { declareFactoryPlugin, PluginKind } from '@stryker-mutator/api/plugin';
@@ -20,6 +21,19 @@ import { openEnvironment } from './environment.mjs';
  *   survived, so the score is never flattered by what was not run.
  */
 const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 5000);
+
+/**
+ * A share of the mutants to try, for a machine that has no time for all. Which ones follows from their place and
+ * text alone, so a greater share holds the smaller one; the others are reported as errors, which no score counts.
+ */
+const share = Number(process.env.MUTATION_SHARE ?? 1);
+export const notDrawn = 'not drawn';
+
+const isDrawn = ({ fileName, location, mutatorName, replacement }) => {
+  const place = [fileName.replace(/^.*(?=src\/stats)/, ''), location.start.line, location.start.column];
+  const text = [...place, location.end.line, location.end.column, mutatorName, replacement].join('|');
+  return createHash('sha256').update(text).digest().readUInt32BE() < share * 2 ** 32;
+};
 
 /** Without mutants each test passes a mutated place a known number of times; this often at least it may. */
 const leastHitLimit = 1_000;
@@ -131,8 +145,17 @@ class InProcessRunner {
     return test !== undefined && (await failureOf(test.body)) === null;
   }
 
+  /** Most mutants that also act while the tests are loaded fail a test that runs them; only the rest need the loading. */
   async mutantRun(options) {
+    if (!isDrawn(options.activeMutant)) return { status: MutantRunStatus.Error, errorMessage: notDrawn };
     if (this.environment === null) await this.resume();
+    const outcome = await this.verdict({ ...options, reloadEnvironment: false });
+    return options.reloadEnvironment && outcome.status === MutantRunStatus.Survived
+      ? this.verdict(options)
+      : outcome;
+  }
+
+  async verdict(options) {
     const { reloadEnvironment } = options;
     for (;;) {
       const wasFresh = this.isFresh || reloadEnvironment;

@@ -24,7 +24,9 @@ const countsOf = (report) => {
   const counts = { mutants: 0, killed: 0, endless: 0, tooLong: 0, equivalent: 0, survived: 0 };
   for (const [path, { source, mutants }] of Object.entries(report.files)) {
     const lines = source.split('\n');
-    for (const mutant of mutants.filter(({ status }) => !['Ignored', 'CompileError'].includes(status))) {
+    for (const mutant of mutants.filter(
+      ({ status }) => !['Ignored', 'CompileError', 'RuntimeError'].includes(status),
+    )) {
       counts.mutants += 1;
       counts[outcomeOf(path, lines[mutant.location.start.line - 1], mutant)] += 1;
     }
