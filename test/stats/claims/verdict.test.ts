@@ -38,3 +38,11 @@ test.each([
     expect(verdictOn({ claimed: 0, estimate: 1, ends: { lower, upper }, smallestThatMatters })).toBe(verdict);
   },
 );
+
+test('the end that a one-sided interval does not have adds nothing to its half-width', () => {
+  // By hand: the one end is 1 from the estimate, which itself is 4 from zero.
+  const judge = (estimate: number, lower: number | null, upper: number | null) =>
+    verdictOn({ claimed: 0, estimate, ends: { lower, upper }, smallestThatMatters: 2 });
+  expect(judge(4, null, 5)).toBe('consistent');
+  expect(judge(-4, -5, null)).toBe('consistent');
+});
