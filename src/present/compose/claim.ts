@@ -16,7 +16,7 @@ import type { Reply, Table } from '../reply.ts';
 import { framed, placeInWords, windowInWords } from './parts.ts';
 
 /** How the figures of a claim are written: a mean in percent, a ratio as a plain number. */
-const writing = (figures: ClaimFigures) => {
+export const writing = (figures: ClaimFigures) => {
   const { of, estimate, lower, upper, claimed } = figures;
   const bounds = { estimate, lower, upper };
   return of === 'mean'
@@ -49,7 +49,7 @@ const verdictSentence = (answer: ClaimAnswer): string => {
 };
 
 /** With the decimals of the estimate, unless those would change what was claimed. */
-const claimedDigits = ({ of, claimed }: ClaimFigures, decimals: number): string => {
+export const claimedDigits = ({ of, claimed }: ClaimFigures, decimals: number): string => {
   const value = of === 'mean' ? inPercent(claimed) : claimed;
   const unchanged = Math.abs(roundTo(value, decimals) - value) < 1e-9;
   return unchanged ? digits(value, decimals, { plus: true }) : threeDigits(value, { plus: true });

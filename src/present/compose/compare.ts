@@ -7,10 +7,10 @@ import { listed, possessive, probabilityValue } from '../../wording/words.ts';
 import type { Reply, Table } from '../reply.ts';
 import { framed, placeInWords, windowInWords } from './parts.ts';
 
-const meanBounds = ({ difference, lower, upper }: CompareFigures) =>
+export const meanBounds = ({ difference, lower, upper }: CompareFigures) =>
   percentBounds({ estimate: difference, lower, upper });
 
-const ratioBounds = ({ deviationRatio, ratioLower, ratioUpper }: CompareFigures) => {
+export const ratioBounds = ({ deviationRatio, ratioLower, ratioUpper }: CompareFigures) => {
   if (deviationRatio === null) return null;
   const bounds = { estimate: deviationRatio, lower: ratioLower, upper: ratioUpper };
   return writeBounds(bounds, decimalsOfBounds(bounds, [1]), { plus: false });

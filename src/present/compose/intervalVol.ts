@@ -7,7 +7,8 @@ import { dailyAndAnnual, framed, placeInWords, windowInWords } from './parts.ts'
 
 const unsigned = { plus: false };
 
-const boundsOf = (figures: VolFigures): Record<VolFigures['trust'], Bounds> => ({
+/** The interval of each method. */
+export const boundsOf = (figures: VolFigures): Record<VolFigures['trust'], Bounds> => ({
   chiSquare: { lower: figures.lower, upper: figures.upper },
   bonett: { lower: figures.bonettLower, upper: figures.bonettUpper },
   block: { lower: figures.blockLower, upper: figures.blockUpper },

@@ -60,16 +60,20 @@ const table = ({ figures }: ShapeAnswer): Table => ({
   ],
 });
 
+export const verdictOnTails = (figures: ShapeFigures): string =>
+  fatter(figures) ? 'are fatter than the bell curve’s' : 'are not shown to be fatter than the bell curve’s';
+
+/** `: the fitted t has 4.2 degrees of freedom, at 95% 3.1 to 6.4`; nothing where no t was fitted. */
+export const degreesInWords = (figures: ShapeFigures): string =>
+  figures.nu === null
+    ? ''
+    : `: the fitted t has ${nuText(figures.nu)} degrees of freedom, at ${levelInWords(figures.confidenceLevel)} ${nuText(figures.nuLower)} to ${nuText(figures.nuUpper)}`;
+
 /** How fat the tails are. */
 export const shapeReply = (answer: ShapeAnswer): Reply => {
   const { figures } = answer;
-  const verdict = fatter(figures)
-    ? 'are fatter than the bell curve’s'
-    : 'are not shown to be fatter than the bell curve’s';
-  const degrees =
-    figures.nu === null
-      ? ''
-      : `: the fitted t has ${nuText(figures.nu)} degrees of freedom, at ${levelInWords(figures.confidenceLevel)} ${nuText(figures.nuLower)} to ${nuText(figures.nuUpper)}`;
+  const verdict = verdictOnTails(figures);
+  const degrees = degreesInWords(figures);
   const sentence = `${possessive(answer.subject[0] ?? '')} tails ${windowInWords(answer)} ${verdict}${degrees}${figures.normalLimit === true ? '' : multipleWords(figures)}.`;
   return framed(answer, sentence, {
     table: table(answer),

@@ -10,10 +10,11 @@ const unsigned = { plus: false };
 /** Which figure speaks first where several models were asked. */
 const leadingOrder = ['student', 'historical', 'normal', 'filtered', 'peaks'] as const;
 
-const given = (models: TailFigures['models']): readonly TailModelFigures[] =>
+/** The models that gave figures. */
+export const given = (models: TailFigures['models']): readonly TailModelFigures[] =>
   models.filter((each): each is TailModelFigures => each.ok);
 
-const leadingOf = (models: TailFigures['models']): TailModelFigures | null => {
+export const leadingOf = (models: TailFigures['models']): TailModelFigures | null => {
   const found = given(models);
   return (
     leadingOrder
@@ -102,7 +103,8 @@ const refusedPassage = (models: readonly (RefusedModel | { readonly ok: true })[
 
 export { refusedPassage };
 
-const rangeInWords = (leading: TailModelFigures, level: string): string => {
+/** `3.12% (at 95% 2.61% to 4.05%)`: the VaR with its interval, where there is one. */
+export const rangeInWords = (leading: TailModelFigures, level: string): string => {
   const { estimate, range } = written(
     leading.var,
     leading.varLower,

@@ -15,7 +15,8 @@ import { refusedPassage } from './tail.ts';
 
 const mostDaysShown = 10;
 
-const given = ({ figures }: TailBeyondAnswer): readonly BeyondModelFigures[] =>
+/** The models that gave a chance. */
+export const given = ({ figures }: TailBeyondAnswer): readonly BeyondModelFigures[] =>
   figures.models.filter((each): each is BeyondModelFigures => each.ok);
 
 const sessions = (count: number | null): string => (count === null ? 'never' : significant(count, 2));

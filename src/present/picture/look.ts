@@ -6,8 +6,8 @@ import type { Config } from 'vega-lite';
  */
 export const sheetWidth = 480;
 export const sheetMargin = 14;
-/** Pixels per unit of length: the picture is 960 pixels wide. */
-export const pixelsPerUnit = 2;
+/** Pixels per unit of length: the picture is 720 pixels wide, two for each of a narrow telephone’s 360. */
+export const pixelsPerUnit = 1.5;
 
 export const fontFamily = 'DejaVu Sans';
 export const sizes = { title: 17, line: 14, label: 13, head: 14, foot: 13 } as const;

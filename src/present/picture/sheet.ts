@@ -10,6 +10,8 @@ export type Sheet = {
   /** Sentences under the title. */
   readonly lines: readonly string[];
   readonly panels: readonly Panel[];
+  /** Between the panels, where it is not the usual distance. */
+  readonly panelGap?: number;
   /** In the corners at the foot: the day to which the data go, and the record. */
   readonly corners: readonly [string, string];
   /** What is to be seen, for who cannot see it. */

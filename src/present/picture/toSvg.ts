@@ -20,9 +20,12 @@ const measureByTable = (): void => {
 const gapBetweenPanels = 18;
 
 /** The chart of a sheet as one specification in the grammar. */
-export const chartOf = ({ panels }: Pick<Sheet, 'panels'>): ChartSpec => ({
+export const chartOf = ({
+  panels,
+  panelGap = gapBetweenPanels,
+}: Pick<Sheet, 'panels' | 'panelGap'>): ChartSpec => ({
   vconcat: [...panels],
-  spacing: gapBetweenPanels,
+  spacing: panelGap,
   autosize: { type: 'pad' },
   resolve: { scale: { x: 'independent', y: 'independent', color: 'independent', strokeDash: 'independent' } },
   config: chartLook,

@@ -5,7 +5,8 @@ import { levelInWords, percentBounds, percentDecimals } from '../../../wording/p
 import { counted, possessive } from '../../../wording/words.ts';
 import { intervalMeanReply, meanDecimals, trustedBounds } from '../../compose/intervalMean.ts';
 import { placeInWords, windowInWords } from '../../compose/parts.ts';
-import { domainOf, type Strip, stripColumns, stripPanel } from '../panels/strips.ts';
+import { domainOf } from '../panels/axes.ts';
+import { type Strip, stripColumns, stripPanel } from '../panels/strips.ts';
 import type { Sheet } from '../sheet.ts';
 import { altText, identified } from './parts.ts';
 

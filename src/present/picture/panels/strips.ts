@@ -1,7 +1,7 @@
 import { colours, sheetMargin, sheetWidth, sizes } from '../look.ts';
 import { textWidth } from '../metrics.ts';
 import type { Panel } from '../sheet.ts';
-import { signed } from './axes.ts';
+import { type Domain, plotFrame, roomy, signed, within } from './axes.ts';
 
 /** One row: an estimate with its interval, named on the left, its figures in words on the right. */
 export type Strip = {
@@ -27,22 +27,10 @@ const widest = (texts: readonly string[]): number =>
 
 /** The same columns for all strips of a picture, so that what lies below one another can be compared. */
 export const stripColumns = (strips: readonly Strip[]): StripColumns => {
-  const labels = widest(strips.map(({ label }) => label)) + between;
+  const labels = plotFrame(strips.map(({ label }) => label)).labels;
   const figures = widest(strips.map(({ figures: words }) => words));
   const taken = labels + (figures === 0 ? between : figures + 2 * between);
   return { labels, figures, plot: sheetWidth - 2 * sheetMargin - taken };
-};
-
-export type Domain = readonly [number, number];
-
-const edge = 0.04;
-
-/** From the least to the largest of the values, with a margin on either side. */
-export const domainOf = (values: readonly (number | null)[]): Domain => {
-  const known = values.filter((value): value is number => value !== null);
-  const [low, high] = [Math.min(...known), Math.max(...known)];
-  const margin = edge * (high - low || Math.abs(high) || 1);
-  return [low - margin, high + margin];
 };
 
 export type StripPanel = {
@@ -82,12 +70,16 @@ const toneColour = {
   legend: null,
 } as const;
 
+/** Two landmarks are named away from each other, however near they are. */
+const sideOf = (value: number, landmarks: readonly Landmark[]): 'center' | 'left' | 'right' => {
+  const others = landmarks.filter((other) => other.value !== value);
+  if (others.length === 0) return 'center';
+  return others.some((other) => other.value < value) ? 'left' : 'right';
+};
+
 export const stripPanel = (panel: StripPanel): Panel => {
   const { strips, landmarks, domain, columns, format } = panel;
-  const x = {
-    type: 'quantitative' as const,
-    scale: { domain: [...domain], nice: false, zero: false },
-  };
+  const x = within(domain);
   const names = strips.map(({ label }) => label);
   const y = {
     field: 'label',
@@ -97,7 +89,7 @@ export const stripPanel = (panel: StripPanel): Panel => {
     scale: { domain: names },
     axis: { domain: false, ticks: false, minExtent: columns.labels, maxExtent: columns.labels },
   };
-  const axis = { labelExpr: signed(format), title: panel.axisTitle, tickCount: 5, labelFlush: false };
+  const axis = { labelExpr: signed(format), title: panel.axisTitle, tickCount: 5, ...roomy };
   return {
     ...(panel.head === null ? {} : { title: panel.head }),
     width: columns.plot,
@@ -140,11 +132,18 @@ export const stripPanel = (panel: StripPanel): Panel => {
         mark: { type: 'text', align: 'left', baseline: 'middle' },
         encoding: { x: { value: columns.plot + between }, y, text: { field: 'figures' } },
       },
-      {
-        data: { values: landmarks.filter(({ label }) => label !== '').map((each) => ({ ...each })) },
-        mark: { type: 'text', baseline: 'bottom', color: colours.quiet },
-        encoding: { x: { field: 'value', ...x }, y: { value: -3 }, text: { field: 'label' } },
-      },
+      ...landmarks
+        .filter(({ label }) => label !== '')
+        .map(({ value, label }) => ({
+          data: { values: [{ value, label }] },
+          mark: {
+            type: 'text' as const,
+            baseline: 'bottom' as const,
+            color: colours.quiet,
+            align: sideOf(value, landmarks),
+          },
+          encoding: { x: { field: 'value', ...x }, y: { value: -3 }, text: { field: 'label' } },
+        })),
     ],
   };
 };
