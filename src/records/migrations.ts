@@ -2,10 +2,16 @@ import type { Database } from './connection.ts';
 import { answersOnRecord } from './migrations/1-answers.ts';
 import { inboxAndDeliveries } from './migrations/2-inboxAndDeliveries.ts';
 import { digestsAndWatches } from './migrations/3-subscriptions.ts';
+import { askingsByPlace } from './migrations/4-askingsByPlace.ts';
 import type { ColumnTypes, Migration } from './migrations/migration.ts';
 
 /** In the order in which they are made; a migration that was ever released is never changed. */
-export const migrations: readonly Migration[] = [answersOnRecord, inboxAndDeliveries, digestsAndWatches];
+export const migrations: readonly Migration[] = [
+  answersOnRecord,
+  inboxAndDeliveries,
+  digestsAndWatches,
+  askingsByPlace,
+];
 
 const versionOf = async (db: Database): Promise<number> => {
   await db.schema

@@ -1,6 +1,7 @@
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import { type AnswerStore, answerStore } from './answers.ts';
 import { type Access, accessTo, type Connection, storeProblem } from './connection.ts';
+import { type ConversationStore, conversationStore } from './conversations.ts';
 import { type DeliveryStore, deliveryStore } from './deliveries.ts';
 import { type InboxStore, inboxStore } from './inbox.ts';
 import { type SubscriptionStore, subscriptionStore } from './subscriptions.ts';
@@ -10,6 +11,7 @@ export type StoreParts = AnswerStore & {
   readonly inbox: InboxStore;
   readonly deliveries: DeliveryStore;
   readonly subscriptions: SubscriptionStore;
+  readonly conversations: ConversationStore;
 };
 
 /** The records. Whatever the machinery beneath does wrong comes back as a problem, never as an exception. */
@@ -24,6 +26,7 @@ export const storeParts = (access: Access): StoreParts => ({
   inbox: inboxStore(access),
   deliveries: deliveryStore(access),
   subscriptions: subscriptionStore(access),
+  conversations: conversationStore(access),
 });
 
 export const copied = async (connection: Connection, path: string): Promise<Result<null>> => {

@@ -64,6 +64,17 @@ export type RecordLine = Pick<RecordedAsking, 'askedAtMs' | 'place' | 'from'> & 
   readonly question: string;
 };
 
+/** A thread of a channel by the stamp of its first message; thread null: the messages of a direct conversation outside threads. */
+export type ThreadPlace = {
+  readonly team: string | null;
+  readonly channel: string;
+  readonly thread: string | null;
+};
+
+/** One asking with the question and the answers that it got, as they are kept. */
+export type LastAnswered = Pick<RecordedAsking, 'askedAtMs' | 'place' | 'from'> &
+  Pick<RecordedAnswer, 'verb' | 'body'> & { readonly id: string };
+
 /** One asking with the whole answer that it got, without the prices. Numbers ascend in the order of keeping. */
 export type RecordEntry = Omit<RecordedAnswer, 'series'> & {
   readonly number: number;

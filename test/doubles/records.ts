@@ -26,4 +26,5 @@ export const brokenStore: RecordStore = {
   find: broken,
   list: broken,
   verify: broken,
+  conversations: { lastIn: broken, askedBy: broken },
 };

@@ -1,9 +1,11 @@
 import type {
+  LastAnswered,
   RecordExamination,
   RecordedAnswer,
   RecordedAsking,
   RecordFilter,
   RecordLine,
+  ThreadPlace,
   Versions,
 } from '../../terms/records.ts';
 import type { Result } from '../../terms/result.ts';
@@ -20,6 +22,16 @@ export type RecordStore = {
   /** The newest askings first, at most so many. */
   readonly list: (filter: RecordFilter, most: number) => Promise<Result<readonly RecordLine[]>>;
   readonly verify: () => Promise<Result<RecordExamination>>;
+  readonly conversations: {
+    /** What was answered in a thread, the newest first, at most so many. */
+    readonly lastIn: (thread: ThreadPlace, most: number) => Promise<Result<readonly LastAnswered[]>>;
+    /** What a person of a team asked, the newest first, at most so many. */
+    readonly askedBy: (
+      team: string | null,
+      person: string,
+      most: number,
+    ) => Promise<Result<readonly RecordLine[]>>;
+  };
 };
 
 /** The records of a desk: where they are, whether answers are put there, and by whom. */
