@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import { expect, test } from 'vitest';
+import { methodVersion } from '../../src/answers/answer.ts';
 import { fingerprintOf, identify } from '../../src/answers/identity.ts';
 
 const used = { ticker: 'KELP', days: Int32Array.of(1, 2, 3), closes: Float64Array.of(10, 11, 12) };
@@ -11,7 +12,7 @@ test('an id is R- and ten letters of Crockford’s base32', () => {
 test('the id is the first fifty bits of a hash of question, data, method version and seed', () => {
   const { id, seed, dataFingerprint } = identify('interval KELP', [used]);
   const digest = createHash('sha256')
-    .update(['interval KELP', dataFingerprint, '1', seed].join('\n'))
+    .update(['interval KELP', dataFingerprint, methodVersion, seed].join('\n'))
     .digest();
   const value = (digest.readBigUInt64BE(0) >> 14n).toString(2).padStart(50, '0');
   const places = id

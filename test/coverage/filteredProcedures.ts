@@ -20,12 +20,16 @@ type EndsByFigure = ReadonlyMap<string, Ends | null>;
 
 const keyOf = (figure: 'var' | 'es', text: string): string => `${figure}.${text}`;
 
+/** The residuals of a resample are overwritten by the next one. */
+const kept = (state: FilterState | null): FilterState | null =>
+  state === null ? null : { ...state, residuals: state.residuals.slice() };
+
 /** The refits are the same at every tail level, so they are made once and read as often as levels ask. */
 const withRememberedRefits = (source: FilterSource): { source: FilterSource; restart: () => void } => {
   const states: (FilterState | null)[] = [];
   let next = 0;
   const resample = (random: Random): FilterState | null => {
-    if (next === states.length) states.push(source.resample(random));
+    if (next === states.length) states.push(kept(source.resample(random)));
     next += 1;
     return states[next - 1] ?? null;
   };

@@ -22,7 +22,6 @@ export type IntervalMethod =
   | 'noncentralT'
   | 'clopperPearson'
   | 'profileLikelihood'
-  | 'parametricBootstrap'
   | 'percentileBootstrap'
   | 'residualBootstrap'
   | 'parameterDraws';

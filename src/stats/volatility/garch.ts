@@ -3,7 +3,8 @@ import { type StandardSample, standardise } from '../moments/standardSample.ts';
 import type { NewtonMaximum } from '../numerics/boundedNewton.ts';
 import { leastCounts, refuseUnusable } from '../returns/leastCounts.ts';
 import type { GarchProcess } from './garchPath.ts';
-import { parameter } from './internal/garchLikelihood.ts';
+import { garchObjective } from './internal/garchDerivatives.ts';
+import { parameter, presampleVariance } from './internal/garchLikelihood.ts';
 import { noClustering, refuseMaximum } from './internal/garchOutcome.ts';
 import {
   climbNear,
@@ -66,7 +67,10 @@ export const processOf = ({ mu, omega, alpha, beta }: GarchFit): GarchProcess =>
 
 const figure = 'A GARCH fit';
 
-const describe = (sample: StandardSample, maximum: NewtonMaximum, innovations: Innovations): GarchFit => {
+/** Returns as a fit sees them: less a mean, over a deviation. */
+type ScaledSample = Pick<StandardSample, 'values' | 'mean' | 'deviation'>;
+
+const describe = (sample: ScaledSample, maximum: NewtonMaximum, innovations: Innovations): GarchFit => {
   const { deviation } = sample;
   const value = (name: keyof typeof parameter): number => maximum.point[parameter[name]] as number;
   const error = (name: keyof typeof parameter): number => maximum.standardErrors[parameter[name]] as number;
@@ -95,7 +99,7 @@ const describe = (sample: StandardSample, maximum: NewtonMaximum, innovations: I
   };
 };
 
-const pointNear = (sample: StandardSample, near: GarchFit, innovations: Innovations): Float64Array =>
+const pointNear = (sample: ScaledSample, near: GarchFit, innovations: Innovations): Float64Array =>
   pointOf(
     (near.mu - sample.mean) / sample.deviation,
     Math.log(near.omega / sample.deviation ** 2),
@@ -138,16 +142,33 @@ export const fitGarch = (returns: Float64Array, options: GarchOptions = {}): Res
   return refuseMaximum(maximum, returns.length) ?? succeed(describe(sample, maximum, innovations));
 };
 
+/** Returns less the fitted mu, over the root of their mean square, so that a climb meets numbers near 1. */
+const scaleInto = (values: Float64Array, returns: Float64Array, mu: number): number => {
+  const deviation = Math.sqrt(presampleVariance(returns, mu));
+  for (let day = 0; day < values.length; day += 1) values[day] = ((returns[day] as number) - mu) / deviation;
+  return deviation;
+};
+
 /**
- * The fit again, to returns resampled from `near`: the climb from there alone, to 1e-4 standard errors, or the constant
- * variance alone where `near` found no clustering. Null where it does not finish inside the range that {@link fitGarch} reports.
+ * Fits again, and again, to `count` returns resampled from the fit `near`: each time the climb from there alone, until
+ * |gradient|·standard error ≤ 0.01 and one step of Newton more, which leaves about 1e-4 standard errors; the constant variance
+ * alone where `near` found no clustering. Null where a climb does not finish inside the range that {@link fitGarch} reports.
  */
-export const refitGarch = (returns: Float64Array, near: GarchFit): GarchFit | null => {
-  const { innovations } = near;
-  const sample = standardise(returns);
-  const maximum = near.clustering
-    ? climbResample(sample.values, pointNear(sample, near, innovations), innovations)
-    : fitConstantVariance(sample.values, innovations);
-  const chosen = noClustering(maximum) ? fitConstantVariance(sample.values, innovations) : maximum;
-  return refuseMaximum(chosen, returns.length) === null ? describe(sample, chosen, innovations) : null;
+export const startRefits = (
+  count: number,
+  near: GarchFit,
+): ((returns: Float64Array) => GarchProcess | null) => {
+  const { innovations, mu: mean } = near;
+  const values = new Float64Array(count);
+  const objective = garchObjective(values);
+  return (returns) => {
+    const deviation = scaleInto(values, returns, mean);
+    const sample = { values, mean, deviation };
+    const climbed = near.clustering
+      ? climbResample(objective, pointNear(sample, near, innovations), innovations)
+      : null;
+    const maximum =
+      climbed === null || noClustering(climbed) ? fitConstantVariance(objective, innovations) : climbed;
+    return refuseMaximum(maximum, count) === null ? processOf(describe(sample, maximum, innovations)) : null;
+  };
 };

@@ -20,13 +20,16 @@ export type FilteredReturns = {
  * Convention: h_t = ω + α·e²_{t−1} + β·h_{t−1} with e_t = r_t − mu; before the first day e²_0 = h_0 = mean (r − mu)².
  * Domain: at least 1 return; omega, alpha and beta ≥ 0, not all 0.
  * Units: returns as decimal fractions; omega and the next day's variance in their square; residuals have none.
- * Edges: alpha = beta = 0 is a constant variance omega.
+ * Edges: alpha = beta = 0 is a constant variance omega. Residuals are written into the array that is given, if one is.
  * Source: Bollerslev 1986, Journal of Econometrics 31, 307-327; start as in Fiorentini, Calzolari & Panattoni 1996.
  * Example: after a day of twice the usual size the next variance is larger than the last one.
  */
-export const filterByGarch = (returns: Float64Array, process: GarchProcess): FilteredReturns => {
+export const filterByGarch = (
+  returns: Float64Array,
+  process: GarchProcess,
+  residuals = new Float64Array(returns.length),
+): FilteredReturns => {
   const { mu, omega, alpha, beta } = process;
-  const residuals = new Float64Array(returns.length);
   let variance = presampleVariance(returns, mu);
   let squared = variance;
   for (let day = 0; day < returns.length; day += 1) {
@@ -41,7 +44,7 @@ export const filterByGarch = (returns: Float64Array, process: GarchProcess): Fil
 /**
  * Which returns would the same process have made of other residuals?
  * Convention: the recursion of {@link filterByGarch} run forward, r_t = mu + √h_t·z_t, from the presample variance of `returns`.
- * Domain, units, source: as there. `picks` are places in `residuals`, one for each day.
+ * Domain, units, source: as there. `picks` are places in `residuals`, one for each day; `rebuilt` is written, if it is given.
  * Example: picked in their own order the residuals give the returns back.
  */
 export const rebuildReturns = (
@@ -49,9 +52,9 @@ export const rebuildReturns = (
   process: GarchProcess,
   residuals: Float64Array,
   picks: Uint32Array,
+  rebuilt = new Float64Array(picks.length),
 ): Float64Array => {
   const { mu, omega, alpha, beta } = process;
-  const rebuilt = new Float64Array(picks.length);
   let variance = presampleVariance(returns, mu);
   let squared = variance;
   for (let day = 0; day < picks.length; day += 1) {

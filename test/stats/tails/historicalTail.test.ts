@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { binomialCdf, binomialUpperTail } from '../../../src/stats/distributions/binomial.ts';
 import { nextStudentT } from '../../../src/stats/random/studentDraw.ts';
 import { historicalTail } from '../../../src/stats/tails/historicalTail.ts';
+import { resampledShortfall } from '../../../src/stats/tails/internal/historicalEsInterval.ts';
 import { boundingRanks } from '../../../src/stats/tails/internal/rankInterval.ts';
 import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { indexReturns } from '../indexWindows.ts';
@@ -148,5 +149,24 @@ describe('The bootstrap interval of a historical ES', () => {
     const figures = accepted(ask(ladder(300), '0.95', '0.99999'));
     expect(figures.esInterval).toBeNull();
     expect(figures.notes.some(({ code }) => code === 'levelBeyondResamples')).toBe(true);
+  });
+});
+
+describe('The shortfall of a resample drawn from the largest down', () => {
+  it('has the mean that picks one by one would have', () => {
+    // SciPy 1.17.1: the j-th largest of 30 picks stands at or below place i with probability binom.sf(30 − j, 30, i/30); the
+    // mean of Σ over the places with losses i², the 4.5 largest of 30.
+    const losses = Float64Array.from({ length: 30 }, (_, index) => (index + 1) ** 2);
+    const shortfallOf = resampledShortfall(losses, 4.5);
+    const draws = 20_000;
+    let sum = 0;
+    for (let draw = 0; draw < draws; draw += 1) sum += shortfallOf(streams.stream(draw));
+    // One resample has a standard deviation of 67.7 (NumPy 2.4.6, 200,000 of them); four standard errors of the mean.
+    expect(Math.abs(sum / draws - 776.3140611765658)).toBeLessThan((4 * 67.7) / Math.sqrt(draws));
+  });
+
+  it('is the mean of all where all are expected, counted as often as they are picked', () => {
+    const shortfallOf = resampledShortfall(Float64Array.of(3, 3, 3), 3);
+    for (let draw = 0; draw < 20; draw += 1) expect(shortfallOf(streams.stream(draw))).toBe(3);
   });
 });

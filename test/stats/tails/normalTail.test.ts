@@ -1,5 +1,4 @@
 import { describe, expect, it } from 'vitest';
-import { noncentralTQuantile } from '../../../src/stats/distributions/noncentralT.ts';
 import { normalTail } from '../../../src/stats/tails/normalTail.ts';
 import { accepted, refusalCode } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
@@ -43,28 +42,24 @@ describe('The normal tail', () => {
     }
   });
 
-  it('has an interval of ES that scatters around the exact one', () => {
-    // −mean + k·s is a normal quantile for any k, so the noncentral t gives the interval that 999 resamples approach.
-    const returns = indexReturns('DAX', '250');
-    const figures = accepted(ask(returns));
-    const { mean, sampleStandardDeviation: s } = figures.parameters;
-    const multiplier = ((figures.es ?? Number.NaN) + mean) / s;
-    const root = Math.sqrt(250);
-    const exact = (p: number) => -mean + (s / root) * noncentralTQuantile(p, 249, multiplier * root);
-    const width = exact(0.975) - exact(0.025);
-    // The 25th of 999 order statistics of a bell curve scatters by √(p(1−p)/B)/density: 2.1% of this width; four granted.
-    expect(Math.abs((figures.esInterval?.lower ?? Number.NaN) - exact(0.025))).toBeLessThan(0.085 * width);
-    expect(Math.abs((figures.esInterval?.upper ?? Number.NaN) - exact(0.975))).toBeLessThan(0.085 * width);
-    expect(figures.esIntervalMethod).toBe('parametricBootstrap');
+  it('has the exact interval of ES', () => {
+    // SciPy 1.17.1, as above with the ES multiplier in the place of the quantile: k = norm.pdf(norm.ppf(0.99))/0.01.
+    const known = [
+      { window: '250', lower: 0.03420576258047724, upper: 0.04206131346404035 },
+      { window: 'all', lower: 0.025726687445515338, upper: 0.02772299220301851 },
+    ] as const;
+    for (const { window, lower, upper } of known) {
+      const { esInterval, esIntervalMethod } = accepted(ask(indexReturns('DAX', window)));
+      expect(relativeError(esInterval?.lower ?? Number.NaN, lower)).toBeLessThan(1e-11);
+      expect(relativeError(esInterval?.upper ?? Number.NaN, upper)).toBeLessThan(1e-11);
+      expect(esIntervalMethod).toBe('noncentralT');
+    }
   });
 
-  it('leaves the interval of ES out where 999 resamples cannot reach the confidence', () => {
-    const figures = accepted(ask(upAndDown(40), '0.99', '0.999'));
-    expect(figures.esInterval).toBeNull();
-    expect(figures.esIntervalMethod).toBeNull();
-    expect(figures.notes).toContainEqual(
-      expect.objectContaining({ figure: 'esInterval', code: 'levelBeyondResamples' }),
-    );
-    expect(figures.varInterval).not.toBeNull();
+  it('has both intervals at a confidence that no resampling reaches', () => {
+    const figures = accepted(ask(upAndDown(40), '0.99', '0.99999'));
+    expect(figures.esInterval?.lower).toBeLessThan(figures.es ?? Number.NaN);
+    expect(figures.esInterval?.upper).toBeGreaterThan(figures.es ?? Number.NaN);
+    expect(figures.notes).toEqual([]);
   });
 });

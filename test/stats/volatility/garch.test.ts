@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { simpleReturns } from '../../../src/stats/returns/returns.ts';
-import { fitGarch, type GarchFit, refitGarch } from '../../../src/stats/volatility/garch.ts';
+import { fitGarch, type GarchFit, processOf, startRefits } from '../../../src/stats/volatility/garch.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexCloses } from '../readFixture.ts';
 import { simulateGarchReturns } from './simulateReturns.ts';
@@ -88,9 +88,24 @@ describe('a refit to resampled returns', () => {
   test('of a constant variance stays one', () => {
     const [plain] = plainFits();
     if (plain === undefined) throw new Error('none of the samples is without clustering');
-    const again = refitGarch(plain.returns, plain.fit);
-    expect(again?.clustering).toBe(false);
-    expect(again?.omega).toBe(plain.fit.omega);
+    const again = startRefits(plain.returns.length, plain.fit)(plain.returns);
+    expect(again).toMatchObject({ alpha: 0, beta: 0 });
+    // Both climbs stop at 1e-8 standard errors, and that of omega is a tenth of it.
+    expect(relativeError(again?.omega ?? Number.NaN, plain.fit.omega)).toBeLessThan(1e-8);
+  });
+
+  test('ends within a thousandth of a standard error of the whole search, one after another', () => {
+    const fit = fitted(simulateGarchReturns(1000, clustered, 5, 3));
+    const refit = startRefits(1000, fit);
+    for (const path of [3, 11, 12, 3]) {
+      const returns = simulateGarchReturns(1000, clustered, 5, path);
+      const whole = fitted(returns);
+      const again = refit(returns);
+      const error = (name: 'mu' | 'omega' | 'alpha' | 'beta') =>
+        Math.abs((again?.[name] ?? Number.NaN) - processOf(whole)[name]) /
+        (whole.standardErrors[name] ?? Number.NaN);
+      for (const name of ['mu', 'omega', 'alpha', 'beta'] as const) expect(error(name)).toBeLessThan(1e-3);
+    }
   });
 });
 

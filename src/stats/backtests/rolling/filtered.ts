@@ -1,7 +1,7 @@
 import { ceilingOfCount, expectedBeyond } from '../../../terms/level.ts';
 import type { Problem } from '../../../terms/problem.ts';
 import { type Result, succeed } from '../../../terms/result.ts';
-import { lossesAscending, meanBeyond } from '../../losses/losses.ts';
+import { meanBeyond, worstLossesLast } from '../../losses/losses.ts';
 import { refuseStill } from '../../returns/leastCounts.ts';
 import { filteredKinds } from '../../tails/filtered/filteredKinds.ts';
 import { refuseTooFewForLevel } from '../../tails/historicalTail.ts';
@@ -59,7 +59,7 @@ export const startFiltered: StartForecaster = (span) => {
       if (!filtered.ok) return filtered.problem;
       const { mu, residuals, nextVariance } = filtered.value;
       const deviation = Math.sqrt(nextVariance);
-      const losses = lossesAscending(residuals);
+      const losses = worstLossesLast(residuals, rank);
       into.valueAtRisk = deviation * (losses[rank - 1] as number) - mu;
       into.expectedShortfall = deviation * meanBeyond(losses, rank, beyond) - mu;
       tails.keep(day, losses);

@@ -9,7 +9,8 @@ import type { RollingSpan } from './rollingForecaster.ts';
  * the empirical ES.
  */
 export type KeptTails = {
-  readonly keep: (day: number, lossesAscending: Float64Array) => void;
+  /** Of the losses those from rank k up must stand in ascending order. */
+  readonly keep: (day: number, losses: Float64Array) => void;
   readonly draw: (day: number, random: Random) => number;
 };
 
@@ -24,10 +25,10 @@ export const createKeptTails = ({
   const width = beyond + 1;
   const kept = new Float64Array(width * dayCount);
   return {
-    keep: (day, lossesAscending) => {
+    keep: (day, losses) => {
       const start = width * (day - firstDay);
       for (let place = 0; place < width; place += 1)
-        kept[start + place] = lossesAscending[estimationReturns - 1 - place] as number;
+        kept[start + place] = losses[estimationReturns - 1 - place] as number;
     },
     draw: (day, random) => {
       const place = Math.min(beyond, Math.floor(nextDouble(random) * weight));

@@ -1,35 +1,30 @@
-import { expectedBeyond, type Level, levelText } from '../../../terms/level.ts';
-import { independentDraw } from '../../bootstrap/draws.ts';
+import { countWithBeyond, expectedBeyond, levelText } from '../../../terms/level.ts';
+import type { Random } from '../../../terms/random.ts';
 import { endRanks } from '../../bootstrap/ranks.ts';
-import { defaultReplicates, type ResampledStatistic, sortedReplicates } from '../../bootstrap/replicates.ts';
+import { defaultReplicates } from '../../bootstrap/replicates.ts';
 import { orderStatistic } from '../../numerics/quantile.ts';
+import { nextOpenDouble } from '../../random/draws.ts';
 import type { Interval, TailInput, TailNote } from '../tailFigures.ts';
 
 /** Returns expected beyond the level below which resamples of the tail say too little. */
 const leastExpectedBeyond = 10;
 
-/** The smallest count with `least` returns expected beyond the level. */
-const countWithBeyond = (level: Level, least: number): number => {
-  const scale = 10n ** BigInt(level.places);
-  const tail = scale - BigInt(level.digits);
-  return Number((BigInt(least) * scale + tail - 1n) / tail);
-};
-
-/** ES of a resample given as picks into the ascending losses: counted per loss, then summed from the largest down. */
-const esOfPicks = (losses: Float64Array, expected: number): ResampledStatistic => {
-  const timesPicked = new Uint32Array(losses.length);
-  return ([picks]) => {
-    timesPicked.fill(0);
-    for (let place = 0; place < picks.length; place += 1) {
-      const pick = picks[place] as number;
-      timesPicked[pick] = (timesPicked[pick] as number) + 1;
-    }
+/**
+ * ES of a resample of the ascending losses. Only its `expected` largest picks count, and they are drawn alone, the largest
+ * first: of n places drawn at random from the whole, the share of places above the j-th highest is 1 − exp(−Σ_{i≤j} E_i/(n − i + 1)), E standard
+ * exponential. A resample drawn pick by pick has the same distribution and takes n draws instead of n(1−a).
+ */
+export const resampledShortfall = (losses: Float64Array, expected: number): ((random: Random) => number) => {
+  const count = losses.length;
+  return (random) => {
     let left = expected;
+    let exponent = 0;
     let sum = 0;
-    for (let index = losses.length - 1; left > 0; index -= 1) {
-      const taken = Math.min(timesPicked[index] as number, left);
-      sum += taken * (losses[index] as number);
-      left -= taken;
+    for (let rank = count; left > 0; rank -= 1) {
+      exponent -= Math.log(nextOpenDouble(random)) / rank;
+      const above = Math.floor(-count * Math.expm1(-exponent));
+      sum += Math.min(1, left) * (losses[Math.max(0, count - 1 - above)] as number);
+      left -= 1;
     }
     return sum / expected;
   };
@@ -58,12 +53,11 @@ export const historicalEsInterval = (
   }
   const ranks = endRanks(confidence, 'both', replicates);
   if (!ranks.ok) return without('levelBeyondResamples', ranks.problem.message, null);
-  const resampled = sortedReplicates({
-    draws: [independentDraw(count)],
-    statistic: esOfPicks(losses, expected),
-    streams,
-    replicates,
-  });
+  const shortfallOf = resampledShortfall(losses, expected);
+  const resampled = new Float64Array(replicates);
+  for (let replicate = 0; replicate < replicates; replicate += 1)
+    resampled[replicate] = shortfallOf(streams.stream(replicate));
+  resampled.sort();
   const lower = orderStatistic(resampled, ranks.value.lower);
   const upper = orderStatistic(resampled, ranks.value.upper);
   return { interval: { lower, upper }, notes: [] };

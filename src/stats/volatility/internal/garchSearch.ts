@@ -1,5 +1,5 @@
-import { maximiseByNewton, type NewtonMaximum } from '../../numerics/boundedNewton.ts';
-import { differentiateGarch } from './garchDerivatives.ts';
+import { maximiseByNewton, type NewtonMaximum, type SmoothObjective } from '../../numerics/boundedNewton.ts';
+import { garchObjective } from './garchDerivatives.ts';
 import { garchLogLikelihood, parameter, parameterCount } from './garchLikelihood.ts';
 
 /** Which innovations a fit allows; `normal` holds 1/nu at 0. */
@@ -15,8 +15,10 @@ const largestPersistence = 1.2;
 
 /** A reported fit is finished at this |gradient|·standard error. */
 const tolerance = 1e-8;
-/** Close enough to tell summits apart, and to lose what is left in the noise of a resample. */
+/** Close enough to tell summits apart. */
 const coarseTolerance = 1e-4;
+/** The last step of a climb squares what is left, so a resample ends near 1e-4 standard errors of its summit. */
+const resampleTolerance = 1e-2;
 /** Enough for a climb with a clear summit; only the highest is followed to the end. */
 const stepsToExplore = 40;
 const stepsToFinish = 300;
@@ -46,18 +48,18 @@ const highestInverseNu = (innovations: Innovations): number =>
 
 /** Newton's climb from one start; α and β may be held at 0, which is the constant variance. */
 const climbFrom = (
-  returns: Float64Array,
+  objective: SmoothObjective,
   start: Float64Array,
   innovations: Innovations,
   constantVariance: boolean,
   maxSteps: number,
   stopAt = tolerance,
-): NewtonMaximum =>
-  maximiseByNewton(
+): NewtonMaximum => {
+  return maximiseByNewton(
     (point, gradient, hessian) =>
       (point[parameter.alpha] as number) + (point[parameter.beta] as number) > largestPersistence
         ? -Infinity
-        : differentiateGarch(returns, point, gradient, hessian),
+        : objective(point, gradient, hessian),
     start,
     {
       lower: pointOf(-Infinity, leastLogOmega, 0, 0, 0),
@@ -72,6 +74,7 @@ const climbFrom = (
       maxSteps,
     },
   );
+};
 
 /** The most promising start of each band. The grid is fixed, which makes the search deterministic. */
 const chooseStarts = (returns: Float64Array, inverseNu: number): Float64Array[] =>
@@ -92,9 +95,9 @@ const chooseStarts = (returns: Float64Array, inverseNu: number): Float64Array[] 
 export type GarchSearch = { readonly clustered: NewtonMaximum; readonly constant: NewtonMaximum };
 
 /** The constant variance alone: α = β = 0. */
-export const fitConstantVariance = (returns: Float64Array, innovations: Innovations): NewtonMaximum => {
+export const fitConstantVariance = (objective: SmoothObjective, innovations: Innovations): NewtonMaximum => {
   const inverseNu = Math.min(startInverseNu, highestInverseNu(innovations));
-  return climbFrom(returns, pointOf(0, 0, 0, 0, inverseNu), innovations, true, stepsToFinish);
+  return climbFrom(objective, pointOf(0, 0, 0, 0, inverseNu), innovations, true, stepsToFinish);
 };
 
 /** One climb from a known point nearby, such as yesterday's fit. */
@@ -102,34 +105,39 @@ export const climbNear = (
   returns: Float64Array,
   start: Float64Array,
   innovations: Innovations,
-): NewtonMaximum => climbFrom(returns, start, innovations, false, stepsToExplore);
+): NewtonMaximum => climbFrom(garchObjective(returns), start, innovations, false, stepsToExplore);
 
 /** A climb that stops short of the last digits, and need not arrive: one that creeps along α = 0 is left where it is. */
-const explore = (returns: Float64Array, start: Float64Array, innovations: Innovations): NewtonMaximum =>
-  climbFrom(returns, start, innovations, false, stepsToExplore, coarseTolerance);
+const explore = (
+  objective: SmoothObjective,
+  start: Float64Array,
+  innovations: Innovations,
+  stopAt = coarseTolerance,
+): NewtonMaximum => climbFrom(objective, start, innovations, false, stepsToExplore, stopAt);
 
 /**
  * The climb for a resample of the returns that were fitted at `start`. Most need five steps; one that creeps along α = 0
  * is not followed further, because the constant variance that it stands for is fitted by itself.
  */
 export const climbResample = (
-  returns: Float64Array,
+  objective: SmoothObjective,
   start: Float64Array,
   innovations: Innovations,
 ): NewtonMaximum => {
-  const first = explore(returns, start, innovations);
+  const first = explore(objective, start, innovations, resampleTolerance);
   const unfinished = !first.converged && first.point[parameter.alpha] !== 0;
-  return unfinished ? explore(returns, first.point, innovations) : first;
+  return unfinished ? explore(objective, first.point, innovations, resampleTolerance) : first;
 };
 
 /** Searches from every promising start. `returns` have mean 0 and mean square 1. */
 export const searchGarch = (returns: Float64Array, innovations: Innovations): GarchSearch => {
   const inverseNu = Math.min(startInverseNu, highestInverseNu(innovations));
-  const climbs = chooseStarts(returns, inverseNu).map((start) => explore(returns, start, innovations));
+  const objective = garchObjective(returns);
+  const climbs = chooseStarts(returns, inverseNu).map((start) => explore(objective, start, innovations));
   const highest = climbs.reduce((best, next) => (next.value > best.value ? next : best));
   const clusters = highest.point[parameter.alpha] !== 0;
   return {
-    clustered: clusters ? climbFrom(returns, highest.point, innovations, false, stepsToFinish) : highest,
-    constant: fitConstantVariance(returns, innovations),
+    clustered: clusters ? climbFrom(objective, highest.point, innovations, false, stepsToFinish) : highest,
+    constant: fitConstantVariance(objective, innovations),
   };
 };

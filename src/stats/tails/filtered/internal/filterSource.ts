@@ -2,7 +2,7 @@ import type { Random } from '../../../../terms/random.ts';
 import { type Result, succeed } from '../../../../terms/result.ts';
 import { independentDraw } from '../../../bootstrap/draws.ts';
 import { ewmaProcess } from '../../../volatility/ewma.ts';
-import { fitGarch, type GarchFit, processOf, refitGarch } from '../../../volatility/garch.ts';
+import { fitGarch, type GarchFit, processOf, startRefits } from '../../../volatility/garch.ts';
 import {
   type FilteredReturns,
   filterByGarch,
@@ -25,7 +25,7 @@ export type FilterSource = {
   /**
    * The state after the path was rebuilt from resampled residuals and filtered anew. The next day's variance is that of
    * the returns as they were, under the parameters of the resample: the past is known, the parameters are not.
-   * Null where the refit failed.
+   * Null where the refit failed. Its residuals stand in an array that the next resample writes anew.
    */
   readonly resample: (random: Random) => FilterState | null;
 };
@@ -48,13 +48,15 @@ const sourceOf = (
   const state = stateOf(returns, fit === null ? ewmaProcess : processOf(fit));
   const draw = independentDraw(returns.length);
   const picks = new Uint32Array(returns.length);
+  const rebuilt = new Float64Array(returns.length);
+  const refiltered = new Float64Array(returns.length);
   const resample = (random: Random): FilterState | null => {
     draw.fill(random, picks);
-    const rebuilt = rebuildReturns(returns, state.process, state.residuals, picks);
+    rebuildReturns(returns, state.process, state.residuals, picks, rebuilt);
     const refitted = refit(rebuilt);
     if (refitted === null) return null;
-    const { mu, residuals } = filterByGarch(rebuilt, refitted);
-    const { nextVariance } = filterByGarch(returns, refitted);
+    const { mu, residuals } = filterByGarch(rebuilt, refitted, refiltered);
+    const { nextVariance } = refitted === state.process ? state : filterByGarch(returns, refitted);
     return { process: refitted, mu, residuals, nextVariance };
   };
   return { kind, fit, state, replicates, resample };
@@ -70,9 +72,5 @@ export const filterSource = (
   const fitted = fitGarch(returns, near === undefined ? {} : { near });
   if (!fitted.ok) return fitted;
   const fit = fitted.value;
-  const refit = (rebuilt: Float64Array): GarchProcess | null => {
-    const again = refitGarch(rebuilt, fit);
-    return again === null ? null : processOf(again);
-  };
-  return succeed(sourceOf(kind, returns, fit, garchReplicates, refit));
+  return succeed(sourceOf(kind, returns, fit, garchReplicates, startRefits(returns.length, fit)));
 };

@@ -61,8 +61,9 @@ export const resampledFigures = (source: FilterSource, input: TailInput): Resamp
   if (!ranks.ok) return withoutAny([note('varInterval', 'levelBeyondResamples', ranks.problem.message)]);
   const vars = new Float64Array(replicates);
   const shortfalls = new Float64Array(replicates);
+  const scratch = new Float64Array(input.returns.length);
   const resampled = visitResampledStates(source, input.streams, replicates, (state, replicate) => {
-    const figures = stateFigures(state, input.tailLevel);
+    const figures = stateFigures(state, input.tailLevel, scratch);
     vars[replicate] = figures.var;
     shortfalls[replicate] = figures.es;
   });

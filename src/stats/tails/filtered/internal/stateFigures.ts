@@ -1,18 +1,19 @@
 import { ceilingOfCount, expectedBeyond, type Level } from '../../../../terms/level.ts';
-import { lossesAscending, meanBeyond } from '../../../losses/losses.ts';
+import { meanBeyond, worstLossesLast } from '../../../losses/losses.ts';
 import { orderStatistic } from '../../../numerics/quantile.ts';
 import type { FilterState } from './filterSource.ts';
 
 /** Losses as positive decimal fractions. */
 export type StateFigures = { readonly var: number; readonly es: number };
 
-/** The historical figures of the residuals' losses −z, times the next day's deviation, less mu. */
+/** The historical figures of the residuals' losses −z, times the next day's deviation, less mu. The losses go to `scratch`. */
 export const stateFigures = (
   { mu, residuals, nextVariance }: FilterState,
   tailLevel: Level,
+  scratch = new Float64Array(residuals.length),
 ): StateFigures => {
-  const losses = lossesAscending(residuals);
-  const rank = ceilingOfCount(losses.length, tailLevel);
+  const rank = ceilingOfCount(residuals.length, tailLevel);
+  const losses = worstLossesLast(residuals, rank, scratch);
   const deviation = Math.sqrt(nextVariance);
   const shortfall = meanBeyond(losses, rank, expectedBeyond(losses.length, tailLevel));
   return { var: deviation * orderStatistic(losses, rank) - mu, es: deviation * shortfall - mu };
