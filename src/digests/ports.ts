@@ -2,8 +2,10 @@ import type { Answers } from '../answers/answer.ts';
 import type { StatisticalQuestion } from '../questions/question.ts';
 import type { InstantMs } from '../terms/clock.ts';
 import type { Day } from '../terms/day.ts';
+import type { Level } from '../terms/level.ts';
 import type { PriceSeries } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
+import type { ReturnType } from '../terms/returns.ts';
 import type { ScheduledPost } from '../terms/scheduledPosts.ts';
 import type { Claim, NewSubscription, Subscription, SubscriptionFilter } from '../terms/subscriptions.ts';
 
@@ -44,8 +46,12 @@ export type PricesNow = {
   readonly series: (ticker: string) => PriceSeries | null;
   /** Why a ticker of the feed is not served, as a sentence; null where it is served or not there. */
   readonly heldBack: (ticker: string) => string | null;
-  /** The simple return of the last day; null where there is none. */
-  readonly lastReturn: (ticker: string) => number | null;
+  /** The returns of the days after a day, oldest first; after null: of the last day alone. */
+  readonly returnsAfter: (
+    ticker: string,
+    after: Day | null,
+    returnType: ReturnType,
+  ) => readonly { readonly day: Day; readonly value: number }[];
   /** The latest session of a ticker whose closes should be in at an instant. */
   readonly expectedDay: (ticker: string, atMs: InstantMs) => Day;
   /** A statistical question answered, and kept on record as asked by the subscription. */
@@ -81,4 +87,4 @@ export type PlaceVerdict =
 export type PlaceState = (team: string, channel: string, owner: string) => Promise<PlaceVerdict>;
 
 /** What chance alone brings: the share of models that are right and yet not in the green zone after so many days. */
-export type ChanceOfNonGreen = (days: number, tailLevel: number) => number | null;
+export type ChanceOfNonGreen = (days: number, tailLevel: Level) => number | null;

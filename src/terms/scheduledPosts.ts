@@ -31,7 +31,7 @@ export type DigestFigures = {
   /** Ids of the answers on record. */
   readonly tailId: string;
   readonly backtestId: string | null;
-  /** The sentences of those answers, and what they warn of. */
+  /** What those answers warn of. */
   readonly warnings: readonly string[];
 };
 
@@ -71,6 +71,9 @@ export type DigestPost = {
   readonly lines: readonly DigestLine[];
   readonly byChance: ByChance;
 };
+
+/** What stands in the thread below a digest: each ticker with the ids of its answers and what they warn of. */
+export type DigestDetail = Omit<DigestPost, 'kind'> & { readonly kind: 'detail' };
 
 /** The one line that follows a digest on old prices once the new ones are in. */
 export type FreshPost = Omit<DigestPost, 'kind'> & { readonly kind: 'fresh' };
@@ -112,9 +115,11 @@ export type OwnerNote = {
   readonly kind: 'note';
   readonly id: string;
   readonly subject: 'digest' | 'watch';
-  readonly what: 'paused' | 'stopped' | 'resumed';
+  readonly what: 'paused' | 'stopped';
+  /** Where it posted. */
+  readonly channel: string;
   /** Why, as a short code of the place: archived, notMember, shared, ... */
   readonly why: string;
 };
 
-export type ScheduledPost = DigestPost | FreshPost | WatchPost | OwnerNote;
+export type ScheduledPost = DigestPost | DigestDetail | FreshPost | WatchPost | OwnerNote;
