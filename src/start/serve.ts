@@ -7,6 +7,7 @@ import { createPermissions } from '../workspaces/access/createPermissions.ts';
 import { type Converse, createConverse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
+import type { WhenUnsure } from '../workspaces/slack/settings.ts';
 import { startTerminal } from '../workspaces/terminal/start.ts';
 import { readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
@@ -35,6 +36,7 @@ type Serving = {
   readonly records: Reopening;
   readonly permissions: Permissions;
   readonly places: Places;
+  readonly whenUnsure: WhenUnsure;
 };
 
 /** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
@@ -109,6 +111,7 @@ const main = async (): Promise<number> => {
     records: store,
     permissions,
     places,
+    whenUnsure: settings.slack.whenUnsure,
   };
   try {
     return workspace.value.kind === 'slack'

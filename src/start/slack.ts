@@ -2,10 +2,11 @@ import type { WorkspaceToStart } from '../config/tokens.ts';
 import type { Problem } from '../terms/problem.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import type { Permissions } from '../workspaces/permissions.ts';
+import type { DurableStore } from '../workspaces/slack/durable/ports.ts';
 import type { Places } from '../workspaces/slack/places/places.ts';
 import type { Logger } from '../workspaces/slack/ports.ts';
-import { noInbox, seenInMemory } from '../workspaces/slack/seen.ts';
-import type { SlackSettings } from '../workspaces/slack/settings.ts';
+import { seenInMemory } from '../workspaces/slack/seen.ts';
+import type { SlackSettings, WhenUnsure } from '../workspaces/slack/settings.ts';
 import { startSlack } from '../workspaces/slack/start.ts';
 import { machineTime } from './machineTime.ts';
 import { slackConversation } from './slackConversation.ts';
@@ -13,7 +14,7 @@ import { slackConversation } from './slackConversation.ts';
 /** Two sockets, so that one can be opened anew while the other hears. */
 const sockets = 2;
 
-const settingsOf = (workspace: WorkspaceToStart & { kind: 'slack' }): SlackSettings => ({
+const settingsOf = (workspace: WorkspaceToStart & { kind: 'slack' }): Omit<SlackSettings, 'whenUnsure'> => ({
   botToken: workspace.botToken.reveal(),
   apiUrl: workspace.apiUrl,
   receiving:
@@ -38,25 +39,30 @@ export type InSlack = {
   readonly tickers: () => readonly string[];
   readonly permissions: Permissions;
   readonly places: Places;
+  readonly records: DurableStore;
+  readonly whenUnsure: WhenUnsure;
 };
 
 /** Answers in Slack until the process is told to stop; the problem where it could not begin. */
 export const runSlack = async (
   workspace: WorkspaceToStart & { kind: 'slack' },
-  { converse, tickers, permissions, places }: InSlack,
+  { converse, tickers, permissions, places, records, whenUnsure }: InSlack,
   log: Logger,
   newId: () => string,
 ): Promise<Problem | null> => {
-  const started = await startSlack(settingsOf(workspace), {
-    conversation: slackConversation(converse, tickers, permissions),
-    log,
-    time: machineTime,
-    newId,
-    seen: seenInMemory(),
-    inbox: noInbox,
-    places,
-    onNews: async () => {},
-  });
+  const started = await startSlack(
+    { ...settingsOf(workspace), whenUnsure },
+    {
+      conversation: slackConversation(converse, tickers, permissions),
+      log,
+      time: machineTime,
+      newId,
+      seen: seenInMemory(),
+      store: records,
+      places,
+      onNews: async () => {},
+    },
+  );
   if (!started.ok) return started.problem;
   const { port } = started.value;
   log.info(port === null ? 'answering in Slack over sockets' : `answering in Slack on port ${port}`);

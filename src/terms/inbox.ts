@@ -1,4 +1,5 @@
 import type { InstantMs } from './clock.ts';
+import type { MessageContent } from './delivery.ts';
 
 /** Something that a person asked of the bot, as it is kept until it is dealt with. */
 export type InboxEvent = {
@@ -12,13 +13,17 @@ export type InboxEvent = {
   readonly body: string;
 };
 
-/** A message in the workspace. */
-export type MessagePlace = { readonly channel: string; readonly ts: string };
+/** A message in the workspace with what it says, or is about to say. */
+export type PostedContent = {
+  readonly channel: string;
+  readonly ts: string;
+  readonly content: MessageContent;
+};
 
 export type KeptEvent = InboxEvent & {
   /** How often somebody began to deal with it. */
   readonly tries: number;
-  /** The message that was to be changed into the answer, and may have been. */
-  readonly editing: MessagePlace | null;
+  /** The message that was to be changed into the answer, and may have been; null where none was. */
+  readonly editing: PostedContent | null;
   readonly settled: boolean;
 };

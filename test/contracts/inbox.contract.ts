@@ -71,7 +71,7 @@ export const inboxContract = (name: string, open: () => Promise<Store>): void =>
       accepted(await inbox.keep(eventOf('E2', { messageKey: 'M', askedAtMs: 2 }), leaseOf('ann'), 10));
       accepted(await inbox.keep(eventOf('E1', { messageKey: 'M', askedAtMs: 1 }), leaseOf('ann'), 10));
       accepted(await inbox.keep(eventOf('E3', { messageKey: null }), leaseOf('ann'), 10));
-      const at = { channel: 'C1', ts: '5.5' };
+      const at = { channel: 'C1', ts: '5.5', content: { text: 'so', blocks: [{ type: 'divider' }] } };
       accepted(await inbox.willEdit('E2', at));
       accepted(await inbox.settle('E1', 12));
       expect(accepted(await inbox.ofMessage('M'))).toMatchObject([

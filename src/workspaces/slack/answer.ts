@@ -1,11 +1,16 @@
+import type { Deliveries } from '../deliveries.ts';
 import type { Destination } from './deliver.ts';
+import { replyKey } from './keys.ts';
 import { inWords } from './log.ts';
-import { startPlaceholder } from './placeholder.ts';
-import type { Logger, SpokenReply, Time } from './ports.ts';
+import { leftStanding, startPlaceholder } from './placeholder.ts';
+import type { EventMemory, Logger, SpokenReply, Time } from './ports.ts';
 import type { At, Voice } from './post.ts';
 
 /** Where replies go and who asked for them. */
 export type ReplyPlace = Destination & {
+  /** What the keys of the replies follow from, so that none is said twice. */
+  readonly eventKey: string;
+  readonly team: string;
   readonly user: string;
   readonly direct: boolean;
   /** The question stood in a thread itself: a private reply shows there only then. */
@@ -15,7 +20,14 @@ export type ReplyPlace = Destination & {
 /** A reply that stands in the workspace, with what it says. */
 export type Posted = At & { readonly reply: SpokenReply };
 
-export type Speaking = { readonly voice: Voice; readonly time: Time; readonly log: Logger };
+export type Speaking = {
+  readonly voice: Voice;
+  /** Says each key once, whatever happens. `sayAgain`: somebody whose trace is lost may have said it before. */
+  readonly deliveries: Deliveries & { readonly sayAgain: Deliveries['say'] };
+  readonly memory: EventMemory;
+  readonly time: Time;
+  readonly log: Logger;
+};
 
 /** Makes the replies; may say how far it has come. */
 export type Produce = (progress: (words: string) => void) => Promise<readonly SpokenReply[]>;
@@ -43,27 +55,56 @@ export const repliesOrApology = async (
   }
 };
 
+/** A person does not wait longer than this; what could not be said by then is not said any more. */
+const replyLifeMs = 3_600_000;
+
+type Saying = { readonly place: ReplyPlace; readonly again: boolean };
+
 const say = async (
-  { voice }: Speaking,
-  place: ReplyPlace,
+  { voice, deliveries, time }: Speaking,
+  { place, again }: Saying,
   reply: SpokenReply,
+  number: number,
 ): Promise<readonly Posted[]> => {
   if (reply.private && !place.direct) {
     await voice.whisper({ ...place, threadTs: place.askedInThread ? place.threadTs : null }, reply);
     return [];
   }
-  const delivered = await voice.post(place, reply);
-  return delivered.ok ? [{ channel: place.channel, ts: delivered.ts, reply }] : [];
+  const { eventKey, team, channel, threadTs } = place;
+  const outcome = await deliveries[again ? 'sayAgain' : 'say']({
+    key: replyKey(eventKey, number),
+    team,
+    channel,
+    threadTs,
+    content: { text: reply.text, blocks: reply.blocks },
+    urgent: true,
+    expiresAtMs: time.nowMs() + replyLifeMs,
+  });
+  return outcome.kind === 'said' ? [{ channel, ts: outcome.ts, reply }] : [];
 };
 
-const sayAll = async (
+const sayFrom = async (
   speaking: Speaking,
-  place: ReplyPlace,
+  saying: Saying,
   replies: readonly SpokenReply[],
+  from: number,
 ): Promise<readonly Posted[]> => {
   const posted: Posted[] = [];
-  for (const reply of replies) posted.push(...(await say(speaking, place, reply)));
+  for (const [index, reply] of replies.entries())
+    if (index >= from) posted.push(...(await say(speaking, saying, reply, index)));
   return posted;
+};
+
+/** Changes the placeholder into the first reply, where it may become that; whether it did. */
+const becomes = async (
+  { voice, memory }: Speaking,
+  { eventKey, direct }: ReplyPlace,
+  standing: At,
+  first: SpokenReply | undefined,
+): Promise<boolean> => {
+  if (first === undefined || (first.private && !direct)) return false;
+  await memory.willEdit(eventKey, { ...standing, content: { text: first.text, blocks: first.blocks } });
+  return voice.updateNow(standing, first);
 };
 
 /** Says the replies in the place, in order, with a placeholder meanwhile where they take long. */
@@ -72,20 +113,21 @@ export const answerIn = async (
   place: ReplyPlace,
   produce: Produce,
 ): Promise<readonly Posted[]> => {
-  const { voice, time, log } = speaking;
+  const { deliveries, memory, time, voice, log } = speaking;
   const beganMs = time.nowMs();
-  const placeholder = startPlaceholder(voice, time, log, place);
+  const { again, standing: left, editing } = await memory.recall(place.eventKey);
+  const placeholder =
+    left === null ? startPlaceholder({ voice, deliveries, time, log }, place) : leftStanding(left);
   const replies = await repliesOrApology(log, () => produce(placeholder.progress));
-  const tookMs = time.nowMs() - beganMs;
+  const inTime = again ? editing !== null : time.nowMs() - beganMs < editLimitMs;
   const standing = await placeholder.end();
-  if (standing === null) return sayAll(speaking, place, replies);
+  const saying = { place, again };
+  if (standing === null) return sayFrom(speaking, saying, replies, 0);
 
-  const [first, ...others] = replies;
-  const takesItsPlace = first !== undefined && !(first.private && !place.direct) && tookMs < editLimitMs;
-  if (takesItsPlace && (await voice.updateNow(standing, first))) {
-    return [{ ...standing, reply: first }, ...(await sayAll(speaking, place, others))];
-  }
-  const posted = await sayAll(speaking, place, replies);
+  const [first] = replies;
+  if (inTime && first !== undefined && (await becomes(speaking, place, standing, first)))
+    return [{ ...standing, reply: first }, ...(await sayFrom(speaking, saying, replies, 1))];
+  const posted = await sayFrom(speaking, saying, replies, 0);
   await voice.remove(standing);
   return posted;
 };

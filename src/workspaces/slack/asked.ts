@@ -12,7 +12,8 @@ export type Asked = {
 
 /** Questions that can still be edited to some effect, by the key of their message. */
 export type AskedQuestions = {
-  readonly recall: (key: string) => Asked | null;
+  /** What the message asked before the event that is dealt with now. */
+  readonly recall: (messageKey: string, eventKey: string) => Promise<Asked | null>;
   readonly remember: (key: string, asked: Asked) => void;
 };
 
@@ -27,7 +28,7 @@ export const askedInMemory = (clock: Clock): AskedQuestions => {
   };
 
   return {
-    recall: (key) => known.get(key)?.asked ?? null,
+    recall: async (key) => known.get(key)?.asked ?? null,
     remember: (key, asked) => {
       forgetOld();
       known.delete(key);

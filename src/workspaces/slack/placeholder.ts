@@ -1,10 +1,14 @@
+import type { Deliveries } from '../deliveries.ts';
 import type { Destination } from './deliver.ts';
+import { placeholderKey } from './keys.ts';
 import { inWords } from './log.ts';
 import type { Logger, Time } from './ports.ts';
 import type { At, Voice } from './post.ts';
 
 const waitMs = 1_500;
 const progressMs = 5_000;
+/** A sign of life that comes later than this is none: whoever takes the answer over says something better. */
+const lifeMs = 15_000;
 const standing = 'Working on it.';
 
 /** A sign of life where an answer takes long. */
@@ -15,7 +19,20 @@ export type Placeholder = {
   readonly end: () => Promise<At | null>;
 };
 
-export const startPlaceholder = (voice: Voice, time: Time, log: Logger, to: Destination): Placeholder => {
+export type PlaceholderDesk = {
+  readonly voice: Voice;
+  readonly deliveries: Deliveries;
+  readonly time: Time;
+  readonly log: Logger;
+};
+
+/** A placeholder that an earlier try has left: it says nothing more until it is ended. */
+export const leftStanding = (at: At): Placeholder => ({ progress: () => {}, end: async () => at });
+
+export const startPlaceholder = (
+  { voice, deliveries, time, log }: PlaceholderDesk,
+  to: Destination & { readonly eventKey: string; readonly team: string },
+): Placeholder => {
   let words = standing;
   let shown: { readonly words: string; readonly sinceMs: number; readonly at: At } | null = null;
   let ended = false;
@@ -54,8 +71,17 @@ export const startPlaceholder = (voice: Voice, time: Time, log: Logger, to: Dest
   };
 
   later(waitMs, async (said) => {
-    const delivered = await voice.post(to, { text: said, blocks: [] });
-    return delivered.ok ? { channel: to.channel, ts: delivered.ts } : null;
+    const { team, channel, threadTs, eventKey } = to;
+    const outcome = await deliveries.say({
+      key: placeholderKey(eventKey),
+      team,
+      channel,
+      threadTs,
+      content: { text: said, blocks: [] },
+      urgent: true,
+      expiresAtMs: time.nowMs() + lifeMs,
+    });
+    return outcome.kind === 'said' ? { channel, ts: outcome.ts } : null;
   });
 
   return {

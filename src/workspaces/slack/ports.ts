@@ -1,6 +1,8 @@
 import type { Clock } from '../../terms/clock.ts';
+import type { PostedContent } from '../../terms/inbox.ts';
 import type { AskedFrom } from '../../terms/records.ts';
 import type { News } from '../news.ts';
+import type { DurableStore } from './durable/ports.ts';
 import type { Places } from './places/places.ts';
 
 /** Where a question was asked. */
@@ -65,11 +67,34 @@ export type SeenEvents = { readonly firstSeen: (key: string) => Promise<boolean>
 /** What the platform sent, before anyone has looked at it. */
 export type Received = { readonly body: Readonly<Record<string, unknown>>; readonly retryNumber: number };
 
+/** Something that arrived and is to be dealt with now. */
+export type Dealing = {
+  /** False where the store could not keep it: then it is acknowledged only once it is dealt with. */
+  readonly kept: boolean;
+  /** Says that it is dealt with. */
+  readonly done: () => Promise<void>;
+};
+
 /**
  * Keeps what arrives until it is dealt with. The platform is told that it arrived only after `keep` is done, and it sends
- * again what `keep` fails on.
+ * again what `keep` fails on. Null: it was dealt with, or is under way.
  */
-export type Inbox = { readonly keep: (received: Received) => Promise<void> };
+export type Inbox = { readonly keep: (received: Received) => Promise<Dealing | null> };
+
+/** What an earlier try at an answer, cut short by a crash, has left in the workspace. */
+export type Recalled = {
+  readonly again: boolean;
+  /** The placeholder that may still stand. */
+  readonly standing: { readonly channel: string; readonly ts: string } | null;
+  /** The placeholder that was to become the answer, with what it was to say. */
+  readonly editing: PostedContent | null;
+};
+
+export type EventMemory = {
+  readonly recall: (eventKey: string) => Promise<Recalled>;
+  /** Notes that a message is about to be changed into the answer. */
+  readonly willEdit: (eventKey: string, into: PostedContent) => Promise<void>;
+};
 
 export type SlackPorts = {
   readonly conversation: Conversation;
@@ -78,7 +103,8 @@ export type SlackPorts = {
   /** A new opaque identifier, never the same twice. */
   readonly newId: () => string;
   readonly seen: SeenEvents;
-  readonly inbox: Inbox;
+  /** What makes receiving and sending survive the process. */
+  readonly store: DurableStore;
   /** What is known of channels and people. */
   readonly places: Places;
   /** What the platform tells of the workspace itself goes there. */

@@ -1,5 +1,5 @@
 import { type Content, looksRefused, looksRefusedNote, plainly, textAlone } from './content.ts';
-import { type Delivered, type Delivering, type Destination, makeDeliver } from './deliver.ts';
+import type { Delivering, Destination } from './deliver.ts';
 import type { Pace } from './pace.ts';
 import { wait } from './wait.ts';
 import type { Outcome } from './wire.ts';
@@ -7,9 +7,8 @@ import type { Outcome } from './wire.ts';
 /** A message of ours in the workspace. */
 export type At = { readonly channel: string; readonly ts: string };
 
-/** Everything the bot can do to be heard. */
+/** What the bot can do beside saying something new: what is said so is not kept, or changes what stands. */
 export type Voice = {
-  readonly post: (to: Destination, content: Content) => Promise<Delivered>;
   /** Only for one person; not kept, and not shown in a thread where nobody has replied. */
   readonly whisper: (to: Destination & { readonly user: string }, content: Content) => Promise<void>;
   /** Waits for its turn where the workspace has had its share of edits. */
@@ -68,8 +67,6 @@ export const makeVoice = (desk: Delivering, edits: Pace): Voice => {
   const edit = (at: At, content: Content) => wire.call('chat.update', editArguments(at, content));
 
   return {
-    post: makeDeliver(desk),
-
     whisper: async (to, content) => {
       const outcome = await withLooks(content, (shown) =>
         persist(desk.pace, to.channel, false, () =>

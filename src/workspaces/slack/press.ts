@@ -4,7 +4,8 @@ import { answerIn, type ReplyPlace, repliesOrApology, type Speaking } from './an
 import type { Conversation, Press, SeenEvents } from './ports.ts';
 import type { Respond } from './respond.ts';
 
-const pressed = z.object({
+/** A press on one of our messages; one in a form or on the home page has another shape. */
+export const pressedOn = z.object({
   team: z.object({ id: z.string() }).nullish(),
   user: z.object({ id: z.string() }),
   container: z.object({
@@ -26,7 +27,7 @@ const pressed = z.object({
     )
     .min(1),
 });
-type Pressed = z.infer<typeof pressed>;
+type Pressed = z.infer<typeof pressedOn>;
 
 export type Pressing = Speaking & {
   readonly conversation: Conversation;
@@ -35,9 +36,12 @@ export type Pressing = Speaking & {
 };
 
 /** What a press brings up goes below the message that it was made on. */
-const placeOf = ({ user, container, message }: Pressed): ReplyPlace => {
+export const placeOfPress = (made: Pressed): ReplyPlace => {
+  const { team, user, container, message } = made;
   const threadTs = container.thread_ts ?? message?.thread_ts ?? null;
   return {
+    eventKey: pressKeyOf(made),
+    team: team?.id ?? '',
     channel: container.channel_id,
     threadTs: threadTs ?? container.message_ts,
     user: user.id,
@@ -54,7 +58,7 @@ const fromOf = ({ team, user, container, message }: Pressed): AskedFrom => ({
   thread: container.thread_ts ?? message?.thread_ts ?? null,
 });
 
-const keyOf = ({ user, container, actions }: Pressed): string =>
+export const pressKeyOf = ({ user, container, actions }: Pressed): string =>
   JSON.stringify([
     container.channel_id,
     container.message_ts,
@@ -64,12 +68,12 @@ const keyOf = ({ user, container, actions }: Pressed): string =>
 
 /** Answers a press on one of our messages: in its thread, or privately where the message was private. */
 export const answerPress = async (pressing: Pressing, body: unknown): Promise<void> => {
-  const read = pressed.safeParse(body);
+  const read = pressedOn.safeParse(body);
   // Presses in forms and on the home page are not made on a message.
   if (!read.success) return;
-  if (!(await pressing.seen.firstSeen(keyOf(read.data)))) return;
+  if (!(await pressing.seen.firstSeen(pressKeyOf(read.data)))) return;
   const { container, actions, response_url } = read.data;
-  const place = placeOf(read.data);
+  const place = placeOfPress(read.data);
   for (const { action_id, value, selected_option } of actions) {
     const isPrivate = container.is_ephemeral === true;
     const press: Press = {

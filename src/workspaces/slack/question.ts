@@ -17,7 +17,9 @@ const sameWords = (first: string, second: string): boolean =>
   first.replace(/\s+/g, ' ') === second.replace(/\s+/g, ' ');
 
 /** In a channel the reply goes into the thread that asked, or begins it; a direct message is answered beside it. */
-const placeOf = (heard: Heard): ReplyPlace => ({
+export const placeOf = (heard: Heard): ReplyPlace => ({
+  eventKey: heard.eventKey,
+  team: heard.team,
   channel: heard.channel,
   threadTs: heard.threadTs ?? (heard.direct ? null : heard.ts),
   user: heard.user,
@@ -64,7 +66,7 @@ const answer = (
 
 const answerEdited = async (questioning: Questioning, heard: Heard): Promise<void> => {
   if (editAgeMs(heard) > editWindowMs) return;
-  const before = questioning.asked.recall(heard.messageKey);
+  const before = await questioning.asked.recall(heard.messageKey, heard.eventKey);
   if (before !== null && sameWords(before.words, heard.words)) return;
   await answer(questioning, heard, (reply) => headed(reply, editedNote));
   if (before !== null) await supersede(questioning, before);

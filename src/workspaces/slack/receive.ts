@@ -32,9 +32,15 @@ const keepingFirst = (app: App, { self, inbox, work }: Receptionist): App => {
   const front: App = Object.create(app);
   front.processEvent = (event) =>
     work.track(async () => {
-      if (concernsBot(event.body, self))
-        await inbox.keep({ body: event.body, retryNumber: event.retryNum ?? 0 });
-      await app.processEvent(event);
+      if (!concernsBot(event.body, self)) return app.processEvent(event);
+      const dealing = await inbox.keep({ body: event.body, retryNumber: event.retryNum ?? 0 });
+      if (dealing === null) return event.ack();
+      if (dealing.kept) await app.processEvent(event);
+      else {
+        await app.processEvent({ ...event, ack: async () => {} });
+        await event.ack();
+      }
+      await dealing.done();
     });
   return front;
 };

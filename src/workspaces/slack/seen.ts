@@ -1,4 +1,4 @@
-import type { Inbox, SeenEvents } from './ports.ts';
+import type { SeenEvents } from './ports.ts';
 
 /** The platform stops sending an event again after some minutes; this many keys reach far beyond that on a busy desk. */
 const mostKeys = 20_000;
@@ -18,6 +18,3 @@ export const seenInMemory = (): SeenEvents => {
     },
   };
 };
-
-/** Keeps nothing: what was acknowledged and not answered before the process ended is lost. */
-export const noInbox: Inbox = { keep: () => Promise.resolve() };

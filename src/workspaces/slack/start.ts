@@ -2,8 +2,11 @@ import { App, webApi } from '@slack/bolt';
 import { z } from 'zod';
 import { problem } from '../../terms/problem.ts';
 import { type Result, refuse, succeed } from '../../terms/result.ts';
+import type { Deliveries } from '../deliveries.ts';
 import { askedInMemory } from './asked.ts';
 import type { Delivering } from './deliver.ts';
+import { askedOnRecord } from './durable/asked.ts';
+import { makeDurable } from './durable/start.ts';
 import { listen } from './listen.ts';
 import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
 import type { Self } from './lookup.ts';
@@ -15,15 +18,19 @@ import { type Reception, receptionOf } from './receive.ts';
 import { makeRespond } from './respond.ts';
 import { type Feature, featuresOf } from './scopes.ts';
 import { callTimeoutMs, type SlackSettings } from './settings.ts';
+import { makeSlots } from './slots.ts';
 import { atMost } from './wait.ts';
 import { makeWire, type Outcome, type Wire } from './wire.ts';
 import { makeWork } from './work.ts';
 
 const stopLimitMs = 30_000;
+/** So many posts that nobody waits for are under way at a time. */
+const mostUnhurried = 4;
 
 export type SlackWorkspace = {
   readonly features: ReadonlySet<Feature>;
   readonly voice: Voice;
+  readonly deliveries: Deliveries;
   /** The port that requests come in at; null over sockets. */
   readonly port: number | null;
   /** Resolves once nothing is under way. */
@@ -88,7 +95,7 @@ export const startSlack = async (
   ports: SlackPorts,
 ): Promise<Result<SlackWorkspace>> => {
   const { botToken, receiving } = settings;
-  const { conversation, time, newId, seen, inbox, places, onNews } = ports;
+  const { conversation, time, newId, seen, store, places, onNews } = ports;
   const secret = receiving.mode === 'socket' ? receiving.appToken : receiving.signingSecret;
   const log = maskedLog(ports.log, [botToken, secret]);
   const clientOptions = {
@@ -107,11 +114,17 @@ export const startSlack = async (
   const features = featuresOf(scopes, log);
   const pace = makePace(time, messagePace);
   const canLookUp = features.has('lookUp');
-  const delivering: Delivering = { wire, pace, time, log, newId, self, canLookUp };
+  const slots = makeSlots(mostUnhurried);
+  const { whenUnsure } = settings;
+  const delivering: Delivering = { wire, pace, slots, time, log, self, canLookUp, whenUnsure };
   const voice = makeVoice(delivering, makePace(time, editPace));
   const work = makeWork();
+  const respond = makeRespond(time, log);
+  const holder = newId();
+  const durable = makeDurable({ store, holder, delivering, respond, work, app: () => app });
+  const { outbox: deliveries, inbox, memory } = durable;
   const reception = receptionOf(receiving, { self, inbox, work, time, log, clientOptions });
-  const app = new App({
+  const app: App = new App({
     receiver: reception,
     token: botToken,
     botId: self.botId,
@@ -122,22 +135,28 @@ export const startSlack = async (
     // The library writes into what it is given.
     clientOptions: { ...clientOptions },
   });
-  const asked = askedInMemory(time);
-  const respond = makeRespond(time, log);
-  const said = { voice, time, log, conversation, seen, asked, respond };
+  const asked = askedOnRecord(askedInMemory(time), store, self);
+  const said = { voice, deliveries, memory, time, log, conversation, seen, asked, respond };
   listen(app, features, { ...said, self, places, onNews });
   const opened = await open(reception);
   if (!opened.ok) return opened;
+  deliveries.start();
+  inbox.start();
 
   const leave = async (): Promise<void> => {
     work.close();
+    deliveries.close();
+    inbox.close();
     await reception.stop();
     await atMost(time, stopLimitMs, work.idle());
+    await inbox.stop();
+    await deliveries.stop();
   };
   let leaving: Promise<void> | null = null;
   return succeed({
     features,
     voice,
+    deliveries,
     port: reception.port(),
     idle: work.idle,
     stop: () => {

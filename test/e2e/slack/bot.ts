@@ -1,19 +1,15 @@
 import { afterEach } from 'vitest';
+import { openSqlite } from '../../../src/records/openSqlite.ts';
 import type { News } from '../../../src/workspaces/news.ts';
+import type { DurableStore } from '../../../src/workspaces/slack/durable/ports.ts';
 import { makePlaces, type Places } from '../../../src/workspaces/slack/places/places.ts';
-import type {
-  Asking,
-  Block,
-  Conversation,
-  Inbox,
-  Press,
-  SpokenReply,
-} from '../../../src/workspaces/slack/ports.ts';
-import { noInbox, seenInMemory } from '../../../src/workspaces/slack/seen.ts';
-import type { Receiving } from '../../../src/workspaces/slack/settings.ts';
+import type { Asking, Block, Conversation, Press, SpokenReply } from '../../../src/workspaces/slack/ports.ts';
+import { seenInMemory } from '../../../src/workspaces/slack/seen.ts';
+import type { Receiving, WhenUnsure } from '../../../src/workspaces/slack/settings.ts';
 import { type SlackWorkspace, startSlack } from '../../../src/workspaces/slack/start.ts';
 import { type Platform, type PlatformOptions, startPlatform } from '../../doubles/platform/start.ts';
 import { makeTray } from '../../doubles/platform/tray.ts';
+import { accepted } from '../../laws/outcomes.ts';
 
 type Section = Block & { readonly text: object };
 const section = (text: string): Section => ({
@@ -72,7 +68,8 @@ export type LogLine = { readonly level: 'info' | 'warn' | 'error'; readonly mess
 type BotOptions = PlatformOptions & {
   readonly conversation?: Partial<Conversation>;
   readonly mode?: Receiving['mode'];
-  readonly inbox?: Inbox;
+  readonly store?: DurableStore;
+  readonly whenUnsure?: WhenUnsure;
   readonly places?: Places;
   readonly onNews?: (news: News) => Promise<void>;
 };
@@ -112,6 +109,8 @@ const logInto = (lines: LogLine[]) => ({
 export const prepare = async (options: BotOptions = {}) => {
   const platform = await startPlatform(options);
   running.push(platform);
+  const store = options.store ?? accepted(await openSqlite(null));
+  const { whenUnsure = 'leave' } = options;
   const log: LogLine[] = [];
   const asked: Asking[] = [];
   const pressed: Press[] = [];
@@ -133,14 +132,14 @@ export const prepare = async (options: BotOptions = {}) => {
       : { mode: 'socket', appToken: platform.appToken, sockets: 2 };
   const start = (settings: { readonly botToken?: string; readonly receiving?: Receiving } = {}) =>
     startSlack(
-      { botToken: platform.botToken, receiving, apiUrl: platform.apiUrl, ...settings },
+      { botToken: platform.botToken, receiving, apiUrl: platform.apiUrl, whenUnsure, ...settings },
       {
         conversation,
         log: logInto(log),
         time: platform.time,
         newId: identifiers(),
         seen: seenInMemory(),
-        inbox: options.inbox ?? noInbox,
+        store,
         places: options.places ?? makePlaces(platform.time, logInto(log)),
         onNews: options.onNews ?? (async () => {}),
       },

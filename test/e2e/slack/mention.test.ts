@@ -10,7 +10,10 @@ describe('a mention', () => {
       channel: 'C0DESK',
       threadTs: question.ts,
       text: 'Heard: interval KELP 60d',
-      metadata: { event_type: 'leadsman_delivery', event_payload: { id: 'delivery-1' } },
+      metadata: {
+        event_type: 'leadsman_delivery',
+        event_payload: { id: expect.stringMatching(/^[0-9a-f]{32}$/) },
+      },
     });
     await settled(stage, question);
     expect(stage.platform.posts.all).toHaveLength(1);

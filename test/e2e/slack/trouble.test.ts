@@ -1,8 +1,14 @@
 import { describe, expect, it } from 'vitest';
+import { deliveryIdOf } from '../../../src/workspaces/slack/durable/outbox.ts';
+import { replyKey } from '../../../src/workspaces/slack/keys.ts';
 import { settled, spoken, startBot } from './bot.ts';
 
 const identifiersOf = (posts: readonly { readonly metadata: { readonly event_payload: object } | null }[]) =>
   posts.map(({ metadata }) => metadata?.event_payload);
+
+/** The delivery id of the only reply to a question in a place. */
+const idOfReply = (channel: string, ts: string) =>
+  deliveryIdOf(replyKey(JSON.stringify(['T0DESK', channel, ts, null]), 0));
 
 const callsOf = (calls: readonly { readonly method: string; readonly outcome: string }[], method: string) =>
   calls.filter((call) => call.method === method).map(({ outcome }) => outcome);
@@ -57,15 +63,16 @@ describe('a post', () => {
     platform.time.advance(15_000);
     await settled(stage, question);
     expect(callsOf(platform.calls.all, 'conversations.history')).toEqual(['ok', 'ok']);
-    expect(identifiersOf(platform.posts.all)).toEqual([{ id: 'delivery-1' }]);
+    expect(identifiersOf(platform.posts.all)).toEqual([{ id: idOfReply(question.channel, question.ts) }]);
   });
 
   it('is not taken for found where another app has posted under the same id', async () => {
     const stage = await startBot();
     const { platform } = stage;
-    const metadata = { event_type: 'leadsman_delivery', event_payload: { id: 'delivery-1' } };
     platform.faults.next('chat.postMessage', { kind: 'dropped', accepted: false });
     const question = platform.mention({ channel: 'C0DESK', text: 'interval KELP' });
+    const id = idOfReply(question.channel, question.ts);
+    const metadata = { event_type: 'leadsman_delivery', event_payload: { id } };
     const desk = platform.workspace.channels.get('C0DESK');
     if (desk === undefined) throw new Error('no desk');
     platform.workspace.say(desk, { user: 'U0OTHER', botId: 'B0OTHER', threadTs: question.ts, metadata });

@@ -4,6 +4,7 @@ import type { Press, SpokenReply } from '../../../src/workspaces/slack/ports.ts'
 import type { Voice } from '../../../src/workspaces/slack/post.ts';
 import { answerPress } from '../../../src/workspaces/slack/press.ts';
 import { seenInMemory } from '../../../src/workspaces/slack/seen.ts';
+import { notedDeliveries } from '../../doubles/deliveries.ts';
 import { manualTime } from '../../doubles/time.ts';
 
 const said: SpokenReply = { text: 'so', blocks: [], kind: 'answer', private: false };
@@ -14,20 +15,18 @@ const setUp = () => {
   const posts: string[] = [];
   const log: string[] = [];
   const note = (message: string) => void log.push(message);
+  const { said: sayings, ...spoken } = notedDeliveries();
   const voice: Voice = {
-    post: (to) => {
-      posts.push(`${to.channel} ${to.threadTs}`);
-      return Promise.resolve({ ok: true, ts: '9.000001' });
-    },
     whisper: () => Promise.resolve(),
     update: () => Promise.resolve(),
     updateNow: () => Promise.resolve(true),
     remove: () => Promise.resolve(),
   };
   return {
+    ...spoken,
     presses,
     heard,
-    posts,
+    posts: () => [...posts, ...sayings.map(({ channel, threadTs }) => `${channel} ${threadTs}`)],
     log: { info: note, warn: note, error: note },
     logged: log,
     voice,
@@ -65,7 +64,7 @@ it('the same press delivered twice is answered once, a second press again', asyn
   await answerPress(desk, press({ value: 'v' }));
   await answerPress(desk, press({ value: 'v' }));
   await answerPress(desk, press({ value: 'v', action_ts: '7.0' }));
-  expect(desk.posts).toEqual(['C1 5.000001', 'C1 5.000001']);
+  expect(desk.posts()).toEqual(['C1 5.000001', 'C1 5.000001']);
 });
 
 it('a chosen line of a menu counts as its value', async () => {

@@ -20,18 +20,18 @@ it('memory of what was seen is bounded: the oldest of more than 20,000 keys is f
   expect(await seen.firstSeen('0')).toBe(true);
 });
 
-it('a question is recalled while it can be edited, and forgotten later', () => {
+it('a question is recalled while it can be edited, and forgotten later', async () => {
   const time = manualTime();
   const asked = askedInMemory(time);
   const question = { words: 'feed', replies: Promise.resolve([]) };
   asked.remember('a', question);
   time.advance(600_000);
   asked.remember('b', question);
-  expect(asked.recall('a')).toBe(question);
+  expect(await asked.recall('a', '')).toBe(question);
   time.advance(600_001);
   asked.remember('c', question);
-  expect(asked.recall('a')).toBeNull();
-  expect(asked.recall('b')).toBe(question);
+  expect(await asked.recall('a', '')).toBeNull();
+  expect(await asked.recall('b', '')).toBe(question);
 });
 
 it('every feature stays on where the platform does not say which scopes there are', () => {

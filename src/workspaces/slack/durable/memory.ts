@@ -1,0 +1,31 @@
+import type { KeptSaying } from '../../../terms/delivery.ts';
+import { placeholderKey, replyKey } from '../keys.ts';
+import type { EventMemory, Recalled } from '../ports.ts';
+import type { DurableInbox } from './inbox.ts';
+import type { Outbox } from './outbox.ts';
+import type { DeliveryStore } from './ports.ts';
+
+const firstTime: Recalled = { again: false, standing: null, editing: null };
+
+/** What an earlier try at an answer has left in the workspace, from the records. */
+export const makeMemory = (inbox: DurableInbox, outbox: Outbox, store: DeliveryStore): EventMemory => {
+  /** A placeholder of which it is not known whether it stands is cleared up first. */
+  const standingOf = async (placeholder: KeptSaying | undefined) => {
+    if (placeholder === undefined) return null;
+    const outcome = placeholder.outcome ?? (await outbox.say(placeholder));
+    return outcome.kind === 'said' ? { channel: placeholder.channel, ts: outcome.ts } : null;
+  };
+
+  return {
+    recall: async (key) => {
+      const event = inbox.underWay(key);
+      if (event === null || event.tries <= 1) return firstTime;
+      const found = await store.find([placeholderKey(key), replyKey(key, 0)]);
+      const kept = found.ok ? found.value : [];
+      const standing = await standingOf(kept.find((saying) => saying.key === placeholderKey(key)));
+      const replied = kept.some((saying) => saying.key === replyKey(key, 0));
+      return { again: true, standing, editing: replied ? null : event.editing };
+    },
+    willEdit: inbox.willEdit,
+  };
+};
