@@ -19,8 +19,10 @@ export const admission = async (
 
 type Put = Pick<Asking, 'place' | 'from'>;
 
+type Addressed = Pick<Converse, 'ask' | 'press'>;
+
 /** The same conversation behind a door: every message and every press is let in first. */
-export const behindDoor = (permissions: Permissions, converse: Converse): Converse => {
+export const behindDoor = (permissions: Permissions, converse: Addressed): Addressed => {
   const within =
     <T extends Put>(answer: (put: T) => Promise<readonly Spoken[]>) =>
     async (put: T): Promise<readonly Spoken[]> =>

@@ -1,9 +1,10 @@
 import type { Answers } from '../answers/answer.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
-import type { Button, Reply } from '../present/reply.ts';
+import type { Button, Passage, Reply } from '../present/reply.ts';
 import { type AskedFrom, askedFromNowhere } from '../terms/records.ts';
 import type { Refusal, Result } from '../terms/result.ts';
 import type { Asker } from './permissions.ts';
+import type { Picture } from './pictures.ts';
 
 /** A message that was addressed to the bot. `progress` is told, in words, how far a long answer has come. */
 export type Asking = {
@@ -14,8 +15,15 @@ export type Asking = {
   readonly progress?: (words: string) => void;
 };
 
+/** A picture beside a reply, and what stands for it where it cannot be shown. */
+export type SpokenPicture = Picture & { readonly inText: readonly Passage[] };
+
 /** What the bot says to one question, and the outcome behind it where it was a statistical one. */
-export type Spoken = { readonly reply: Reply; readonly outcome: Result<Answers> | null };
+export type Spoken = {
+  readonly reply: Reply;
+  readonly outcome: Result<Answers> | null;
+  readonly pictures?: readonly SpokenPicture[];
+};
 
 /** A button that somebody presses. */
 export type Pressing = Pick<Button, 'action' | 'answerId' | 'question' | 'added'> &
@@ -25,6 +33,8 @@ export type Pressing = Pick<Button, 'action' | 'answerId' | 'question' | 'added'
 export type Converse = {
   readonly ask: (asking: Asking) => Promise<readonly Spoken[]>;
   readonly press: (pressing: Pressing) => Promise<readonly Spoken[]>;
+  /** Words in a thread that do not address the bot: answered where they are a follow-up, else nothing is said. */
+  readonly overhear: (asking: Asking) => Promise<readonly Spoken[]>;
 };
 
 export const said = (spokenReply: Reply): Spoken => ({ reply: spokenReply, outcome: null });

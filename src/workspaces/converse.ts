@@ -1,18 +1,20 @@
 import type { Answers } from '../answers/answer.ts';
 import { answersReply, jsonReply } from '../present/answerReply.ts';
-import { feedReply, stalenessInWords, tickerReply } from '../present/compose/feed.ts';
+import { stalenessInWords } from '../present/compose/feed.ts';
 import { helpReply } from '../present/compose/help.ts';
-import { pricePicture } from '../present/compose/pricePicture.ts';
 import type { Reply } from '../present/reply.ts';
 import type { ReadQuestion, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
-import { type ReadOutcome, readMessage } from '../questions/readMessage.ts';
+import type { ReadOutcome } from '../questions/readMessage.ts';
 import type { Freshness } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import { behindDoor, denied } from './admission.ts';
+import { answerFeed } from './answerFeed.ts';
 import { type Asking, type Converse, readerOf, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
+import { isMeantFor, readAsked } from './followUp.ts';
+import { pictured } from './pictured.ts';
 import { answerPress } from './press.ts';
 import { isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
@@ -27,19 +29,8 @@ const needsNoPrices = (outcome: ReadOutcome): boolean =>
   outcome.ok &&
   (['help', 'feed'].includes(outcome.value.question.verb) || isOfRecords(outcome.value.question));
 
-/** A picture cannot be had yet, and that is said beside the figures rather than instead of them. */
-const withoutPicture = (given: Reply): Reply => ({
-  ...given,
-  passages: [
-    ...given.passages,
-    { head: null, lines: ['A picture cannot be drawn yet; these are the figures.'] },
-  ],
-});
-
-const asWished = ({ wishes }: ReadQuestion, answers: Answers): Reply => {
-  const given = wishes.includes('json') ? jsonReply(answers) : answersReply(answers);
-  return wishes.includes('picture') ? withoutPicture(given) : given;
-};
+const asWished = ({ wishes }: ReadQuestion, answers: Answers): Reply =>
+  wishes.includes('json') ? jsonReply(answers) : answersReply(answers);
 
 /** Old prices are said before anything else is warned of. It hangs on the hour of asking, so it is no part of the answer. */
 const withStaleness = (given: Reply, freshness: Freshness | null): Reply => {
@@ -64,7 +55,9 @@ export const createConverse = (desk: Desk): Converse => {
       replyTo: (named) => withStaleness(asWished(read, named), freshness),
       asking: { ...readerOf(asking), words: asking.text, askedAtMs: desk.clock.nowMs() },
     });
-    return { reply, outcome: succeed(answers) };
+    const spoken: Spoken = { reply, outcome: succeed(answers) };
+    if (!read.wishes.includes('picture')) return spoken;
+    return pictured(spoken, await desk.drawing.draw(worked.value.job, answers));
   };
 
   const answerRecords = async (
@@ -87,28 +80,6 @@ export const createConverse = (desk: Desk): Converse => {
     return found.ok ? said(found.value) : refused(found);
   };
 
-  /** The small picture of a ticker’s closes, where it was asked for and there are prices to draw. */
-  const withPrices = (given: Reply, ticker: string, live: Result<PriceSnapshot>): Reply => {
-    const series = live.ok ? live.value.series(ticker) : null;
-    return series === null ? given : { ...given, passages: [...given.passages, pricePicture(series)] };
-  };
-
-  const answerFeed = (
-    { wishes }: ReadQuestion,
-    ticker: string | null,
-    live: Result<PriceSnapshot>,
-  ): Spoken => {
-    const status = desk.feedStatus();
-    if (ticker === null) return said(feedReply(status, desk.timeZone));
-    const report = status.report?.tickers.find((each) => each.ticker === ticker);
-    if (report === undefined)
-      return refused(
-        refuse(problem('unknownTicker', `${ticker} is not in the feed. Ask feed for the tickers that are.`)),
-      );
-    const given = tickerReply(report, status.freshness);
-    return said(wishes.includes('picture') ? withPrices(given, ticker, live) : given);
-  };
-
   const answerOne = async (
     read: ReadQuestion,
     live: Result<PriceSnapshot>,
@@ -124,13 +95,13 @@ export const createConverse = (desk: Desk): Converse => {
       );
     return question.verb === 'help'
       ? said(helpReply(desk.helpPage(question.topic)))
-      : answerFeed(read, question.ticker, live);
+      : answerFeed(desk, read, question.ticker, live);
   };
 
-  const converse: Converse = {
+  const converse: Pick<Converse, 'ask' | 'press'> = {
     ask: async (asking) => {
       const live = desk.snapshot();
-      const { questions } = readMessage(asking.text, desk.contextFor(live.ok ? live.value : null));
+      const questions = await readAsked(desk, asking, live.ok ? live.value : null);
       // Without prices no ticker is known, so whatever was made of the words, the missing feed is what to say.
       if (!live.ok && !questions.some(needsNoPrices)) return questions.length === 0 ? [] : [refused(live)];
       const spoken: Spoken[] = [];
@@ -145,5 +116,13 @@ export const createConverse = (desk: Desk): Converse => {
     },
     press: (pressing) => answerPress(desk, converse.ask, pressing),
   };
-  return behindDoor(desk.permissions, converse);
+  const open = behindDoor(desk.permissions, converse);
+  return {
+    ...open,
+    /** Who may not ask is not told so: nobody addressed the bot. */
+    overhear: async (asking) =>
+      (await isMeantFor(desk, asking, desk.snapshot()))
+        ? (await open.ask(asking)).filter(({ outcome }) => outcome?.ok === true)
+        : [],
+  };
 };

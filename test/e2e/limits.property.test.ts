@@ -24,7 +24,7 @@ const anyCloses = fc
     ),
   })
   .map(({ start, moves }) => {
-    const closes = [start];
+    const closes: number[] = [start];
     for (const move of moves) closes.push((closes.at(-1) ?? start) * (1 + move));
     return closes;
   });

@@ -15,6 +15,7 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
       asked.push(asking);
       return [{ reply: answer(asking.text), outcome: null }];
     },
+    overhear: async () => [],
     press: async ({ question }) => [{ reply: reply('working', `Working of ${question}.`), outcome: null }],
   };
   let screen = '';
