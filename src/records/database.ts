@@ -1,3 +1,4 @@
+import type { PinState } from '../terms/pins.ts';
 import type { Subscription, SubscriptionKind, SubscriptionState } from '../terms/subscriptions.ts';
 
 /** The tables as the query builder sees them. Column names are the names in the database. */
@@ -133,6 +134,31 @@ export type SubscriptionCounterRow = {
   readonly last: number;
 };
 
+export type PinRow = {
+  readonly team: string;
+  readonly channel: string;
+  /** Empty at the top of a channel. */
+  readonly thread: string;
+  readonly answer_id: string;
+  readonly question: string;
+  readonly as_of: string;
+  readonly sentence: string;
+  readonly person: string | null;
+  readonly state: PinState;
+  readonly card_ts: string | null;
+  readonly times: number;
+  readonly pinned_at_ms: number;
+  readonly told_moved: number;
+  readonly told_restated: number;
+};
+
+export type ChannelMoveRow = {
+  readonly team: string;
+  readonly from_id: string;
+  readonly to_id: string;
+  readonly noted_order: number;
+};
+
 export type Tables = {
   readonly price_columns: PriceColumnsRow;
   readonly answers: AnswerRow;
@@ -146,5 +172,7 @@ export type Tables = {
   readonly subscriptions: SubscriptionRow;
   readonly subscription_counters: SubscriptionCounterRow;
   readonly subscription_claims: LeasedRow;
+  readonly pins: PinRow;
+  readonly channel_moves: ChannelMoveRow;
   readonly schema_versions: SchemaVersionRow;
 };

@@ -3,6 +3,7 @@ import { answersOnRecord } from './migrations/1-answers.ts';
 import { inboxAndDeliveries } from './migrations/2-inboxAndDeliveries.ts';
 import { digestsAndWatches } from './migrations/3-subscriptions.ts';
 import { askingsByPlace } from './migrations/4-askingsByPlace.ts';
+import { pinsAndMoves } from './migrations/5-pins.ts';
 import type { ColumnTypes, Migration } from './migrations/migration.ts';
 
 /** In the order in which they are made; a migration that was ever released is never changed. */
@@ -11,6 +12,7 @@ export const migrations: readonly Migration[] = [
   inboxAndDeliveries,
   digestsAndWatches,
   askingsByPlace,
+  pinsAndMoves,
 ];
 
 const versionOf = async (db: Database): Promise<number> => {

@@ -4,6 +4,7 @@ import { type Access, accessTo, type Connection, storeProblem } from './connecti
 import { type ConversationStore, conversationStore } from './conversations.ts';
 import { type DeliveryStore, deliveryStore } from './deliveries.ts';
 import { type InboxStore, inboxStore } from './inbox.ts';
+import { type PinStore, pinStore } from './pins.ts';
 import { type SubscriptionStore, subscriptionStore } from './subscriptions.ts';
 
 /** Each part of the records in a file of its own, all of them on one database. */
@@ -11,6 +12,7 @@ export type StoreParts = AnswerStore & {
   readonly inbox: InboxStore;
   readonly deliveries: DeliveryStore;
   readonly subscriptions: SubscriptionStore;
+  readonly pins: PinStore;
   readonly conversations: ConversationStore;
 };
 
@@ -26,6 +28,7 @@ export const storeParts = (access: Access): StoreParts => ({
   inbox: inboxStore(access),
   deliveries: deliveryStore(access),
   subscriptions: subscriptionStore(access),
+  pins: pinStore(access),
   conversations: conversationStore(access),
 });
 
