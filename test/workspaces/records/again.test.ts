@@ -157,6 +157,88 @@ describe('again with one id', () => {
 });
 
 const failing = reply('refusal', 'nothing was said');
+
+describe('again with two ids', () => {
+  test('says in a line each what differs, then what both say', async () => {
+    const records = await recordsInMemory();
+    const say = sayOn(records, [kelp, tarn]);
+    const first = idIn(await say('interval KELP 60d'));
+    const second = idIn(await say('tail TARN 250d by historical log at 97.5%'));
+    const told = await say(`again ${first} ${second}`);
+    expect(told).toContain(
+      `record: ${first} and ${second} differ in verb, ticker, window, level, return type, model and prices used.`,
+    );
+    expect(told).toContain('Window: 60d against 250d');
+    expect(told).toContain('Level: 95% against 97.5%');
+    expect(told).toContain('Model: none against historical');
+    expect(told).toMatch(/KELP’s mean daily return/);
+  });
+
+  test('restated prices show although the days are the same', async () => {
+    const records = await recordsInMemory();
+    const first = idIn(await sayOn(records, [kelp])('interval KELP'));
+    const restated = seriesOf(
+      'KELP',
+      closes.map((close, at) => (at === 299 ? close * 1.01 : close)),
+    );
+    const say = sayOn(records, [restated]);
+    const second = idIn(await say('interval KELP'));
+    expect(await say(`again ${first} ${second}`)).toContain('differ in prices used.');
+  });
+});
+
+describe('what cannot be shown', () => {
+  test('an id that was never given is refused, in either place', async () => {
+    const records = await recordsInMemory();
+    const say = sayOn(records, [kelp]);
+    const id = idIn(await say('interval KELP'));
+    for (const text of ['again R-0000000000', `again ${id} R-0000000000`, `again R-0000000000 ${id}`])
+      expect(await say(text)).toMatch(/^refusal: There is no answer R-0000000000 on record/);
+  });
+
+  test('a store that fails is said, and other questions are answered', async () => {
+    const records = await recordsInMemory({ store: brokenStore, tell: () => {} });
+    const say = sayOn(records, [kelp]);
+    for (const text of ['again R-0000000000', 'records', 'records verify'])
+      expect(await say(text)).toMatch(/^refusal: The store of records cannot be used/);
+    expect(await say('interval KELP')).toMatch(/^answer: /);
+    expect(await say('help')).toMatch(/^help: /);
+  });
+});
+
+describe('records', () => {
+  test('lists what was asked, the newest first, by ticker and from a day on', async () => {
+    const records = await recordsInMemory();
+    const at = (iso: string) => ({ clock: { nowMs: () => Date.parse(iso) } });
+    const first = idIn(await sayOn(records, [kelp, tarn], at('2026-11-27T08:00:00Z'))('interval KELP'));
+    const second = idIn(await sayOn(records, [kelp, tarn], at('2026-11-28T09:30:00Z'))('shape TARN'));
+    const say = sayOn(records, [kelp, tarn]);
+    expect(await say('records')).toBe(
+      [
+        'record: 2 answers on record.',
+        `2026-11-28 09:30 UTC  ${second}  shape TARN 500d confidence 95%`,
+        `2026-11-27 08:00 UTC  ${first}  interval KELP 60d at 95%`,
+      ].join('\n'),
+    );
+    expect(await say('records TARN')).toContain('1 answer on record about TARN.');
+    expect(await say('records since 2026-11-27')).toContain('2 answers on record since 2026-11-27.');
+    expect(await say('records KELP since 2026-11-26')).toContain(first);
+    expect(await say('records TARN since 2026-11-27')).not.toContain(first);
+  });
+
+  test('says that there are none, and that they are whole', async () => {
+    const say = sayOn(await recordsInMemory(), [kelp]);
+    expect(await say('records KELP')).toBe('record: No answer is on record about KELP.');
+    await say('interval KELP');
+    expect(await say('records verify')).toMatch(
+      /^record: The records are whole: 1 answer, asked 1 time, and the traces of 0 deletions\.\nThe chain ends in [0-9a-f]{16}\.$/,
+    );
+  });
+
+  test('says what is wrong where they are not whole', async () => {
+    const records = await recordsInMemory();
+    const faults = Array.from({ length: 12 }, (_, index) => `Fault ${index}.`);
+    const examined = { answers: 1, askings: 1, deletions: 0, head: 'ab'.repeat(32), faults };
     const store = { ...records.store, verify: async () => succeed(examined) };
     const told = await sayOn({ ...records, store }, [kelp])('records verify');
     expect(told).toMatch(/^record: The records are not whole: 12 faults in 1 answer/);
