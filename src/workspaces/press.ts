@@ -3,14 +3,9 @@ import { workingReplies } from '../present/answerReply.ts';
 import { type ButtonAction, type Reply, reply } from '../present/reply.ts';
 import { type Converse, type Pressing, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
+import { drawPressed } from './pressed/drawPressed.ts';
+import type { PressHandler } from './pressed/handler.ts';
 import { pressedAnswers } from './pressed/pressedAnswers.ts';
-
-/** What answers the presses of one kind of button. `ask` is the way of any question that was typed. */
-export type PressHandler = (
-  desk: Desk,
-  pressing: Pressing,
-  ask: Converse['ask'],
-) => Promise<readonly Spoken[]>;
 
 /** Shows something of the answers under the button. */
 const showing =
@@ -25,6 +20,7 @@ const showing =
 /** A new button is one line here. */
 const handlers: Readonly<Partial<Record<ButtonAction, PressHandler>>> = {
   working: showing(workingReplies),
+  picture: drawPressed,
 };
 
 const doesNothing = said(

@@ -30,6 +30,7 @@ const quietLine = (answer: Answer): string => {
 
 const buttonsOf = ({ id, question }: Answer): readonly Button[] => [
   { action: 'working', label: 'Show the working', answerId: id, question },
+  { action: 'picture', label: 'Picture', answerId: id, question },
 ];
 
 /** Where the whole of a long answer stands. */

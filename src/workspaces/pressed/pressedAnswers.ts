@@ -1,4 +1,5 @@
 import type { Answers } from '../../answers/answer.ts';
+import type { AnswerJob } from '../../answers/answerQuestion.ts';
 import { type Reply, reply } from '../../present/reply.ts';
 import type { StatisticalQuestion } from '../../questions/question.ts';
 import { readMessage } from '../../questions/readMessage.ts';
@@ -6,7 +7,7 @@ import { type Result, refuse, succeed } from '../../terms/result.ts';
 import { type Pressing, readerOf } from '../conversation.ts';
 import type { Desk } from '../desk.ts';
 import { isStatistical } from '../questionKinds.ts';
-import { fromRecord } from '../records/body.ts';
+import { fromRecord, jobOf } from '../records/body.ts';
 import { noSuchRecord, readRecord } from '../records/reading.ts';
 import { workOut } from '../workOut.ts';
 
@@ -14,6 +15,8 @@ import { workOut } from '../workOut.ts';
 export type PressedAnswers = {
   readonly answers: Answers;
   readonly question: StatisticalQuestion;
+  /** The job that they are the outcome of. */
+  readonly job: AnswerJob;
   readonly changed: Reply | null;
 };
 
@@ -37,6 +40,7 @@ const onToday = async (desk: Desk, pressing: Pressing): Promise<Result<PressedAn
   const [{ id }] = worked.value.answers;
   return succeed({
     answers: worked.value.answers,
+    job: worked.value.job,
     question: read.value.question,
     changed: id === answerId ? null : changedPrices(answerId, id),
   });
@@ -58,5 +62,6 @@ export const pressedAnswers = async (desk: Desk, pressing: Pressing): Promise<Re
   const body = fromRecord(found.value.answer);
   if (!body.ok) return body;
   const { answers, question } = body.value;
-  return succeed({ answers, question, changed: null });
+  const job = jobOf(found.value.answer, body.value);
+  return succeed({ answers, question, job, changed: null });
 };
