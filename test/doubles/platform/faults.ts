@@ -3,6 +3,8 @@ export type Fault =
   | { readonly kind: 'limited'; readonly retryAfterSeconds: number }
   | { readonly kind: 'status'; readonly status: number; readonly accepted: boolean }
   | { readonly kind: 'dropped'; readonly accepted: boolean }
+  /** Nothing is ever answered. */
+  | { readonly kind: 'silent'; readonly accepted: boolean }
   | { readonly kind: 'refused'; readonly error: string }
   | { readonly kind: 'warned'; readonly warning: string };
 

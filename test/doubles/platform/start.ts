@@ -19,6 +19,8 @@ const everyScope = [
 ].flatMap((line) => line.split(','));
 
 export type PlatformOptions = {
+  /** How long a call is under way, before and again after it is done; no time unless told otherwise. */
+  readonly latency?: () => Promise<void>;
   readonly time?: ManualTime;
   readonly scopes?: readonly string[];
   readonly subscriptions?: readonly string[];
@@ -78,7 +80,8 @@ export const startPlatform = async (options: PlatformOptions = {}) => {
   };
   const newSocketAddress = () =>
     `${origin.replace('http', 'ws')}/link?ticket=${sockets.newTicket()}&app_id=double`;
-  const api = { desk, tokens, faults, newSocketAddress };
+  const latency = options.latency ?? (async () => {});
+  const api = { desk, tokens, faults, newSocketAddress, latency };
   const responses = makeResponses(desk, faults);
   const deliveries = makeDeliveries(time, () => transport);
   const subscriptions = options.subscriptions ?? ['app_mention', 'message.im'];

@@ -25,6 +25,8 @@ export type WebApi = {
   readonly faults: Faults;
   /** An address for one Socket Mode connection. */
   readonly newSocketAddress: () => string;
+  /** How long a call is under way, before and again after it is done. */
+  readonly latency: () => Promise<void>;
 };
 
 export const bodyOf = async (request: IncomingMessage): Promise<Buffer> => {
@@ -98,7 +100,7 @@ const spoil = (fault: Fault, response: ServerResponse, api: WebApi, accept: () =
   }
   const done = fault.accepted ? accept().outcome : 'nothing';
   if (fault.kind === 'dropped') response.destroy();
-  else response.writeHead(fault.status).end();
+  else if (fault.kind === 'status') response.writeHead(fault.status).end();
   return `${fault.kind}, ${done} done`;
 };
 
@@ -111,9 +113,11 @@ export const answerCall = async (
   const args = fromForm((await bodyOf(request)).toString());
   const accept = () => replyTo(api, method, tokenOf(request), args);
   const fault = api.faults.take(method);
+  await api.latency();
   if (fault === null) {
     const reply = accept();
     api.desk.records.calls.add({ method, args, outcome: reply.outcome });
+    await api.latency();
     send(response, api, reply);
   } else {
     const outcome = spoil(fault, response, api, accept);
