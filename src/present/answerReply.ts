@@ -5,12 +5,13 @@ import { compareManyReply, compareReply } from './compose/compare.ts';
 import { intervalMeanReply } from './compose/intervalMean.ts';
 import { intervalRatioReply } from './compose/intervalRatio.ts';
 import { intervalVolReply } from './compose/intervalVol.ts';
+import { reservations } from './compose/more.ts';
 import { needReply } from './compose/need.ts';
 import { onRecord } from './compose/parts.ts';
 import { shapeReply } from './compose/shape.ts';
 import { tailReply } from './compose/tail.ts';
 import { tailBeyondReply } from './compose/tailBeyond.ts';
-import { type Reply, reply, warningsShown } from './reply.ts';
+import { type Reply, reply } from './reply.ts';
 
 /** The reply to one answer, whatever its verb. */
 export const answerReply = (answer: Answer): Reply => {
@@ -51,11 +52,7 @@ const workingReply = (answer: Answer): Reply =>
   reply('working', `The working of ${answer.id}: ${answer.question}.`, {
     passages: [
       { head: null, lines: answer.working.map(({ step, text }, index) => `${index + 1}. ${step}: ${text}`) },
-      ...(answer.warnings.length > warningsShown
-        ? [{ head: 'All cautions', lines: answer.warnings.map(({ text }) => text) }]
-        : []),
-      ...(answer.notes.length > 0 ? [{ head: 'Notes', lines: answer.notes.map(({ text }) => text) }] : []),
-      { head: 'Sources', lines: answer.sources },
+      ...reservations(answer),
     ],
     whole: onRecord(answer),
   });

@@ -1,6 +1,7 @@
 import type { Answers } from '../answers/answer.ts';
 import { refusalReply } from '../present/compose/refusal.ts';
 import type { Button, Passage, Reply } from '../present/reply.ts';
+import type { StatisticalQuestion } from '../questions/question.ts';
 import { type AskedFrom, askedFromNowhere } from '../terms/records.ts';
 import type { Refusal, Result } from '../terms/result.ts';
 import type { Asker } from './permissions.ts';
@@ -13,6 +14,8 @@ export type Asking = {
   /** Who asked and where, in a place that knows. */
   readonly from?: AskedFrom;
   readonly progress?: (words: string) => void;
+  /** The question that the text carries on from, where that is known already. */
+  readonly after?: StatisticalQuestion;
 };
 
 /** A picture beside a reply, and what stands for it where it cannot be shown. */

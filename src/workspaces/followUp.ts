@@ -46,6 +46,7 @@ export const readAsked = async (
   live: PriceSnapshot | null,
 ): Promise<readonly ReadOutcome[]> => {
   const context = desk.contextFor(live);
+  if (asking.after !== undefined) return readMessage(asking.text, context, asking.after).questions;
   const alone = readMessage(asking.text, context).questions;
   if (alone.every(({ ok }) => ok)) return alone;
   const before = await questionBefore(desk, asking);

@@ -1,11 +1,14 @@
 import type { Answers } from '../answers/answer.ts';
 import { workingReplies } from '../present/answerReply.ts';
+import { moreReplies } from '../present/compose/more.ts';
 import { type ButtonAction, type Reply, reply } from '../present/reply.ts';
 import { type Converse, type Pressing, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
+import { atAnotherLevel } from './pressed/atAnotherLevel.ts';
 import { drawPressed } from './pressed/drawPressed.ts';
 import type { PressHandler } from './pressed/handler.ts';
 import { pressedAnswers } from './pressed/pressedAnswers.ts';
+import { shareAnswers } from './pressed/share.ts';
 
 /** Shows something of the answers under the button. */
 const showing =
@@ -20,6 +23,9 @@ const showing =
 /** A new button is one line here. */
 const handlers: Readonly<Partial<Record<ButtonAction, PressHandler>>> = {
   working: showing(workingReplies),
+  more: showing(moreReplies),
+  level: atAnotherLevel,
+  share: shareAnswers,
   picture: drawPressed,
 };
 

@@ -3,6 +3,7 @@ import type { Bounds } from '../../answers/interval/figures.ts';
 import type { WrittenBounds } from '../../wording/estimate.ts';
 import { counted } from '../../wording/words.ts';
 import { type Button, caution, type Reply, reply } from '../reply.ts';
+import { levelButtons } from './levels.ts';
 
 const unitWords = { d: 'day', w: 'week', m: 'month', y: 'year' } as const;
 type UnitLetter = keyof typeof unitWords;
@@ -28,10 +29,15 @@ const quietLine = (answer: Answer): string => {
   return `Data to ${answer.asOf}, ${count}, ${answer.method}, ${answer.id}${assumed}`;
 };
 
-const buttonsOf = ({ id, question }: Answer): readonly Button[] => [
-  { action: 'working', label: 'Show the working', answerId: id, question },
-  { action: 'picture', label: 'Picture', answerId: id, question },
-];
+const buttonsOf = (answer: Answer): readonly Button[] => {
+  const { id: answerId, question } = answer;
+  return [
+    { action: 'working', label: 'Show the working', answerId, question },
+    { action: 'more', label: 'More figures', answerId, question },
+    { action: 'picture', label: 'Picture', answerId, question },
+    ...levelButtons(answer),
+  ];
+};
 
 /** Where the whole of a long answer stands. */
 export const onRecord = ({ id }: Pick<Answer, 'id'>): string => `the whole is on record as ${id}`;
