@@ -1,11 +1,12 @@
 import { z } from 'zod';
 import { toBlocks } from '../present/blocks.ts';
+import { pictureMessage } from '../present/pictureMessage.ts';
 import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
 import { admission } from '../workspaces/admission.ts';
-import type { Spoken } from '../workspaces/conversation.ts';
+import type { Spoken, SpokenPicture } from '../workspaces/conversation.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
-import type { Conversation, SpokenReply } from '../workspaces/slack/ports.ts';
+import type { Conversation, ShownPicture, SpokenReply } from '../workspaces/slack/ports.ts';
 
 const examples = ['interval KELP 60d', 'interval vol KELP 3m', 'help'];
 
@@ -24,7 +25,22 @@ const spokenReply = (each: Reply): SpokenReply => ({
   private: each.kind === 'refusal',
 });
 
-const inBlocks = ({ reply: each }: Spoken): SpokenReply => spokenReply(each);
+/** What a picture would show, where it cannot be shown: its own form in text, or its description. */
+const inWords = ({ inText, altText }: SpokenPicture, why: string): Reply =>
+  reply('answer', why, {
+    passages: inText.length > 0 ? inText : [{ head: 'What it would show', lines: [altText] }],
+  });
+
+const shownPicture = (picture: SpokenPicture): ShownPicture => ({
+  ...picture,
+  withFile: (fileId) => pictureMessage(picture, fileId),
+  inWords: (why) => toBlocks(inWords(picture, why)),
+});
+
+const inBlocks = ({ reply: each, pictures = [] }: Spoken): SpokenReply => ({
+  ...spokenReply(each),
+  ...(pictures.length === 0 ? {} : { pictures: pictures.map(shownPicture) }),
+});
 
 const pressable = z.object({
   id: z.string(),

@@ -28,13 +28,3 @@ export const pictured = (spoken: Spoken, drawn: Result<Picture>, inText: readonl
   const why: Passage = { head: null, lines: [`There is no picture: ${drawn.problem.message}`] };
   return { ...spoken, reply: [...inText, why].reduce(withPassage, spoken.reply) };
 };
-
-/** The same where pictures cannot be shown: what stands for them in text, and why there is none to be seen. */
-export const inTextInstead = ({ pictures = [], ...spoken }: Spoken, why: string): Spoken => {
-  const standIns = pictures.flatMap(({ inText, altText }) =>
-    inText.length > 0 ? inText : [{ head: 'What the picture would show', lines: [altText] }],
-  );
-  return pictures.length === 0
-    ? spoken
-    : { ...spoken, reply: [...standIns, { head: null, lines: [why] }].reduce(withPassage, spoken.reply) };
-};

@@ -2,6 +2,7 @@ import type { Deliveries } from '../deliveries.ts';
 import type { Destination } from './deliver.ts';
 import { replyKey } from './keys.ts';
 import { inWords } from './log.ts';
+import { type ShowPicture, type Turn, turnsOf } from './pictures/show.ts';
 import { leftStanding, startPlaceholder } from './placeholder.ts';
 import type { EventMemory, Logger, SpokenReply, Time } from './ports.ts';
 import type { At, Voice } from './post.ts';
@@ -25,6 +26,7 @@ export type Speaking = {
   /** Says each key once, whatever happens. `sayAgain`: somebody whose trace is lost may have said it before. */
   readonly deliveries: Deliveries & { readonly sayAgain: Deliveries['say'] };
   readonly memory: EventMemory;
+  readonly showPicture: ShowPicture;
   readonly time: Time;
   readonly log: Logger;
 };
@@ -86,12 +88,12 @@ const say = async (
 const sayFrom = async (
   speaking: Speaking,
   saying: Saying,
-  replies: readonly SpokenReply[],
+  turns: readonly Turn[],
   from: number,
 ): Promise<readonly Posted[]> => {
   const posted: Posted[] = [];
-  for (const [index, reply] of replies.entries())
-    if (index >= from) posted.push(...(await say(speaking, saying, reply, index)));
+  for (const [index, turn] of turns.entries())
+    if (index >= from) posted.push(...(await say(speaking, saying, await turn(), index)));
   return posted;
 };
 
@@ -122,12 +124,13 @@ export const answerIn = async (
   const inTime = again ? editing !== null : time.nowMs() - beganMs < editLimitMs;
   const standing = await placeholder.end();
   const saying = { place, again };
-  if (standing === null) return sayFrom(speaking, saying, replies, 0);
+  const turns = turnsOf(replies, speaking.showPicture);
+  if (standing === null) return sayFrom(speaking, saying, turns, 0);
 
   const [first] = replies;
   if (inTime && first !== undefined && (await becomes(speaking, place, standing, first)))
-    return [{ ...standing, reply: first }, ...(await sayFrom(speaking, saying, replies, 1))];
-  const posted = await sayFrom(speaking, saying, replies, 0);
+    return [{ ...standing, reply: first }, ...(await sayFrom(speaking, saying, turns, 1))];
+  const posted = await sayFrom(speaking, saying, turns, 0);
   await voice.remove(standing);
   return posted;
 };

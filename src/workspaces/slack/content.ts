@@ -17,6 +17,16 @@ export const textAlone = ({ text }: Content): Content => ({ text, blocks: [] });
 export const looksRefused = (outcome: Outcome, content: Content): boolean =>
   outcome.kind === 'refused' && outcome.code.startsWith('invalid_blocks') && content.blocks.length > 0;
 
+/** The platform looks at an uploaded file for a while; until then it refuses what shows it. */
+const fileProcessingMs = 5_000;
+export const fileProcessingPauseMs = 1_000;
+
+/** Whether the refusal may only mean that the file is not ready yet. */
+export const awaitsFile = (outcome: Outcome, content: Content, firstMs: number, nowMs: number): boolean =>
+  looksRefused(outcome, content) &&
+  content.blocks.some(({ type }) => type === 'image') &&
+  nowMs - firstMs < fileProcessingMs;
+
 export const looksRefusedNote = (outcome: Outcome): string => {
   const details = outcome.kind === 'refused' ? outcome.details.join('; ') : '';
   return `The platform refused the blocks of a message; its text went out alone. ${details}`.trim();

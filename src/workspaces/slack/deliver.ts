@@ -1,5 +1,13 @@
 import type { SayingOutcome } from '../../terms/delivery.ts';
-import { type Content, looksRefused, looksRefusedNote, plainly, textAlone } from './content.ts';
+import {
+  awaitsFile,
+  type Content,
+  fileProcessingPauseMs,
+  looksRefused,
+  looksRefusedNote,
+  plainly,
+  textAlone,
+} from './content.ts';
 import { deliveryEventType, type Found, lookUp, type Self } from './lookup.ts';
 import type { Pace } from './pace.ts';
 import type { Logger, Time } from './ports.ts';
@@ -146,6 +154,7 @@ export const makeSend = (desk: Delivering) => {
 
   return async (to: Destination, content: Content, sending: Sending): Promise<Sent> => {
     let shown = content;
+    const firstMs = time.nowMs();
     const standing = await lookBefore(to, sending);
     if (standing !== null) return standing;
     for (let pauseMs = firstRetryMs; ; ) {
@@ -166,6 +175,10 @@ export const makeSend = (desk: Delivering) => {
       }
       if (outcome.kind !== 'refused') continue;
       if (!looksRefused(outcome, shown)) return failed(to, outcome.code, outcome.details);
+      if (awaitsFile(outcome, shown, firstMs, time.nowMs())) {
+        await wait(time, fileProcessingPauseMs);
+        continue;
+      }
       log.error(looksRefusedNote(outcome));
       shown = textAlone(shown);
     }

@@ -20,6 +20,16 @@ export type Asking = {
 /** A block of the platform's layout, rendered and checked elsewhere. */
 export type Block = { readonly type: string };
 
+/** A picture to be shown below a reply, and the messages that do so or say it in words. */
+export type ShownPicture = {
+  readonly png: Uint8Array;
+  readonly fileName: string;
+  readonly title: string;
+  readonly altText: string;
+  readonly withFile: (fileId: string) => { readonly text: string; readonly blocks: readonly Block[] };
+  readonly inWords: (why: string) => { readonly text: string; readonly blocks: readonly Block[] };
+};
+
 export type SpokenReply = {
   /** All that screen readers and notifications get; escaped. */
   readonly text: string;
@@ -28,6 +38,7 @@ export type SpokenReply = {
   readonly kind: 'answer' | 'refusal' | 'help';
   /** Only for the person who asked. */
   readonly private: boolean;
+  readonly pictures?: readonly ShownPicture[];
 };
 
 /** A button, or a line of a menu, that someone chose. */

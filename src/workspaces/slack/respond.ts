@@ -1,5 +1,13 @@
-import { looksRefusedNote, plainly, textAlone } from './content.ts';
+import {
+  awaitsFile,
+  fileProcessingPauseMs,
+  looksRefused,
+  looksRefusedNote,
+  plainly,
+  textAlone,
+} from './content.ts';
 import { inWords } from './log.ts';
+import { type ShowPicture, turnsOf } from './pictures/show.ts';
 import type { Logger, SpokenReply, Time } from './ports.ts';
 import { callTimeoutMs } from './settings.ts';
 import { wait } from './wait.ts';
@@ -34,7 +42,7 @@ const send = async (
 };
 
 /** Replies privately through a response address, to a command or to a press on a private message. */
-export const makeRespond = (time: Time, log: Logger) => {
+export const makeRespond = (time: Time, log: Logger, show: ShowPicture) => {
   /** An unclear answer is tried once more: a private reply that comes twice does less harm than one that never comes. */
   const respond = async (url: string, reply: SpokenReply): Promise<void> => {
     let outcome = await send(url, reply);
@@ -42,7 +50,11 @@ export const makeRespond = (time: Time, log: Logger) => {
       await wait(time, retryMs);
       outcome = await send(url, reply);
     }
-    if (outcome.kind === 'refused' && outcome.code.includes('invalid_blocks') && reply.blocks.length > 0) {
+    for (const firstMs = time.nowMs(); awaitsFile(outcome, reply, firstMs, time.nowMs()); ) {
+      await wait(time, fileProcessingPauseMs);
+      outcome = await send(url, reply);
+    }
+    if (looksRefused(outcome, reply)) {
       log.error(looksRefusedNote(outcome));
       outcome = await send(url, textAlone(reply));
     }
@@ -51,9 +63,9 @@ export const makeRespond = (time: Time, log: Logger) => {
   };
 
   return async (url: string, replies: readonly SpokenReply[]): Promise<void> => {
-    for (const reply of replies.slice(0, mostReplies)) await respond(url, reply);
-    if (replies.length > mostReplies)
-      log.error(`${replies.length - mostReplies} private replies had no place.`);
+    const turns = turnsOf(replies, show);
+    for (const turn of turns.slice(0, mostReplies)) await respond(url, await turn());
+    if (turns.length > mostReplies) log.error(`${turns.length - mostReplies} private replies had no place.`);
   };
 };
 

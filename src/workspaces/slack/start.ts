@@ -11,6 +11,7 @@ import { listen } from './listen.ts';
 import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
 import type { Self } from './lookup.ts';
 import { editPace, makePace, messagePace } from './pace.ts';
+import { makeShow } from './pictures/show.ts';
 import { lookupsOver } from './places/lookups.ts';
 import type { SlackPorts } from './ports.ts';
 import { makeVoice, type Voice } from './post.ts';
@@ -119,7 +120,8 @@ export const startSlack = async (
   const delivering: Delivering = { wire, pace, slots, time, log, self, canLookUp, whenUnsure };
   const voice = makeVoice(delivering, makePace(time, editPace));
   const work = makeWork();
-  const respond = makeRespond(time, log);
+  const showPicture = makeShow(features.has('picture'), wire, time, log);
+  const respond = makeRespond(time, log, showPicture);
   const holder = newId();
   const durable = makeDurable({ store, holder, delivering, respond, work, app: () => app });
   const { outbox: deliveries, inbox, memory } = durable;
@@ -136,7 +138,7 @@ export const startSlack = async (
     clientOptions: { ...clientOptions },
   });
   const asked = askedOnRecord(askedInMemory(time), store, self);
-  const said = { voice, deliveries, memory, time, log, conversation, seen, asked, respond };
+  const said = { voice, deliveries, memory, showPicture, time, log, conversation, seen, asked, respond };
   listen(app, features, { ...said, self, places, onNews });
   const opened = await open(reception);
   if (!opened.ok) return opened;

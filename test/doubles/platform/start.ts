@@ -13,7 +13,7 @@ import { makeSockets } from './sockets.ts';
 import { answerCall, bodyOf, type WebApi } from './webApi.ts';
 import { makeWorkspace } from './workspace.ts';
 
-const everyScope = [
+export const everyScope = [
   'app_mentions:read,chat:write,im:history,commands,users:read,channels:read,groups:read,channels:history',
   'groups:history,pins:write,pins:read,files:write',
 ].flatMap((line) => line.split(','));

@@ -30,6 +30,7 @@ const setUp = () => {
     log: { info: note, warn: note, error: note },
     logged: log,
     voice,
+    showPicture: async () => said,
     time: manualTime(),
     seen: seenInMemory(),
     respond: (url: string) => {

@@ -2,15 +2,19 @@ import { count, needed, Refused, words } from '../arguments.ts';
 import { type Desk, type Method, type Methods, openChannel, type StoredFile } from '../desk.ts';
 import { bot } from '../workspace.ts';
 
+/** What screen readers say of a file, by the platform's page on uploads. */
+const longestAltText = 1_000;
+
 const getUploadUrl: Method = (desk, args) => {
   const id = desk.newId('F');
   const length = count(args, 'length', 0);
-  if (length <= 0) throw new Refused('invalid_arguments');
+  const altText = words(args, 'alt_text') ?? words(args, 'alt_txt');
+  if (length <= 0 || (altText ?? '').length > longestAltText) throw new Refused('invalid_arguments');
   desk.files.set(id, {
     id,
     name: needed(args, 'filename'),
     length,
-    altText: words(args, 'alt_text') ?? words(args, 'alt_txt'),
+    altText,
     bytes: null,
     completed: false,
     refusalsLeft: 0,
@@ -23,7 +27,9 @@ const namedFiles = (desk: Desk, given: unknown): StoredFile[] => {
   return given.map((entry: unknown) => {
     const id = typeof entry === 'object' && entry !== null && 'id' in entry ? String(entry.id) : '';
     const file = desk.files.get(id);
-    if (file === undefined || file.bytes === null) throw new Refused('file_not_found');
+    // A file that comes as a form is larger than the file.
+    if (file === undefined || file.completed || (file.bytes?.length ?? 0) < file.length)
+      throw new Refused('file_not_found');
     return file;
   });
 };
