@@ -13,6 +13,8 @@ export type Arguments = {
   readonly ticker: string | null;
   readonly since: string | null;
   readonly csv: boolean;
+  /** The file that the picture of the answer is written to. */
+  readonly picture: string | null;
   readonly words: readonly string[];
 };
 
@@ -32,6 +34,7 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
         ticker: { type: 'string' },
         since: { type: 'string' },
         csv: { type: 'boolean', default: false },
+        picture: { type: 'string' },
       },
     });
     return {
@@ -44,6 +47,7 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
       ticker: values.ticker ?? null,
       since: values.since ?? null,
       csv: values.csv ?? false,
+      picture: values.picture ?? null,
       words: positionals,
     };
   } catch (error) {

@@ -10,11 +10,13 @@ import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
 import { feedOnce } from './feed.ts';
 import { drawInline } from './pictures/draw.ts';
+import { savePicture } from './pictures/save.ts';
 import { recordsToKeep, recordsToRead, versionsOf } from './records/records.ts';
 import { settingsFor } from './settings.ts';
+import { createSubscriptions } from './subscriptions/deskSubscriptions.ts';
 
 const usage =
-  'npm run --silent ask -- [--config FILE] [--feed FILE] [--records FILE] [--keep] [--json] "QUESTION"';
+  'npm run --silent ask -- [--config FILE] [--feed FILE] [--records FILE] [--keep] [--json] [--picture FILE] "QUESTION"';
 
 const print = (text: string): void => {
   process.stdout.write(`${text}\n`);
@@ -26,6 +28,21 @@ const refuseWith = (found: readonly Problem[], json: boolean): number => {
     process.stderr.write(`${json ? problemToJson(each) : `${each.message}${hint}`}\n`);
   }
   return exitCodes.refused;
+};
+
+/** A question whose picture goes to a file asks for it, whether or not its words do. */
+const withWish = (question: string, { picture }: Arguments): string =>
+  picture === null || /\bas picture\b/i.test(question) ? question : `${question} as picture`;
+
+/** Writes the pictures, the first to the file that was named; where they are is no part of the answer. */
+const save = async (spoken: readonly Spoken[], { picture }: Arguments): Promise<Problem | null> => {
+  const pictures = spoken.flatMap(({ pictures: some = [] }) => some);
+  for (const [place, each] of pictures.entries()) {
+    const saved = await savePicture(each, place === 0 ? picture : null);
+    if (!saved.ok) return saved.problem;
+    process.stderr.write(`Picture: ${saved.value}\n`);
+  }
+  return null;
 };
 
 /** Answers in text one below the other; as JSON in one document. */
@@ -54,20 +71,20 @@ const ask = async (asked: Arguments): Promise<number> => {
   const clock = { nowMs: Date.now };
   const feed = await feedOnce(reading.settings, clock);
   const store = asked.keep ? recordsToKeep(reading.settings) : recordsToRead(reading.settings);
-  const desk = createDesk({
-    settings: reading.settings,
-    clock,
-    ...feed,
-    compute: computeInline(),
-    drawing: drawInline(),
-    records: {
-      store,
-      keeps: asked.keep,
-      versions: versionsOf(reading.settings),
-      tell: (message) => process.stderr.write(`${message}\n`),
-    },
+  const { settings } = reading;
+  const records = {
+    store,
+    keeps: asked.keep,
+    versions: versionsOf(settings),
+    tell: (message: string) => process.stderr.write(`${message}\n`),
+  };
+  const parts = { settings, clock, ...feed, compute: computeInline(), records };
+  const subscriptions = createSubscriptions({ ...parts, store: store.subscriptions }).ofDesk;
+  const desk = createDesk({ ...parts, drawing: drawInline(), subscriptions });
+  const spoken = await createConverse(desk).ask({
+    text: withWish(question, asked),
+    place: 'terminal',
   });
-  const spoken = await createConverse(desk).ask({ text: question, place: 'terminal' });
   await store.close();
   const problems = spoken.flatMap(({ outcome }) => (outcome?.ok === false ? [outcome.problem] : []));
   if (problems.length > 0 || spoken.length === 0)
@@ -78,7 +95,8 @@ const ask = async (asked: Arguments): Promise<number> => {
       asked.json,
     );
   show(spoken, asked.json);
-  return exitCodes.answered;
+  const unwritten = await save(spoken, asked);
+  return unwritten === null ? exitCodes.answered : refuseWith([unwritten], asked.json);
 };
 
 const main = async (): Promise<number> => {

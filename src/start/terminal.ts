@@ -1,5 +1,6 @@
 import { createInterface } from 'node:readline';
 import type { Terminal } from '../workspaces/terminal/start.ts';
+import { savePicture } from './pictures/save.ts';
 
 const widthWithoutTerminal = 100;
 
@@ -37,6 +38,7 @@ export const thisTerminal = (): Terminal & { readonly close: () => void } => {
   return {
     nextLine: interactive ? promptedLines() : pipedLines(),
     write: (text) => process.stdout.write(text),
+    savePicture: (picture) => savePicture(picture),
     width: () => process.stdout.columns ?? widthWithoutTerminal,
     interactive,
     close: () => process.stdin.destroy(),

@@ -37,6 +37,7 @@ export const problemCodes = {
   varianceNotStationary: 'a volatility process without a finite long-run variance',
   // files and settings
   fileUnreadable: 'a file that cannot be opened or read',
+  fileUnwritable: 'a file that cannot be written',
   columnMissing: 'a column that was asked for is not in the file',
   valueUnreadable: 'a cell that is not the kind of value its column holds',
   fileEmpty: 'a file without a row',

@@ -1,6 +1,7 @@
-import type { Reply } from '../../present/reply.ts';
 import { toText } from '../../present/text.ts';
-import type { Converse } from '../converse.ts';
+import type { Result } from '../../terms/result.ts';
+import type { Converse, Spoken } from '../converse.ts';
+import type { Picture } from '../pictures.ts';
 import { emptyRoom, promptOf, type Room, readLine } from './room.ts';
 
 /** What the terminal workspace needs of the machine. */
@@ -9,6 +10,8 @@ export type Terminal = {
   readonly nextLine: (prompt: string) => Promise<string | null>;
   readonly write: (text: string) => void;
   readonly width: () => number;
+  /** Writes a picture to a file; its path. */
+  readonly savePicture: (picture: Picture) => Promise<Result<string>>;
   /** A person is typing: the welcome is shown, and what was typed is not repeated. */
   readonly interactive: boolean;
 };
@@ -29,11 +32,21 @@ const indented = (text: string): string =>
     .map((line) => (line === '' ? '' : `  ${line}`))
     .join('\n');
 
-const show = (terminal: Terminal, room: Room, replies: readonly Reply[]): Room => {
+const showPictures = async (terminal: Terminal, pictures: Spoken['pictures'] = []): Promise<void> => {
+  for (const picture of pictures) {
+    const saved = await terminal.savePicture(picture);
+    const where = saved.ok ? `Picture: ${saved.value}` : saved.problem.message;
+    terminal.write(`${indented(where)}\n\n`);
+  }
+};
+
+const show = async (terminal: Terminal, room: Room, spoken: readonly Spoken[]): Promise<Room> => {
   let { buttons } = room;
-  for (const reply of replies) {
-    const text = toText(reply, { width: terminal.width() - 2, firstButton: buttons.length + 1 });
-    terminal.write(`${indented(text)}\n\n`);
+  for (const { reply, pictures = [] } of spoken) {
+    const passages = [...reply.passages, ...pictures.flatMap(({ inText }) => inText)];
+    const options = { width: terminal.width() - 2, firstButton: buttons.length + 1 };
+    terminal.write(`${indented(toText({ ...reply, passages }, options))}\n\n`);
+    await showPictures(terminal, pictures);
     buttons = [...buttons, ...reply.buttons];
   }
   return { ...room, buttons };
@@ -48,11 +61,7 @@ const ask = async (terminal: Terminal, converse: Converse, room: Room, text: str
   const where = room.thread === null ? '' : `, in thread ${room.thread}`;
   if (terminal.interactive) say(terminal, `  message ${number} in ${room.channel}${where}`);
   const spoken = await converse.ask({ text, place: placeOf(room) });
-  return show(
-    terminal,
-    { ...room, messageCount: number },
-    spoken.map(({ reply }) => reply),
-  );
+  return show(terminal, { ...room, messageCount: number }, spoken);
 };
 
 const press = async (terminal: Terminal, converse: Converse, room: Room, number: number): Promise<Room> => {
@@ -66,11 +75,7 @@ const press = async (terminal: Terminal, converse: Converse, room: Room, number:
     return room;
   }
   const spoken = await converse.press({ ...button, place: placeOf(room) });
-  return show(
-    terminal,
-    room,
-    spoken.map(({ reply }) => reply),
-  );
+  return show(terminal, room, spoken);
 };
 
 const enterThread = (terminal: Terminal, room: Room, number: number | null): Room => {

@@ -1,7 +1,17 @@
 import { describe, expect, test } from 'vitest';
 import { type Reply, reply } from '../../../src/present/reply.ts';
+import { succeed } from '../../../src/terms/result.ts';
 import type { Asking, Converse } from '../../../src/workspaces/converse.ts';
 import { demonstrationQuestions, startTerminal } from '../../../src/workspaces/terminal/start.ts';
+import { emptyPng } from '../../doubles/drawing.ts';
+
+const drawn = {
+  png: emptyPng,
+  altText: 'Closes.',
+  title: 'KELP',
+  fileName: 'kelp.png',
+  inText: [{ head: null, lines: ['▁▂▃'] }],
+};
 
 /** A conversation that repeats what it is asked, and a terminal that keeps what is written on it. */
 const sitDown = async (typed: readonly string[], interactive = false) => {
@@ -13,7 +23,8 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
   const converse: Converse = {
     ask: async (asking) => {
       asked.push(asking);
-      return [{ reply: answer(asking.text), outcome: null }];
+      const pictures = asking.text.includes('picture') ? [drawn] : [];
+      return [{ reply: answer(asking.text), outcome: null, pictures }];
     },
     overhear: async () => [],
     press: async ({ question }) => [{ reply: reply('working', `Working of ${question}.`), outcome: null }],
@@ -28,7 +39,10 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
   const write = (text: string) => {
     screen += text;
   };
-  const count = await startTerminal({ nextLine, write, width: () => 80, interactive }, converse);
+  const count = await startTerminal(
+    { nextLine, write, width: () => 80, interactive, savePicture: async () => succeed('pictures/one.png') },
+    converse,
+  );
   return { asked, screen, count, prompts };
 };
 
@@ -38,6 +52,12 @@ describe('the terminal workspace', () => {
     expect(asked.map(({ text }) => text)).toEqual(['interval KELP', 'feed']);
     expect(screen).toContain('#desk> interval KELP\n  You asked interval KELP\n');
     expect(count).toBe(2);
+  });
+
+  test('a picture is written to a file, whose path stands below, with its form in text', async () => {
+    const { screen } = await sitDown(['feed KELP as picture']);
+    expect(screen).toContain('  ▁▂▃\n');
+    expect(screen).toContain('\n  Picture: pictures/one.png\n');
   });
 
   test('with nothing typed at all it shows three questions with their answers', async () => {
