@@ -168,6 +168,9 @@ export type WatchQuestion = { readonly verb: 'watch' } & (
 /** What is asked of digests and watches. */
 export type SubscriptionQuestion = DigestQuestion | WatchQuestion;
 
+/** One result put at the head of a discussion, or taken off; null: the last one in the thread that it is asked in. */
+export type PinQuestion = { readonly verb: 'pin' | 'unpin'; readonly id: string | null };
+
 /** What is asked of the records rather than of the prices. */
 export type RecordQuestion = AgainQuestion | RecordsQuestion;
 
@@ -184,6 +187,7 @@ export type Question =
   | StatisticalQuestion
   | RecordQuestion
   | SubscriptionQuestion
+  | PinQuestion
   | HelpQuestion
   | FeedQuestion;
 

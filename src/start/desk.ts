@@ -9,9 +9,12 @@ import type { Result } from '../terms/result.ts';
 import type { Desk } from '../workspaces/desk.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import type { Drawing } from '../workspaces/pictures.ts';
+import type { DeskPins } from '../workspaces/pins/ports.ts';
 import type { DeskRecords } from '../workspaces/records/ports.ts';
+import type { DeskSubscriptions } from '../workspaces/subscriptions/ports.ts';
 import type { Compute } from './compute/compute.ts';
 import { helpPageOf } from './helpPages.ts';
+import { policyOf } from './policy.ts';
 import { dayAt, dayStartMs } from './today.ts';
 
 export type DeskParts = {
@@ -22,11 +25,14 @@ export type DeskParts = {
   readonly compute: Compute;
   readonly records: DeskRecords;
   readonly drawing: Drawing;
+  readonly subscriptions: DeskSubscriptions;
   /** Without them: a place that belongs to one person alone. */
   readonly permissions?: Permissions;
+  /** Where cards are put up; without it they are only listed. */
+  readonly wall?: DeskPins['wall'];
 };
 
-const builtVerbs = ['help', 'feed', 'again', 'records', ...answeredVerbs];
+const builtVerbs = ['help', 'feed', 'again', 'records', 'pin', 'unpin', 'digest', 'watch', ...answeredVerbs];
 
 const noVocabulary = createVocabulary([]);
 
@@ -58,7 +64,6 @@ export const questionDefaults = ({ defaults, digests, deskTimeZone }: Settings):
 export const createDesk = (parts: DeskParts): Desk => {
   const { settings, clock, snapshot, feedStatus, compute, records } = parts;
   const vocabularyOf = vocabularies(new Map(Object.entries(settings.digests.cities)));
-  const { periodsPerYear, smallestMeanThatMatters } = settings;
   return {
     snapshot,
     contextFor: (live) => ({
@@ -68,7 +73,7 @@ export const createDesk = (parts: DeskParts): Desk => {
       builtVerbs,
     }),
     compute: compute.answer,
-    policy: { periodsPerYear, smallestMeanThatMatters },
+    policy: policyOf(settings),
     clock,
     feedStatus,
     timeZone: settings.deskTimeZone,
@@ -77,5 +82,7 @@ export const createDesk = (parts: DeskParts): Desk => {
     records,
     drawing: parts.drawing,
     permissions: parts.permissions ?? everythingAllowed,
+    subscriptions: parts.subscriptions,
+    pins: { store: records.store.pins, wall: parts.wall ?? (() => null) },
   };
 };

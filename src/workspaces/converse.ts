@@ -3,22 +3,29 @@ import { answersReply, jsonReply } from '../present/answerReply.ts';
 import { stalenessInWords } from '../present/compose/feed.ts';
 import { helpReply } from '../present/compose/help.ts';
 import type { Reply } from '../present/reply.ts';
-import type { ReadQuestion, RecordQuestion, StatisticalQuestion } from '../questions/question.ts';
+import type {
+  PinQuestion,
+  Question,
+  ReadQuestion,
+  RecordQuestion,
+  StatisticalQuestion,
+} from '../questions/question.ts';
 import type { ReadOutcome } from '../questions/readMessage.ts';
 import type { Freshness } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
-import { problem } from '../terms/problem.ts';
-import { type Result, refuse, succeed } from '../terms/result.ts';
+import { type Result, succeed } from '../terms/result.ts';
 import { behindDoor, denied } from './admission.ts';
 import { answerFeed } from './answerFeed.ts';
 import { type Asking, type Converse, readerOf, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
 import { isMeantFor, readAsked } from './followUp.ts';
 import { pictured } from './pictured.ts';
+import { answerPins } from './pins/answerPins.ts';
 import { answerPress } from './press.ts';
-import { isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
+import { isOfPins, isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
 import { keepAnswer } from './records/keeping.ts';
+import { answerOfSubscriptions } from './subscriptions/answerSubscriptions.ts';
 import { workOut } from './workOut.ts';
 
 export type { Asking, Converse, Pressing, Spoken } from './conversation.ts';
@@ -27,7 +34,9 @@ export type { Desk } from './desk.ts';
 /** What can be answered while there are no prices. */
 const needsNoPrices = (outcome: ReadOutcome): boolean =>
   outcome.ok &&
-  (['help', 'feed'].includes(outcome.value.question.verb) || isOfRecords(outcome.value.question));
+  (['help', 'feed'].includes(outcome.value.question.verb) ||
+    isOfRecords(outcome.value.question) ||
+    isOfPins(outcome.value.question));
 
 const asWished = ({ wishes }: ReadQuestion, answers: Answers): Reply =>
   wishes.includes('json') ? jsonReply(answers) : answersReply(answers);
@@ -82,17 +91,18 @@ export const createConverse = (desk: Desk): Converse => {
 
   const answerOne = async (
     read: ReadQuestion,
+    question: Exclude<Question, PinQuestion>,
     live: Result<PriceSnapshot>,
     asking: Asking,
   ): Promise<Spoken> => {
-    const { question } = read;
     if (isStatistical(question))
       return live.ok ? answerStatistical(read, question, live.value, asking) : refused(live);
     if (isOfRecords(question)) return answerRecords(question, live, asking);
-    if (isOfSubscriptions(question))
-      return refused(
-        refuse(problem('verbNotBuilt', `${question.verb} cannot be asked here. Ask help for what can.`)),
-      );
+    if (isOfSubscriptions(question)) {
+      const asker = readerOf(asking);
+      const done = await answerOfSubscriptions(desk, { question, assumed: read.assumed, asker });
+      return done.ok ? said(done.value) : refused(done);
+    }
     return question.verb === 'help'
       ? said(helpReply(desk.helpPage(question.topic)))
       : answerFeed(desk, read, question.ticker, live);
@@ -109,7 +119,10 @@ export const createConverse = (desk: Desk): Converse => {
         if (!outcome.ok) spoken.push(refused(outcome));
         else {
           const may = desk.permissions.mayAsk(readerOf(asking), outcome.value.question.verb);
-          spoken.push(...(may.ok ? [await answerOne(outcome.value, live, asking)] : denied(may)));
+          const { question } = outcome.value;
+          if (!may.ok) spoken.push(...denied(may));
+          else if (isOfPins(question)) spoken.push(...(await answerPins(desk, question, asking)));
+          else spoken.push(await answerOne(outcome.value, question, live, asking));
         }
       }
       return spoken;

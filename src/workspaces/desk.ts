@@ -10,7 +10,9 @@ import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 import type { Permissions } from './permissions.ts';
 import type { Drawing } from './pictures.ts';
+import type { DeskPins } from './pins/ports.ts';
 import type { DeskRecords } from './records/ports.ts';
+import type { DeskSubscriptions } from './subscriptions/ports.ts';
 
 /** What a conversation needs of the rest of the house. */
 export type Desk = {
@@ -29,4 +31,7 @@ export type Desk = {
   readonly records: DeskRecords;
   readonly drawing: Drawing;
   readonly permissions: Permissions;
+  /** null where no digest and no watch can be kept. */
+  readonly subscriptions: DeskSubscriptions | null;
+  readonly pins: DeskPins;
 };

@@ -4,6 +4,7 @@ import { moreReplies } from '../present/compose/more.ts';
 import { type ButtonAction, type Reply, reply } from '../present/reply.ts';
 import { type Converse, type Pressing, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
+import { pinPressed } from './pins/answerPins.ts';
 import { atAnotherLevel } from './pressed/atAnotherLevel.ts';
 import { drawPressed } from './pressed/drawPressed.ts';
 import type { PressHandler } from './pressed/handler.ts';
@@ -27,6 +28,7 @@ const handlers: Readonly<Partial<Record<ButtonAction, PressHandler>>> = {
   level: atAnotherLevel,
   share: shareAnswers,
   picture: drawPressed,
+  pin: pinPressed,
 };
 
 const doesNothing = said(

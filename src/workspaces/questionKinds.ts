@@ -1,4 +1,5 @@
 import type {
+  PinQuestion,
   Question,
   RecordQuestion,
   StatisticalQuestion,
@@ -11,8 +12,12 @@ export const isOfRecords = (question: Question): question is RecordQuestion =>
 export const isOfSubscriptions = (question: Question): question is SubscriptionQuestion =>
   question.verb === 'digest' || question.verb === 'watch';
 
+export const isOfPins = (question: Question): question is PinQuestion =>
+  question.verb === 'pin' || question.verb === 'unpin';
+
 export const isStatistical = (question: Question): question is StatisticalQuestion =>
   question.verb !== 'help' &&
   question.verb !== 'feed' &&
   !isOfRecords(question) &&
-  !isOfSubscriptions(question);
+  !isOfSubscriptions(question) &&
+  !isOfPins(question);

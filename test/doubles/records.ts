@@ -27,4 +27,5 @@ export const brokenStore: RecordStore = {
   list: broken,
   verify: broken,
   conversations: { lastIn: broken, askedBy: broken },
+  pins: { find: broken, findCard: broken, put: broken, standingIn: broken, list: broken },
 };

@@ -26,6 +26,8 @@ const everyVerb = [
   'backtest',
   'digest',
   'watch',
+  'pin',
+  'unpin',
   'again',
   'records',
   'feed',

@@ -50,5 +50,7 @@ export const deskOn = (records: DeskRecords, snapshot: Desk['snapshot'], more: P
   records,
   drawing: layingOut,
   permissions: everythingAllowed,
+  subscriptions: null,
+  pins: { store: records.store.pins, wall: () => null },
   ...more,
 });

@@ -35,6 +35,7 @@ const buttonsOf = (answer: Answer): readonly Button[] => {
     { action: 'working', label: 'Show the working', answerId, question },
     { action: 'more', label: 'More figures', answerId, question },
     { action: 'picture', label: 'Picture', answerId, question },
+    { action: 'pin', label: 'Pin to the thread', answerId, question },
     ...levelButtons(answer),
   ];
 };

@@ -1,6 +1,7 @@
 import { figureTopics } from './figureTopics.ts';
 import { languageTopics } from './languageTopics.ts';
 import { notAskedTopics } from './notAskedTopics.ts';
+import { pinTopics } from './pinTopics.ts';
 import { recordTopics } from './recordTopics.ts';
 import { subscriptionTopics } from './subscriptionTopics.ts';
 import { tailTopics } from './tailTopics.ts';
@@ -12,6 +13,7 @@ export const verbTopics: readonly VerbTopic[] = [
   ...figureTopics,
   ...tailTopics,
   ...subscriptionTopics,
+  ...pinTopics,
   ...recordTopics,
 ];
 

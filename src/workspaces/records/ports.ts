@@ -9,6 +9,7 @@ import type {
   Versions,
 } from '../../terms/records.ts';
 import type { Result } from '../../terms/result.ts';
+import type { PinStore } from '../pins/ports.ts';
 
 /** An answer on record with every time that it was given, the first first. */
 export type OnRecord = { readonly answer: RecordedAnswer; readonly askings: readonly RecordedAsking[] };
@@ -22,6 +23,7 @@ export type RecordStore = {
   /** The newest askings first, at most so many. */
   readonly list: (filter: RecordFilter, most: number) => Promise<Result<readonly RecordLine[]>>;
   readonly verify: () => Promise<Result<RecordExamination>>;
+  readonly pins: PinStore;
   readonly conversations: {
     /** What was answered in a thread, the newest first, at most so many. */
     readonly lastIn: (thread: ThreadPlace, most: number) => Promise<Result<readonly LastAnswered[]>>;

@@ -126,6 +126,7 @@ export const subjectText = (question: Question): string => {
   if (question.verb === 'help') return question.topic ?? '';
   if (question.verb === 'again') return question.ids.join(' ');
   if (question.verb === 'digest' || question.verb === 'watch') return subjectOfSubscription(question);
+  if ('id' in question) return question.id ?? '';
   if (question.verb === 'compare' && question.between === 'tickers')
     return question.tickers.map(writeTicker).join(' ');
   return question.ticker === null ? '' : writeTicker(question.ticker);
@@ -153,6 +154,8 @@ const wordsOf = (question: Question, subject: string): Words => {
     case 'watch':
       return subscription(question, subject);
     case 'again':
+    case 'pin':
+    case 'unpin':
     case 'feed':
     case 'help':
       return [question.verb, subject];

@@ -7,6 +7,7 @@ import { feed } from './feed.ts';
 import { help } from './help.ts';
 import { interval } from './interval.ts';
 import { need } from './need.ts';
+import { pin, unpin } from './pin.ts';
 import { records } from './records.ts';
 import { shape } from './shape.ts';
 import { tail } from './tail.ts';
@@ -24,6 +25,8 @@ const readers: readonly VerbReader[] = [
   backtest,
   digest,
   watch,
+  pin,
+  unpin,
   again,
   records,
   feed,
