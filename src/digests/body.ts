@@ -1,5 +1,11 @@
 import { canonicalText } from '../questions/canonicalText.ts';
-import type { BacktestQuestion, Crossing, TailModel, TailQuestion } from '../questions/question.ts';
+import type {
+  BacktestQuestion,
+  Crossing,
+  SubscriptionQuestion,
+  TailModel,
+  TailQuestion,
+} from '../questions/question.ts';
 import type { Level } from '../terms/level.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
@@ -90,3 +96,23 @@ export const questionsOf = (body: DigestBody): readonly string[] =>
     canonicalText(tailOf(body, ticker)),
     canonicalText(backtestOf(body, ticker)),
   ]);
+
+/** The line that would make the same digest or watch anew. */
+export const asksOf = (subscription: Subscription): string => {
+  const asked = askedAnew(subscription);
+  return asked === null ? subscription.questions.join(', ') : canonicalText(asked);
+};
+
+const askedAnew = (subscription: Subscription): SubscriptionQuestion | null => {
+  const { kind, schedule } = subscription;
+  if (kind === 'watch') {
+    const body = readWatchBody(subscription);
+    if (!body.ok) return null;
+    const { watched, crossing, tail } = body.value;
+    return { verb: 'watch', do: 'add', watched, crossing, tail };
+  }
+  const body = readDigestBody(subscription);
+  if (!body.ok || schedule === null) return null;
+  const { tickers, window, tailLevel, model } = body.value;
+  return { verb: 'digest', do: 'add', tickers, schedule, window, tailLevel, model };
+};

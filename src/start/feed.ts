@@ -2,15 +2,14 @@ import type { Settings } from '../config/schema.ts';
 import { freshnessOfFeed } from '../feed/freshness.ts';
 import { filePorts } from '../feed/live/filePorts.ts';
 import { type FeedEvent, type LiveFeed, startLiveFeed } from '../feed/live/liveFeed.ts';
-import { openFeed } from '../feed/openFeed.ts';
+import { type OpenSnapshot, openFeed } from '../feed/openFeed.ts';
 import type { Clock } from '../terms/clock.ts';
 import type { FeedStatus } from '../terms/feedReport.ts';
-import type { PriceSnapshot } from '../terms/prices.ts';
 import type { Result } from '../terms/result.ts';
 
 /** The prices as a conversation asks for them. */
 export type FeedSource = {
-  readonly snapshot: () => Result<PriceSnapshot>;
+  readonly snapshot: () => Result<OpenSnapshot>;
   readonly feedStatus: () => FeedStatus;
 };
 

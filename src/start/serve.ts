@@ -8,6 +8,7 @@ import { type Converse, createConverse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
 import type { WhenUnsure } from '../workspaces/slack/settings.ts';
+import { terminalTeam } from '../workspaces/subscriptions/managing.ts';
 import { startTerminal } from '../workspaces/terminal/start.ts';
 import { readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
@@ -21,6 +22,8 @@ import { drawInThread } from './pictures/draw.ts';
 import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
 import type { Reopening } from './records/reopening.ts';
 import { settingsFor } from './settings.ts';
+import { createSubscriptions, type Subscriptions } from './subscriptions/deskSubscriptions.ts';
+import { deliverInTerminal, runSubscriptions } from './subscriptions/running.ts';
 import { thisTerminal } from './terminal.ts';
 
 const usage = 'npm start -- [--config FILE] [--feed FILE] [--records FILE] [--workspace auto|slack|terminal]';
@@ -37,6 +40,7 @@ type Serving = {
   readonly permissions: Permissions;
   readonly places: Places;
   readonly whenUnsure: WhenUnsure;
+  readonly subscriptions: Subscriptions;
 };
 
 /** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
@@ -63,9 +67,16 @@ const tickersOf = (feed: LiveFeed): readonly string[] => {
   return live.ok ? live.value.tickers : [];
 };
 
-const serveTerminal = async ({ converse }: Serving): Promise<number> => {
+const serveTerminal = async ({ converse, subscriptions, permissions }: Serving): Promise<number> => {
   const terminal = thisTerminal();
+  const running = runSubscriptions(subscriptions, {
+    team: terminalTeam,
+    deliver: deliverInTerminal(terminal),
+    placeState: permissions.placeVerdict,
+    tell: terminal.write,
+  });
   await startTerminal(terminal, converse);
+  await running.stop();
   terminal.close();
   return exitCodes.answered;
 };
@@ -95,16 +106,9 @@ const main = async (): Promise<number> => {
     workspace.value.kind === 'slack'
       ? createPermissions(settings.permissions, places, clock)
       : everythingAllowed;
-  const desk = createDesk({
-    settings,
-    clock,
-    snapshot: feed.snapshot,
-    feedStatus: feed.status,
-    compute,
-    records,
-    permissions,
-    drawing,
-  });
+  const parts = { settings, clock, snapshot: feed.snapshot, feedStatus: feed.status, compute, records };
+  const subscriptions = createSubscriptions({ ...parts, store: store.subscriptions });
+  const desk = createDesk({ ...parts, permissions, drawing, subscriptions: subscriptions.ofDesk });
   const serving = {
     converse: createConverse(desk),
     tickers: () => tickersOf(feed),
@@ -112,6 +116,7 @@ const main = async (): Promise<number> => {
     permissions,
     places,
     whenUnsure: settings.slack.whenUnsure,
+    subscriptions,
   };
   try {
     return workspace.value.kind === 'slack'

@@ -10,6 +10,8 @@ import type { SlackSettings, WhenUnsure } from '../workspaces/slack/settings.ts'
 import { startSlack } from '../workspaces/slack/start.ts';
 import { machineTime } from './machineTime.ts';
 import { slackConversation } from './slackConversation.ts';
+import type { Subscriptions } from './subscriptions/deskSubscriptions.ts';
+import { deliverInSlack, runSubscriptions } from './subscriptions/running.ts';
 
 /** Two sockets, so that one can be opened anew while the other hears. */
 const sockets = 2;
@@ -41,12 +43,13 @@ export type InSlack = {
   readonly places: Places;
   readonly records: DurableStore;
   readonly whenUnsure: WhenUnsure;
+  readonly subscriptions: Subscriptions;
 };
 
 /** Answers in Slack until the process is told to stop; the problem where it could not begin. */
 export const runSlack = async (
   workspace: WorkspaceToStart & { kind: 'slack' },
-  { converse, tickers, permissions, places, records, whenUnsure }: InSlack,
+  { converse, tickers, permissions, places, records, whenUnsure, subscriptions }: InSlack,
   log: Logger,
   newId: () => string,
 ): Promise<Problem | null> => {
@@ -64,10 +67,17 @@ export const runSlack = async (
     },
   );
   if (!started.ok) return started.problem;
-  const { port } = started.value;
+  const { port, team, deliveries } = started.value;
+  const running = runSubscriptions(subscriptions, {
+    team,
+    deliver: deliverInSlack(deliveries),
+    placeState: permissions.placeVerdict,
+    tell: log.error,
+  });
   log.info(port === null ? 'answering in Slack over sockets' : `answering in Slack on port ${port}`);
   const signal = await untilTold();
   log.info(`stopping on ${signal}: finishing what is under way`);
+  await running.stop();
   await started.value.stop();
   return null;
 };

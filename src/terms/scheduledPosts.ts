@@ -87,6 +87,9 @@ export type WatchPost = {
   readonly ticker: string;
   /** What is watched, as its canonical question. */
   readonly question: string;
+  readonly tailLevel: number;
+  readonly confidenceLevel: number;
+  readonly model: string;
   /** null where it cannot be told. */
   readonly reading: WatchReading | null;
   /** Why it cannot be told. */

@@ -1,4 +1,4 @@
-import { type Day, dateParts } from '../terms/day.ts';
+import { type Day, dateParts, weekdayOf } from '../terms/day.ts';
 import { digits, threeDigits } from './digits.ts';
 
 /** `1 return`, `60 returns`. */
@@ -19,6 +19,11 @@ export const dayInWords = (day: Day): string => {
   const { year, month, dayOfMonth } = dateParts(day);
   return `${dayOfMonth} ${monthNames[month - 1]} ${year}`;
 };
+
+const weekdayNames = ['Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday', 'Sunday'];
+
+/** `Thursday 26 Nov 2026`. */
+export const weekdayAndDay = (day: Day): string => `${weekdayNames[weekdayOf(day) - 1]} ${dayInWords(day)}`;
 
 /** Money with three significant digits and its ISO 4217 code: `18,400 USD`. */
 export const moneyInWords = (amount: number, currency: string): string =>

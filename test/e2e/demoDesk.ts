@@ -1,11 +1,14 @@
 import { readSettings } from '../../src/config/read.ts';
 import type { Settings } from '../../src/config/schema.ts';
+import { openSqlite } from '../../src/records/openSqlite.ts';
 import { computeInline } from '../../src/start/compute/inline.ts';
 import { createDesk } from '../../src/start/desk.ts';
 import { feedOnce } from '../../src/start/feed.ts';
+import { createSubscriptions } from '../../src/start/subscriptions/deskSubscriptions.ts';
 import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
 import { layingOut } from '../doubles/drawing.ts';
 import { recordsInMemory } from '../doubles/records.ts';
+import { accepted } from '../laws/outcomes.ts';
 
 const example = new URL('../../config/example-settings.yaml', import.meta.url).pathname;
 
@@ -21,7 +24,8 @@ export const demoConverse = async (keeps = true): Promise<Converse> => {
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
   const records = await recordsInMemory({ keeps });
-  return createConverse(
-    createDesk({ settings, clock, ...feed, compute: computeInline(), records, drawing: layingOut }),
-  );
+  const store = accepted(await openSqlite(null)).subscriptions;
+  const parts = { settings, clock, ...feed, compute: computeInline(), records };
+  const subscriptions = createSubscriptions({ ...parts, store }).ofDesk;
+  return createConverse(createDesk({ ...parts, drawing: layingOut, subscriptions }));
 };

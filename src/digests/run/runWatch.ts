@@ -1,4 +1,5 @@
 import { isoFromDay } from '../../terms/day.ts';
+import { levelFraction } from '../../terms/level.ts';
 import type { PriceSeries } from '../../terms/prices.ts';
 import type { WatchEvent, WatchReading } from '../../terms/scheduledPosts.ts';
 import type { Subscription } from '../../terms/subscriptions.ts';
@@ -26,6 +27,13 @@ type Watching = {
 const remember = ({ parts, subscription }: Watching, memory: WatchMemory): Promise<unknown> =>
   change(parts, subscription, (current) => ({ ...takenUp(current), memory: JSON.stringify(memory) }));
 
+const namesOf = ({ tail: { ticker, tailLevel, confidence, model } }: WatchBody) => ({
+  ticker,
+  tailLevel: levelFraction(tailLevel),
+  confidenceLevel: levelFraction(confidence),
+  model: model ?? 'all models',
+});
+
 type Said = {
   readonly event: WatchEvent;
   readonly reading: WatchReading | null;
@@ -49,7 +57,7 @@ const say = async ({ parts, subscription, body }: Watching, key: string, said: S
     threadTs: null,
     urgent: false,
     expiresAtMs: null,
-    post: { kind: 'watch', id, ticker: body.tail.ticker, question, ...said },
+    post: { kind: 'watch', id, question, ...namesOf(body), ...said },
   });
   if (outcome.kind !== 'refused') return true;
   const refusal = refusedBecause(outcome.code);

@@ -30,7 +30,7 @@ export const modelName = ({ model, parameters, shortcutVar }: TailModelFigures):
     : model;
 
 /** Without an interval the error of a simulation rules the digits, and without that three digits stand. */
-const written = (
+export const written = (
   estimate: number,
   lower: number | null,
   upper: number | null,

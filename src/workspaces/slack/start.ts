@@ -29,6 +29,8 @@ const stopLimitMs = 30_000;
 const mostUnhurried = 4;
 
 export type SlackWorkspace = {
+  /** The workspace that the token is for. */
+  readonly team: string;
   readonly features: ReadonlySet<Feature>;
   readonly voice: Voice;
   readonly deliveries: Deliveries;
@@ -40,11 +42,12 @@ export type SlackWorkspace = {
   readonly stop: () => Promise<void>;
 };
 
-type Identity = Self & { readonly scopes: readonly string[] | null };
+type Identity = Self & { readonly team: string; readonly scopes: readonly string[] | null };
 
 const identityShape = z.object({
   user_id: z.string(),
   bot_id: z.string(),
+  team_id: z.string(),
   response_metadata: z.object({ scopes: z.array(z.string()).optional() }).optional(),
 });
 
@@ -71,8 +74,8 @@ const identify = async (wire: Wire): Promise<Result<Identity>> => {
     return refuse(
       problem('settingWrong', 'The token is not one of a bot. Use the token that begins with xoxb-.'),
     );
-  const { user_id: userId, bot_id: botId, response_metadata: more } = read.data;
-  return succeed({ userId, botId, scopes: more?.scopes ?? null });
+  const { user_id: userId, bot_id: botId, team_id: team, response_metadata: more } = read.data;
+  return succeed({ userId, botId, team, scopes: more?.scopes ?? null });
 };
 
 const open = async (reception: Reception): Promise<Result<null>> => {
@@ -110,7 +113,7 @@ export const startSlack = async (
   const identified = await identify(wire);
   if (!identified.ok) return identified;
 
-  const { scopes, ...self } = identified.value;
+  const { scopes, team, ...self } = identified.value;
   places.connect(lookupsOver(wire), self.userId);
   const features = featuresOf(scopes, log);
   const pace = makePace(time, messagePace);
@@ -156,6 +159,7 @@ export const startSlack = async (
   };
   let leaving: Promise<void> | null = null;
   return succeed({
+    team,
     features,
     voice,
     deliveries,
