@@ -22,8 +22,11 @@ export const dayInWords = (day: Day): string => {
 
 const weekdayNames = ['Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday', 'Sunday'];
 
+/** `Thursday`. */
+export const weekdayInWords = (day: Day): string => weekdayNames[weekdayOf(day) - 1] ?? '';
+
 /** `Thursday 26 Nov 2026`. */
-export const weekdayAndDay = (day: Day): string => `${weekdayNames[weekdayOf(day) - 1]} ${dayInWords(day)}`;
+export const weekdayAndDay = (day: Day): string => `${weekdayInWords(day)} ${dayInWords(day)}`;
 
 /** Money with three significant digits and its ISO 4217 code: `18,400 USD`. */
 export const moneyInWords = (amount: number, currency: string): string =>

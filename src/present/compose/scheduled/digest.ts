@@ -7,7 +7,7 @@ import type {
   OldPrices,
   Skipped,
 } from '../../../terms/scheduledPosts.ts';
-import { threeDigits } from '../../../wording/digits.ts';
+import { significant } from '../../../wording/digits.ts';
 import { levelInWords, percent, percentDecimals } from '../../../wording/percent.ts';
 import { counted, instantInWords, listed, weekdayAndDay } from '../../../wording/words.ts';
 import { type Passage, type Reply, reply, type Table } from '../../reply.ts';
@@ -41,6 +41,9 @@ const skippedInWords = (skipped: Skipped | null, timeZone: string): string => {
 const flaggedInWords = ({ flags }: AnyDigest): string =>
   flags.length === 0 ? '' : `The feed flags ${counted(flags.length, 'thing')} in these prices, said below. `;
 
+/** An expectation needs no more digits than the counts beside it. */
+const byChance = (expected: number): string => significant(expected, 2);
+
 /** How many exceedances and zones there are, beside what chance alone would bring among so many tickers. */
 const headInWords = (post: AnyDigest): string => {
   const figures = figuresOf(post);
@@ -48,10 +51,10 @@ const headInWords = (post: AnyDigest): string => {
   const losses = `${counted(exceeded, 'loss', 'losses')} exceeded ${exceeded === 1 ? 'its' : 'their'} figure`;
   const { exceedances, nonGreenZones } = post.byChance;
   if (nonGreenZones === null)
-    return `${losses}; chance alone would bring ${threeDigits(exceedances)} among ${counted(figures.length, 'ticker')}.`;
+    return `${losses}; chance alone would bring ${byChance(exceedances)} among ${counted(figures.length, 'ticker')}.`;
   const zones = figures.filter(({ judged }) => judged?.zone === 'yellow' || judged?.zone === 'red').length;
   const notGreen = `${counted(zones, 'zone')} ${zones === 1 ? 'is' : 'are'} not green`;
-  return `${losses} and ${notGreen}; chance alone would bring ${threeDigits(exceedances)} and ${threeDigits(nonGreenZones)} among ${counted(figures.length, 'ticker')}.`;
+  return `${losses} and ${notGreen}; chance alone would bring ${byChance(exceedances)} and ${byChance(nonGreenZones)} among ${counted(figures.length, 'ticker')}.`;
 };
 
 const none = '–';

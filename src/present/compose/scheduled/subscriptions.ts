@@ -1,6 +1,6 @@
 import type { InstantMs } from '../../../terms/clock.ts';
 import { localTimeAt } from '../../../terms/zonedTime.ts';
-import { counted, instantInWords, weekdayAndDay } from '../../../wording/words.ts';
+import { counted, instantInWords, weekdayInWords } from '../../../wording/words.ts';
 import { type Reply, reply } from '../../reply.ts';
 
 /** A digest or a watch as it is listed. `asks` is what would make it anew. */
@@ -14,11 +14,11 @@ export type SubscriptionInWords = {
   readonly timeZone: string | null;
 };
 
-/** `Wednesday 2 Dec 2026, 2026-12-02 08:30 Europe/London`. */
+/** `Wednesday 2026-12-02 08:30 Europe/London`. */
 export const nextInWords = ({ nextDueMs, timeZone }: SubscriptionInWords): string =>
   nextDueMs === null || timeZone === null
     ? 'nothing is planned'
-    : `${weekdayAndDay(localTimeAt(nextDueMs, timeZone).day)}, ${instantInWords(nextDueMs, timeZone)}`;
+    : `${weekdayInWords(localTimeAt(nextDueMs, timeZone).day)} ${instantInWords(nextDueMs, timeZone)}`;
 
 const noHolidays = 'No holidays are known here, so every weekday counts as a session.';
 
