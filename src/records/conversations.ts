@@ -33,7 +33,13 @@ const lastIn = async (
 ): Promise<readonly LastAnswered[]> => {
   const inChannel = newest(db, most)
     .select('answers.body')
-    .where('channel', '=', channel)
+    // what was asked under an id that the channel had before was asked there too
+    .where(({ or, eb, selectFrom }) =>
+      or([
+        eb('channel', '=', channel),
+        eb('channel', 'in', selectFrom('channel_moves').select('from_id').where('to_id', '=', channel)),
+      ]),
+    )
     .where('team', team === null ? 'is' : '=', team);
   const rows = await (thread === null
     ? inChannel.where('thread', 'is', null)

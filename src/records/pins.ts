@@ -145,6 +145,13 @@ const moveChannel = (db: Database, { team, from, to }: ChannelMove): Promise<nul
       .values({ team, from_id: from, to_id: to, noted_order })
       .onConflict((conflict) => conflict.columns(['team', 'from_id']).doUpdateSet({ to_id: to, noted_order }))
       .execute();
+    // ids that were older still lead straight to the newest
+    await change
+      .updateTable('channel_moves')
+      .set({ to_id: to })
+      .where('team', '=', team)
+      .where('to_id', '=', from)
+      .execute();
     await change
       .updateTable('pins')
       .set({ channel: to })

@@ -2,6 +2,7 @@ import { expect, test } from 'vitest';
 import type { Store } from '../../src/records/store.ts';
 import type { PinnedCard } from '../../src/terms/pins.ts';
 import { accepted } from '../laws/outcomes.ts';
+import { answerOf, askingAt } from '../records/madeRecords.ts';
 
 export const cardMade = (more: Partial<PinnedCard> = {}): PinnedCard => ({
   team: 'T1',
@@ -75,12 +76,26 @@ export const pinsContract = (open: () => Promise<Store>): void => {
     const pins = await holding(cardMade(), cardMade({ channel: 'C2', answerId: 'R-B' }));
     accepted(await pins.moveChannel({ team: 'T1', from: 'C1', to: 'C9' }));
     accepted(await pins.moveChannel({ team: 'T1', from: 'C9', to: 'C8' }));
-    accepted(await pins.moveChannel({ team: 'T1', from: 'C1', to: 'C9' }));
     expect(accepted(await pins.find({ ...place, channel: 'C8' }, 'R-A'))?.cardTs).toBe('2.5');
     expect(accepted(await pins.find({ ...place, channel: 'C2' }, 'R-B'))).not.toBe(null);
     expect(accepted(await pins.moves())).toEqual([
+      { team: 'T1', from: 'C1', to: 'C8' },
       { team: 'T1', from: 'C9', to: 'C8' },
-      { team: 'T1', from: 'C1', to: 'C9' },
     ]);
+  });
+
+  test('what was asked under an id that a channel had before was asked in that channel', async () => {
+    const store = await open();
+    const from = { team: 'T1', channel: 'C1', person: 'U1', message: '1.5', thread: null };
+    accepted(await store.keep(answerOf('R-A'), askingAt(1, { from })));
+    const lastIn = async (channel: string) =>
+      accepted(await store.conversations.lastIn({ team: 'T1', channel, thread: '1.5' }, 5)).map(
+        ({ id }) => id,
+      );
+    expect(await lastIn('C8')).toEqual([]);
+    accepted(await store.pins.moveChannel({ team: 'T1', from: 'C1', to: 'C9' }));
+    accepted(await store.pins.moveChannel({ team: 'T1', from: 'C9', to: 'C8' }));
+    expect(await lastIn('C8')).toEqual(['R-A']);
+    expect(await lastIn('C7')).toEqual([]);
   });
 };

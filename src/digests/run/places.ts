@@ -18,7 +18,7 @@ export const refusedBecause = (code: string): PlaceVerdict => ({
 
 /** Tells the owner once, in a message to them alone; `at` is what it is about, the same at each attempt. */
 const tellOwner = async (
-  { deliver, tell }: RunParts,
+  { deliver, tell }: Pick<RunParts, 'deliver' | 'tell'>,
   { team, id, owner, kind, channel }: Subscription,
   what: 'paused' | 'stopped',
   why: string,
@@ -41,7 +41,7 @@ const tellOwner = async (
  * crash in between never leaves them untold. Nothing is said again of what is paused already.
  */
 export const holdBack = async (
-  parts: RunParts,
+  parts: Pick<RunParts, 'store' | 'deliver' | 'tell'>,
   subscription: Subscription,
   verdict: Exclude<PlaceVerdict, { kind: 'fine' }>,
   at: number,

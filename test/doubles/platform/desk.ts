@@ -35,7 +35,9 @@ export type Methods = Readonly<Record<string, Method>>;
 
 /** The channel, as far as the bot may know of it. */
 export const knownChannel = (desk: Desk, id: string): Channel => {
-  const channel = desk.workspace.channels.get(id);
+  const { channels, people, directWith } = desk.workspace;
+  // whoever is named as a channel is spoken to directly
+  const channel = people.get(id)?.deleted === false ? directWith(id) : channels.get(id);
   const hidden = channel !== undefined && channel.kind !== 'public' && !channel.members.has(bot.userId);
   if (channel === undefined || hidden) throw new Refused('channel_not_found');
   return channel;
