@@ -5,10 +5,13 @@ import type { Problem } from '../terms/problem.ts';
 import { problem } from '../terms/problem.ts';
 import { createPermissions } from '../workspaces/access/createPermissions.ts';
 import { type Converse, createConverse } from '../workspaces/converse.ts';
+import type { Desk } from '../workspaces/desk.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
+import type { Wall } from '../workspaces/pins/ports.ts';
 import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
 import type { WhenUnsure } from '../workspaces/slack/settings.ts';
 import { terminalTeam } from '../workspaces/subscriptions/managing.ts';
+import { createSurfaces, type Surfaces } from '../workspaces/surfaces/surfaces.ts';
 import { startTerminal } from '../workspaces/terminal/start.ts';
 import { readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
@@ -25,6 +28,7 @@ import { settingsFor } from './settings.ts';
 import { createSubscriptions, type Subscriptions } from './subscriptions/deskSubscriptions.ts';
 import { deliverInTerminal, runSubscriptions } from './subscriptions/running.ts';
 import { thisTerminal } from './terminal.ts';
+import { laterWall } from './wall.ts';
 
 const usage = 'npm start -- [--config FILE] [--feed FILE] [--records FILE] [--workspace auto|slack|terminal]';
 
@@ -41,6 +45,8 @@ type Serving = {
   readonly places: Places;
   readonly whenUnsure: WhenUnsure;
   readonly subscriptions: Subscriptions;
+  readonly desk: Desk;
+  readonly standWall: (wall: Wall) => void;
 };
 
 /** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
@@ -108,15 +114,19 @@ const main = async (): Promise<number> => {
       : everythingAllowed;
   const parts = { settings, clock, snapshot: feed.snapshot, feedStatus: feed.status, compute, records };
   const subscriptions = createSubscriptions({ ...parts, store: store.subscriptions });
-  const desk = createDesk({ ...parts, permissions, drawing, subscriptions: subscriptions.ofDesk });
+  const { wall, stand: standWall } = laterWall();
+  const desk = createDesk({ ...parts, permissions, drawing, wall, subscriptions: subscriptions.ofDesk });
   const serving = {
     converse: createConverse(desk),
+    surfaces: createSurfaces(desk, settings.slack.listenInThreads),
     tickers: () => tickersOf(feed),
     records: store,
     permissions,
     places,
     whenUnsure: settings.slack.whenUnsure,
     subscriptions,
+    desk,
+    standWall,
   };
   try {
     return workspace.value.kind === 'slack'

@@ -12,10 +12,12 @@ import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
 import type { Self } from './lookup.ts';
 import { editPace, makePace, messagePace } from './pace.ts';
 import { makeShow } from './pictures/show.ts';
+import { makePinBoard, type PinBoard } from './pinBoard.ts';
 import { lookupsOver } from './places/lookups.ts';
 import type { SlackPorts } from './ports.ts';
 import { makeVoice, type Voice } from './post.ts';
 import { type Reception, receptionOf } from './receive.ts';
+import { recentPresses } from './recent.ts';
 import { makeRespond } from './respond.ts';
 import { type Feature, featuresOf } from './scopes.ts';
 import { callTimeoutMs, type SlackSettings } from './settings.ts';
@@ -34,6 +36,7 @@ export type SlackWorkspace = {
   readonly features: ReadonlySet<Feature>;
   readonly voice: Voice;
   readonly deliveries: Deliveries;
+  readonly pinBoard: PinBoard;
   /** The port that requests come in at; null over sockets. */
   readonly port: number | null;
   /** Resolves once nothing is under way. */
@@ -142,7 +145,8 @@ export const startSlack = async (
   });
   const asked = askedOnRecord(askedInMemory(time), store, self);
   const said = { voice, deliveries, memory, showPicture, time, log, conversation, seen, asked, respond };
-  listen(app, features, { ...said, self, places, onNews });
+  const recent = recentPresses(time);
+  listen(app, features, { ...said, self, places, onNews, wire, recent });
   const opened = await open(reception);
   if (!opened.ok) return opened;
   deliveries.start();
@@ -163,6 +167,7 @@ export const startSlack = async (
     features,
     voice,
     deliveries,
+    pinBoard: makePinBoard(wire, time),
     port: reception.port(),
     idle: work.idle,
     stop: () => {
