@@ -122,6 +122,21 @@ module.exports = {
       'a picture ends at SVG; making a file of it is machinery, and native code',
     ),
     {
+      name: 'drawing-is-loaded-late',
+      severity: 'error',
+      comment:
+        'the libraries for pictures take a third of a second to load; only the thread that draws waits for them',
+      from: { path: '^src/', pathNot: '^src/start/pictures/worker\\.ts$' },
+      to: { path: '^src/(present/picture/toSvg|start/pictures/png)\\.ts$' },
+    },
+    {
+      name: 'the-drawing-thread-is-imported-late',
+      severity: 'error',
+      comment: 'an import at the head of a file would load the libraries for pictures at the start',
+      from: { path: '^src/' },
+      to: { path: '^src/start/pictures/worker\\.ts$', dependencyTypesNot: ['dynamic-import'] },
+    },
+    {
       name: 'nobody-imports-start',
       severity: 'error',
       comment: 'start wires everything and is wired by nothing',

@@ -30,6 +30,26 @@ const planted: readonly (readonly [string, string, string])[] = [
     "import jStat from 'jstat';\nconsole.log(jStat);",
     'distribution-library-only-in-stats',
   ],
+  [
+    'src/digests/charts.ts',
+    "import { compile } from 'vega-lite';\nconsole.log(compile);",
+    'chart-grammar-only-in-present/picture',
+  ],
+  [
+    'src/present/picture/paints.ts',
+    "import { Resvg } from '@resvg/resvg-js';\nconsole.log(Resvg);",
+    'rasteriser-only-in-start',
+  ],
+  [
+    'src/start/pictures/early.ts',
+    "import { toPng } from './png.ts';\nconsole.log(toPng);",
+    'drawing-is-loaded-late',
+  ],
+  [
+    'src/start/early.ts',
+    "import draw from './pictures/worker.ts';\nconsole.log(draw);",
+    'the-drawing-thread-is-imported-late',
+  ],
   ['src/workspaces/starts.ts', "import '../start/core.ts';", 'nobody-imports-start'],
   ['src/questions/first.ts', "import './second.ts';", 'no-cycles'],
   ['src/config/lost.ts', "import './nowhere.ts';", 'no-unresolvable'],
@@ -41,6 +61,8 @@ const companions: readonly (readonly [string, string])[] = [
   ['src/feed/file.ts', 'export const file = 1;'],
   ['src/start/core.ts', 'export const core = 1;'],
   ['src/questions/second.ts', "import './first.ts';"],
+  ['src/start/pictures/png.ts', 'export const toPng = 1;'],
+  ['src/start/pictures/worker.ts', 'export default 1;'],
 ];
 
 describe('the import rules', () => {
