@@ -3,24 +3,59 @@ import { createServer, createServerModuleRunner } from 'vite';
 import { registry, startRegistry } from './registry.mjs';
 
 /**
- * The tests and the mutated sources of the working directory, loaded into this process. `load` evaluates
- * every module anew; their transformed text is kept.
+ * The header of a mutated file counts which places are passed, and asks for the active mutant through functions
+ * that replace themselves. Judging needs no counts, and functions that stay can be inlined.
+ */
+const withoutCounting = (text) =>
+  text
+    .replace('function stryCov_9fa48() {', 'function stryCov_9fa48() { return;')
+    .replace('stryCov_9fa48 = cover;', '')
+    .replace(
+      'function stryMutAct_9fa48(id) {',
+      `function stryMutAct_9fa48(id) {
+         const stryker = globalThis.__stryker__;
+         if (stryker.activeMutant !== id) return false;
+         if (++stryker.hitCount > stryker.hitLimit) throw new Error('the mutant was passed too often');
+         return true;`,
+    )
+    .replace('stryMutAct_9fa48 = isActive;', '');
+
+/**
+ * The tests and the sources of the working directory, loaded into this process. `load` evaluates every module anew,
+ * `originals` in place of the mutated files but for the one named; without a name all are mutated and count.
  */
 export const openEnvironment = async (testFiles) => {
   const root = process.cwd();
+  let originals = {};
+  let mutated = null;
+  const chooseText = {
+    name: 'one-mutated-file',
+    enforce: 'pre',
+    transform: (text, id) => {
+      const original = mutated === null ? undefined : originals[id];
+      if (original === undefined) return null;
+      return id === mutated ? withoutCounting(text) : original;
+    },
+  };
   const server = await createServer({
     configFile: false,
     root,
     logLevel: 'error',
     appType: 'custom',
+    plugins: [chooseText],
     server: { middlewareMode: true, hmr: false, ws: false, watch: null },
     optimizeDeps: { noDiscovery: true },
     resolve: { alias: { vitest: fileURLToPath(new URL('testApi.mjs', import.meta.url)) } },
   });
+  const { moduleGraph } = server.environments.ssr;
   const modules = createServerModuleRunner(server.environments.ssr, {
     hmr: false,
     sourcemapInterceptor: false,
   });
+  const forget = (id) => {
+    const known = moduleGraph.getModuleById(id);
+    if (known !== undefined) moduleGraph.invalidateModule(known);
+  };
   return {
     load: async () => {
       modules.clearCache();
@@ -30,6 +65,12 @@ export const openEnvironment = async (testFiles) => {
         await modules.import(`${root}/${file}`);
       }
       return registry().tests;
+    },
+    /** What the next `load` takes; `file` is the one that stays mutated, or '' for none. */
+    mutateOnly: (file, originalTexts) => {
+      for (const id of mutated === null ? Object.keys(originalTexts) : [mutated, file]) forget(id);
+      originals = originalTexts;
+      mutated = file;
     },
     close: async () => {
       await modules.close();

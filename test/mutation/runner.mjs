@@ -20,7 +20,7 @@ import { openEnvironment } from './environment.mjs';
  * - a mutant that is not killed within `millisecondsPerMutant` of tests (as timed without mutants) counts as
  *   survived, so the score is never flattered by what was not run.
  */
-const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 5000);
+const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 3000);
 
 /**
  * A share of the mutants to try, for a machine that has no time for all. Which ones follows from their place and
@@ -60,10 +60,24 @@ const failureOf = async (body) => {
 /** What the first run learned, kept in the sandbox for the process that follows one that was ended. */
 const learnedFile = '.mutation-first-run.json';
 
+const projectRoot = () => process.cwd().split('/.stryker-tmp/')[0];
+
+/** The texts of the mutated files as they were, by their path in the sandbox. */
+const originalsOf = (files) =>
+  Object.fromEntries(
+    files.map((file) => {
+      const path = file.startsWith(process.cwd())
+        ? relative(process.cwd(), file)
+        : relative(projectRoot(), file);
+      return [`${process.cwd()}/${path}`, readFileSync(`${projectRoot()}/${path}`, 'utf8')];
+    }),
+  );
+
 class InProcessRunner {
   environment = null;
   tests = new Map();
-  learned = { testFiles: [], durations: {}, coverage: {} };
+  learned = { testFiles: [], originals: {}, durations: {}, coverage: {} };
+  mutatedFile = null;
   isFresh = false;
 
   capabilities() {
@@ -75,11 +89,16 @@ class InProcessRunner {
     this.isFresh = true;
   }
 
-  async dryRun({ testFiles }) {
-    const stryker = instrumented();
-    this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
-    this.environment = await openEnvironment(this.learned.testFiles);
+  /** Only the file of the mutant is mutated; the others run as they were written. */
+  async turnTo(file) {
+    if (file === this.mutatedFile) return;
+    this.environment.mutateOnly(file, this.learned.originals);
+    this.mutatedFile = file;
     await this.load();
+  }
+
+  async runAll() {
+    const stryker = instrumented();
     const results = [];
     for (const { id, name, body } of this.tests.values()) {
       stryker.currentTestId = id;
@@ -87,19 +106,33 @@ class InProcessRunner {
       const failureMessage = await failureOf(body);
       const timeSpentMs = performance.now() - start;
       stryker.currentTestId = undefined;
-      this.learned.durations[id] = timeSpentMs;
       const status = failureMessage === null ? TestStatus.Success : TestStatus.Failed;
       results.push({ id, name, timeSpentMs, status, failureMessage: failureMessage ?? '' });
     }
-    this.learned.coverage = stryker.mutantCoverage?.perTest ?? {};
+    return results;
+  }
+
+  /** Once with all files mutated, which counts who passes which mutant, and once without, which times the tests. */
+  async dryRun({ testFiles, files }) {
+    const stryker = instrumented();
+    this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
+    this.learned.originals = originalsOf(files ?? []);
+    this.environment = await openEnvironment(this.learned.testFiles);
+    await this.load();
+    const counted = await this.runAll();
+    const { mutantCoverage } = stryker;
+    this.learned.coverage = mutantCoverage?.perTest ?? {};
+    await this.turnTo('');
+    const tests = await this.runAll();
+    for (const { id, timeSpentMs } of tests) this.learned.durations[id] = timeSpentMs;
     writeFileSync(learnedFile, JSON.stringify(this.learned));
-    return { status: DryRunStatus.Complete, tests: results, mutantCoverage: stryker.mutantCoverage };
+    const failed = counted.filter(({ status }) => status === TestStatus.Failed);
+    return { status: DryRunStatus.Complete, tests: failed.length > 0 ? counted : tests, mutantCoverage };
   }
 
   async resume() {
     this.learned = JSON.parse(readFileSync(learnedFile, 'utf8'));
     this.environment = await openEnvironment(this.learned.testFiles);
-    await this.load();
   }
 
   /** The tests that reach the mutant before the others (which only load it), cheap before dear, within the allowance. */
@@ -149,6 +182,7 @@ class InProcessRunner {
   async mutantRun(options) {
     if (!isDrawn(options.activeMutant)) return { status: MutantRunStatus.Error, errorMessage: notDrawn };
     if (this.environment === null) await this.resume();
+    await this.turnTo(options.sandboxFileName);
     const outcome = await this.verdict({ ...options, reloadEnvironment: false });
     return options.reloadEnvironment && outcome.status === MutantRunStatus.Survived
       ? this.verdict(options)
