@@ -12,7 +12,10 @@ const claimOf = (holder: string, nowMs: number, key = 'digest:T1:D-1:1') => ({
 });
 
 /** What every store of digests and watches must do. `open` gives an empty store. */
-export const subscriptionsContract = (name: string, open: () => Promise<Store>): void => {
+export const subscriptionsContract = (
+  name: string,
+  open: () => Promise<Pick<Store, 'subscriptions'>>,
+): void => {
   describe(`digests and watches ${name}`, () => {
     test('are given back as they were made', async () => {
       const { subscriptions } = await open();
