@@ -7,6 +7,7 @@ import { createPermissions } from '../workspaces/access/createPermissions.ts';
 import { type Converse, createConverse } from '../workspaces/converse.ts';
 import type { Desk } from '../workspaces/desk.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
+import { cardsAtTerminal } from '../workspaces/pins/notes.ts';
 import type { Wall } from '../workspaces/pins/ports.ts';
 import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
 import type { WhenUnsure } from '../workspaces/slack/settings.ts';
@@ -39,6 +40,7 @@ const refuseWith = (problems: readonly Pick<Problem, 'message'>[]): number => {
 
 type Serving = {
   readonly converse: Converse;
+  readonly surfaces: Surfaces;
   readonly tickers: () => readonly string[];
   readonly records: Reopening;
   readonly permissions: Permissions;
@@ -73,7 +75,7 @@ const tickersOf = (feed: LiveFeed): readonly string[] => {
   return live.ok ? live.value.tickers : [];
 };
 
-const serveTerminal = async ({ converse, subscriptions, permissions }: Serving): Promise<number> => {
+const serveTerminal = async ({ converse, subscriptions, permissions, desk }: Serving): Promise<number> => {
   const terminal = thisTerminal();
   const running = runSubscriptions(subscriptions, {
     team: terminalTeam,
@@ -81,7 +83,7 @@ const serveTerminal = async ({ converse, subscriptions, permissions }: Serving):
     placeState: permissions.placeVerdict,
     tell: terminal.write,
   });
-  await startTerminal(terminal, converse);
+  await startTerminal(terminal, converse, () => cardsAtTerminal(desk));
   await running.stop();
   terminal.close();
   return exitCodes.answered;

@@ -2,11 +2,13 @@ import { z } from 'zod';
 import { toBlocks } from '../present/blocks.ts';
 import { pictureMessage } from '../present/pictureMessage.ts';
 import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
+import { homeView } from '../present/views/homePage.ts';
 import { admission } from '../workspaces/admission.ts';
-import type { Spoken, SpokenPicture } from '../workspaces/conversation.ts';
+import { type Asking, type Spoken, type SpokenPicture, said } from '../workspaces/conversation.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
-import type { Conversation, ShownPicture, SpokenReply } from '../workspaces/slack/ports.ts';
+import type { Conversation, Press, ShownPicture, SpokenReply } from '../workspaces/slack/ports.ts';
+import type { Surfaces } from '../workspaces/surfaces/surfaces.ts';
 
 const examples = ['interval KELP 60d', 'interval vol KELP 3m', 'help'];
 
@@ -66,36 +68,58 @@ const readButton = (actionId: string, value: string | null): Omit<Button, 'label
   }
 };
 
+/** A private answer can be shown to the whole channel, where it was asked in one. */
+const shareable = (asking: Pick<Asking, 'place' | 'from'>, spoken: Spoken): Spoken => {
+  const channel = asking.from?.channel ?? 'D';
+  const [first] = spoken.reply.buttons;
+  if (asking.place !== 'command' || channel.startsWith('D') || first === undefined) return spoken;
+  const { answerId, question } = first;
+  const share: Button = { action: 'share', label: 'Share with the channel', answerId, question };
+  return { ...spoken, reply: { ...spoken.reply, buttons: [share, ...spoken.reply.buttons] } };
+};
+
+const olderButton: Spoken = said(
+  reply('refusal', 'This button is from an older version of the bot. Ask the question anew.'),
+);
+
 /** The conversation as the Slack workspace wants it: replies already laid out in blocks. */
 export const slackConversation = (
   converse: Converse,
   firstTickers: () => readonly string[],
+  { form, home, listensInThreads }: Surfaces,
   permissions: Permissions = everythingAllowed,
-): Conversation => ({
-  ready: permissions.learn,
-  converse: async (asking) => (await converse.ask(asking)).map(inBlocks),
-  press: async ({ actionId, value, place, from }) => {
+): Conversation => {
+  const press = async ({ actionId, value, place, from }: Press): Promise<readonly Spoken[]> => {
     const button = readButton(actionId, value);
-    if (button === null)
+    return button === null ? [olderButton] : converse.press({ ...button, place, from });
+  };
+
+  return {
+    ready: permissions.learn,
+    converse: async (asking) =>
+      (await converse.ask(asking)).map((spoken) => inBlocks(shareable(asking, spoken))),
+    press: async (pressing) =>
+      (await press(pressing)).map((spoken) =>
+        inBlocks(pressing.actionId === 'share' ? spoken : shareable(pressing, spoken)),
+      ),
+    overhear: listensInThreads ? async (asking) => (await converse.overhear(asking)).map(inBlocks) : null,
+    form,
+    home: async (asker, page, chosen) => {
+      const [spoken] = chosen === null ? [] : await press({ ...chosen, ...asker });
+      return homeView(await home(asker, page, spoken?.reply.sentence ?? null));
+    },
+    examples: async (asker) => {
+      const barred = await admission(permissions, asker);
+      if (barred !== null) return barred.map(inBlocks);
+      const [ticker = 'KELP'] = firstTickers();
+      const lines = examples.map((example) => example.replace('KELP', ticker));
       return [
         spokenReply(
-          reply('refusal', 'This button is from an older version of the bot. Ask the question anew.'),
+          reply('help', 'Ask one question a line. Three that work here:', {
+            passages: [{ head: null, lines }],
+          }),
         ),
       ];
-    const spoken = await converse.press({ ...button, place, from });
-    return spoken.map(inBlocks);
-  },
-  examples: async (asker) => {
-    const barred = await admission(permissions, asker);
-    if (barred !== null) return barred.map(inBlocks);
-    const [ticker = 'KELP'] = firstTickers();
-    const lines = examples.map((example) => example.replace('KELP', ticker));
-    return [
-      spokenReply(
-        reply('help', 'Ask one question a line. Three that work here:', {
-          passages: [{ head: null, lines }],
-        }),
-      ),
-    ];
-  },
-});
+    },
+  };
+};

@@ -1,7 +1,7 @@
 import type { Answers } from '../answers/answer.ts';
 import { workingReplies } from '../present/answerReply.ts';
 import { moreReplies } from '../present/compose/more.ts';
-import { type ButtonAction, type Reply, reply } from '../present/reply.ts';
+import type { ButtonAction, Reply } from '../present/reply.ts';
 import { type Converse, type Pressing, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
 import { pinPressed } from './pins/answerPins.ts';
@@ -10,6 +10,7 @@ import { drawPressed } from './pressed/drawPressed.ts';
 import type { PressHandler } from './pressed/handler.ts';
 import { pressedAnswers } from './pressed/pressedAnswers.ts';
 import { shareAnswers } from './pressed/share.ts';
+import { changing } from './pressed/subscription.ts';
 
 /** Shows something of the answers under the button. */
 const showing =
@@ -22,25 +23,21 @@ const showing =
   };
 
 /** A new button is one line here. */
-const handlers: Readonly<Partial<Record<ButtonAction, PressHandler>>> = {
+const handlers: Readonly<Record<ButtonAction, PressHandler>> = {
   working: showing(workingReplies),
   more: showing(moreReplies),
   level: atAnotherLevel,
   share: shareAnswers,
   picture: drawPressed,
   pin: pinPressed,
+  pauseSubscription: changing('pause'),
+  resumeSubscription: changing('resume'),
+  stopSubscription: changing('stop'),
 };
 
-const doesNothing = said(
-  reply(
-    'refusal',
-    'This button does nothing here. Ask the question anew, or ask help for what can be asked.',
-  ),
-);
-
 /** Answers a press by what the button is for. */
-export const answerPress = async (
+export const answerPress = (
   desk: Desk,
   ask: Converse['ask'],
   pressing: Pressing,
-): Promise<readonly Spoken[]> => (await handlers[pressing.action]?.(desk, pressing, ask)) ?? [doesNothing];
+): Promise<readonly Spoken[]> => handlers[pressing.action](desk, pressing, ask);

@@ -2,10 +2,14 @@ import { readSettings } from '../../src/config/read.ts';
 import type { Settings } from '../../src/config/schema.ts';
 import { openSqlite } from '../../src/records/openSqlite.ts';
 import { computeInline } from '../../src/start/compute/inline.ts';
-import { createDesk } from '../../src/start/desk.ts';
+import { createDesk, type DeskParts } from '../../src/start/desk.ts';
 import { feedOnce } from '../../src/start/feed.ts';
+import { slackConversation } from '../../src/start/slackConversation.ts';
 import { createSubscriptions } from '../../src/start/subscriptions/deskSubscriptions.ts';
 import { type Converse, createConverse } from '../../src/workspaces/converse.ts';
+import type { Desk } from '../../src/workspaces/desk.ts';
+import type { Conversation } from '../../src/workspaces/slack/ports.ts';
+import { createSurfaces } from '../../src/workspaces/surfaces/surfaces.ts';
 import { layingOut } from '../doubles/drawing.ts';
 import { recordsInMemory } from '../doubles/records.ts';
 import { accepted } from '../laws/outcomes.ts';
@@ -18,14 +22,27 @@ export const exampleSettings = (): Settings => {
   return reading.settings;
 };
 
-/** The whole bot on the demonstration prices, on the morning after they end, without a workspace around it. */
-export const demoConverse = async (keeps = true): Promise<Converse> => {
+/** The desk of the demonstration prices, on the morning after they end. */
+const demoDesk = async (keeps = true, more: Pick<DeskParts, 'permissions'> = {}): Promise<Desk> => {
   const settings = exampleSettings();
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
   const records = await recordsInMemory({ keeps });
   const store = accepted(await openSqlite(null)).subscriptions;
-  const parts = { settings, clock, ...feed, compute: computeInline(), records };
+  const parts = { settings, clock, ...feed, compute: computeInline(), records, ...more };
   const subscriptions = createSubscriptions({ ...parts, store }).ofDesk;
-  return createConverse(createDesk({ ...parts, drawing: layingOut, subscriptions }));
+  return createDesk({ ...parts, drawing: layingOut, subscriptions });
+};
+
+/** The whole bot on the demonstration prices, without a workspace around it. */
+export const demoConverse = async (keeps = true): Promise<Converse> => createConverse(await demoDesk(keeps));
+
+/** The same as the workspace has it, with its form and its home. */
+export const demoConversation = async (
+  listensInThreads = false,
+  more: Pick<DeskParts, 'permissions'> = {},
+): Promise<Conversation> => {
+  const desk = await demoDesk(true, more);
+  const surfaces = createSurfaces(desk, listensInThreads);
+  return slackConversation(createConverse(desk), () => ['KELP', 'TARN'], surfaces, desk.permissions);
 };

@@ -138,13 +138,13 @@ describe('the button under a reply', () => {
     expect(spoken?.outcome).toMatchObject({ ok: false, problem: { code: 'unknownRecord' } });
   });
 
-  test('that nothing answers says so', async () => {
+  test('of a digest is refused where none can be kept', async () => {
     const [spoken] = await createConverse(deskOn(records, () => live)).press({
       action: 'resumeSubscription',
       place: 'channel',
       answerId: 'D-1',
       question: '',
     });
-    expect(spoken?.reply.kind).toBe('refusal');
+    expect(spoken?.outcome).toMatchObject({ ok: false, problem: { code: 'storeUnavailable' } });
   });
 });

@@ -18,7 +18,7 @@ export const commandKeyOf = (command: { readonly team_id: string; readonly trigg
   JSON.stringify([command.team_id, command.trigger_id]);
 
 export type Commanding = {
-  readonly conversation: Conversation;
+  readonly conversation: Pick<Conversation, 'converse' | 'examples'>;
   readonly seen: SeenEvents;
   readonly respond: Respond;
   readonly log: Logger;

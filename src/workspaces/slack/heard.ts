@@ -41,16 +41,16 @@ const withoutMention = (text: string, self: Self): string =>
     .replace(/^[\s:,]+/, '')
     .trim();
 
-/** The question in an event, or null where the event holds none for the bot. */
-export const heardIn = (event: unknown, team: string, self: Self): Heard | null => {
+type Said = Heard & { readonly addressed: boolean };
+
+/** What a person said in an event; null where nobody of the people did. */
+const saidIn = (event: unknown, team: string, self: Self): Said | null => {
   const read = spoken.safeParse(event);
   if (!read.success) return null;
   const { type, channel, ts, user, text = '', thread_ts, subtype, bot_id, edited } = read.data;
   if (bot_id !== undefined || user === undefined || user === self.userId) return null;
   if (subtype !== undefined && !subtypesOfPeople.has(subtype)) return null;
   const direct = channel.startsWith('D');
-  const addressed = direct || type === 'app_mention' || mentionOf(self).test(text);
-  if (!addressed) return null;
   const editedTs = edited?.ts ?? null;
   return {
     eventKey: JSON.stringify([team, channel, ts, editedTs]),
@@ -63,7 +63,24 @@ export const heardIn = (event: unknown, team: string, self: Self): Heard | null 
     direct,
     words: withoutMention(text, self),
     editedTs,
+    addressed: direct || type === 'app_mention' || mentionOf(self).test(text),
   };
+};
+
+/** The question in an event, or null where the event holds none for the bot. */
+export const heardIn = (event: unknown, team: string, self: Self): Heard | null => {
+  const said = saidIn(event, team, self);
+  if (said === null || !said.addressed) return null;
+  const { addressed: _, ...heard } = said;
+  return heard;
+};
+
+/** Words in a thread that do not address the bot: the only ones of that kind that it may ever look at. */
+export const overheardIn = (event: unknown, team: string, self: Self): Heard | null => {
+  const said = saidIn(event, team, self);
+  if (said === null || said.addressed || said.threadTs === null || said.editedTs !== null) return null;
+  const { addressed: _, ...heard } = said;
+  return heard;
 };
 
 const bodyOfEvent = z.object({ team_id: z.string().catch(''), event: z.looseObject({ type: z.string() }) });

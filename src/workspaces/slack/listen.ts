@@ -4,15 +4,16 @@ import { answerCommand, type Commanding, commandName } from './command.ts';
 import { heardIn } from './heard.ts';
 import { inWords } from './log.ts';
 import type { Self } from './lookup.ts';
+import { answerOverheard } from './overheard.ts';
 import { newsOf } from './places/newsOf.ts';
 import type { Places } from './places/places.ts';
-import { answerPress, type Pressing } from './press.ts';
 import { answerQuestion, type Questioning } from './question.ts';
 import { type Feature, featureEvents } from './scopes.ts';
+import { listenSurfaces, type Surfacing } from './surfaces/listenSurfaces.ts';
 
 export type Listening = Questioning &
   Commanding &
-  Pressing & {
+  Surfacing & {
     readonly self: Self;
     readonly places: Places;
     readonly onNews: (news: News) => Promise<void>;
@@ -35,7 +36,8 @@ export const listen = (app: App, features: ReadonlySet<Feature>, listening: List
 
   const question = async (event: unknown, team: string, wanted: (direct: boolean) => boolean) => {
     const heard = heardIn(event, team, self);
-    if (heard !== null && wanted(heard.direct)) await answerQuestion(listening, heard);
+    if (heard === null) await answerOverheard(listening, features, event, team);
+    else if (wanted(heard.direct)) await answerQuestion(listening, heard);
   };
 
   const answersIn = (direct: boolean): boolean => features.has(direct ? 'directMessage' : 'mention');
@@ -50,10 +52,7 @@ export const listen = (app: App, features: ReadonlySet<Feature>, listening: List
     });
   }
 
-  app.action(/[\s\S]*/, async ({ body, ack }) => {
-    await ack();
-    await answerPress(listening, body);
-  });
+  listenSurfaces(app, features, listening);
 
   hearNews(app, features, listening);
 

@@ -1,7 +1,9 @@
+import type { View } from '../../present/views/parts.ts';
 import type { Clock } from '../../terms/clock.ts';
 import type { PostedContent } from '../../terms/inbox.ts';
 import type { AskedFrom } from '../../terms/records.ts';
 import type { News } from '../news.ts';
+import type { AskForm } from '../surfaces/askForm.ts';
 import type { DurableStore } from './durable/ports.ts';
 import type { Places } from './places/places.ts';
 
@@ -59,6 +61,16 @@ export type Conversation = {
   readonly ready: (asker: Pick<Asking, 'place' | 'from'>) => Promise<void>;
   /** Three questions that work here, for a mention without a word. */
   readonly examples: (asker: Pick<Asking, 'place' | 'from'>) => Promise<readonly SpokenReply[]>;
+  /** Words in a thread that do not address the bot; null where it does not listen to them. */
+  readonly overhear: Converse | null;
+  /** The form of the global shortcut. */
+  readonly form: AskForm;
+  /** The page of one person's home, after what they chose there, where they chose something. */
+  readonly home: (
+    asker: Pick<Asking, 'place' | 'from'>,
+    page: number,
+    chosen: Pick<Press, 'actionId' | 'value'> | null,
+  ) => Promise<View>;
 };
 
 /** `error` is for the operator: something that people did not get although they should have. */

@@ -31,7 +31,14 @@ export const placeOf = (heard: Heard): ReplyPlace => ({
 const editAgeMs = (heard: Heard): number =>
   heard.editedTs === null ? 0 : (Number(heard.editedTs) - Number(heard.ts)) * 1_000;
 
-const askerOf = ({ direct, team, channel, user, ts, threadTs }: Heard): Pick<Asking, 'place' | 'from'> => ({
+export const askerOf = ({
+  direct,
+  team,
+  channel,
+  user,
+  ts,
+  threadTs,
+}: Heard): Pick<Asking, 'place' | 'from'> => ({
   place: direct ? 'direct' : 'channel',
   from: { team, channel, person: user, message: ts, thread: threadTs },
 });

@@ -17,12 +17,16 @@ import type { Outcome } from './wire.ts';
 const mostReplies = 5;
 const retryMs = 1_000;
 
+/** Who sees it: the one who typed or pressed, or everybody in the channel. */
+type Audience = 'ephemeral' | 'in_channel';
+
 const send = async (
   url: string,
   { text, blocks }: Pick<SpokenReply, 'text' | 'blocks'>,
+  audience: Audience,
 ): Promise<Outcome> => {
   const looks = blocks.length === 0 ? {} : { blocks };
-  const body = { response_type: 'ephemeral', replace_original: false, text, ...looks, ...plainly };
+  const body = { response_type: audience, replace_original: false, text, ...looks, ...plainly };
   try {
     const response = await fetch(url, {
       method: 'POST',
@@ -41,30 +45,36 @@ const send = async (
   }
 };
 
-/** Replies privately through a response address, to a command or to a press on a private message. */
+/** Replies through a response address, to a command, a form or a press on a private message: privately unless told otherwise. */
 export const makeRespond = (time: Time, log: Logger, show: ShowPicture) => {
   /** An unclear answer is tried once more: a private reply that comes twice does less harm than one that never comes. */
-  const respond = async (url: string, reply: SpokenReply): Promise<void> => {
-    let outcome = await send(url, reply);
-    if (outcome.kind === 'unsure') {
+  const respond = async (url: string, reply: SpokenReply, audience: Audience): Promise<void> => {
+    let outcome = await send(url, reply, audience);
+    if (outcome.kind === 'unsure' && audience === 'ephemeral') {
       await wait(time, retryMs);
-      outcome = await send(url, reply);
+      outcome = await send(url, reply, audience);
     }
     for (const firstMs = time.nowMs(); awaitsFile(outcome, reply, firstMs, time.nowMs()); ) {
       await wait(time, fileProcessingPauseMs);
-      outcome = await send(url, reply);
+      outcome = await send(url, reply, audience);
     }
     if (looksRefused(outcome, reply)) {
       log.error(looksRefusedNote(outcome));
-      outcome = await send(url, textAlone(reply));
+      outcome = await send(url, textAlone(reply), audience);
     }
-    if (outcome.kind === 'refused') log.error(`A private reply was not delivered: ${outcome.code}.`);
-    if (outcome.kind === 'unsure') log.error(`A private reply may be lost: ${outcome.reason}.`);
+    if (outcome.kind === 'refused')
+      log.error(`A reply through a response address was not delivered: ${outcome.code}.`);
+    if (outcome.kind === 'unsure')
+      log.error(`A reply through a response address may be lost: ${outcome.reason}.`);
   };
 
-  return async (url: string, replies: readonly SpokenReply[]): Promise<void> => {
+  return async (
+    url: string,
+    replies: readonly SpokenReply[],
+    audience: Audience = 'ephemeral',
+  ): Promise<void> => {
     const turns = turnsOf(replies, show);
-    for (const turn of turns.slice(0, mostReplies)) await respond(url, await turn());
+    for (const turn of turns.slice(0, mostReplies)) await respond(url, await turn(), audience);
     if (turns.length > mostReplies) log.error(`${turns.length - mostReplies} private replies had no place.`);
   };
 };

@@ -60,6 +60,16 @@ const conversationsSelect = z.strictObject({
   type: z.literal('conversations_select'),
   default_to_current_conversation: z.boolean().optional(),
   response_url_enabled: z.boolean().optional(),
+  filter: z
+    .strictObject({
+      include: z
+        .array(z.enum(['im', 'mpim', 'private', 'public']))
+        .min(1)
+        .optional(),
+      exclude_bot_users: z.boolean().optional(),
+      exclude_external_shared_channels: z.boolean().optional(),
+    })
+    .optional(),
   placeholder,
   ...actionId,
 });
@@ -74,6 +84,11 @@ const textInput = z.strictObject({
   multiline: z.boolean().optional(),
   initial_value: z.string().optional(),
   max_length: z.number().int().max(limits.input.maxLength).optional(),
+  dispatch_action_config: z
+    .strictObject({
+      trigger_actions_on: z.array(z.enum(['on_enter_pressed', 'on_character_entered'])).min(1),
+    })
+    .optional(),
   placeholder,
   ...actionId,
 });

@@ -2,6 +2,7 @@ import type { Sent } from './deliveries.ts';
 import type { Stage } from './events.ts';
 import { channelOf, messageOf, type Place } from './people.ts';
 import type { Whispered } from './records.ts';
+import { triggerOf } from './triggers.ts';
 import { type Block, bot, team, writtenOut } from './workspace.ts';
 
 const carries = (element: unknown, actionId: string): element is object =>
@@ -25,15 +26,11 @@ type Pressable = {
   readonly message: object;
 };
 
-/** Slash commands and presses of buttons. */
+/** Slash commands, shortcuts and presses of buttons on messages. */
 export const makeCommands = ({ desk, responses, deliver }: Stage) => {
   const { workspace } = desk;
 
-  const newTrigger = (): string => {
-    const id = desk.newId('X');
-    desk.triggers.set(id, { bornMs: workspace.clock.nowMs(), used: false });
-    return id;
-  };
+  const newTrigger = (): string => triggerOf(desk);
   const nameOf = (user: string): string => workspace.people.get(user)?.name ?? '';
 
   /** A private message is not shown to the app again. */
@@ -64,6 +61,47 @@ export const makeCommands = ({ desk, responses, deliver }: Stage) => {
           is_enterprise_install: 'false',
           response_url: responses.newAddress(typed.channel, user, null),
           trigger_id: newTrigger(),
+        },
+      });
+    },
+
+    /** The global shortcut: it knows no channel and no thread. */
+    shortcut: (callbackId: string, user = 'U0ADA'): Sent =>
+      deliver({
+        kind: 'interactive',
+        payload: {
+          type: 'shortcut',
+          token: 'verification',
+          action_ts: workspace.stamp(),
+          team,
+          user: { id: user, username: nameOf(user), team_id: team.id },
+          is_enterprise_install: false,
+          enterprise: null,
+          callback_id: callbackId,
+          trigger_id: newTrigger(),
+        },
+      }),
+
+    /** The shortcut in the menu of a message, whosever the message is. */
+    messageShortcut: (on: Place, callbackId: string, user = 'U0ADA'): Sent => {
+      const channel = channelOf(workspace, on.channel);
+      const message = messageOf(workspace, on);
+      return deliver({
+        kind: 'interactive',
+        payload: {
+          type: 'message_action',
+          token: 'verification',
+          action_ts: workspace.stamp(),
+          team,
+          user: { id: user, username: nameOf(user), team_id: team.id },
+          channel: { id: channel.id, name: channel.name },
+          is_enterprise_install: false,
+          enterprise: null,
+          callback_id: callbackId,
+          trigger_id: newTrigger(),
+          response_url: responses.newAddress(channel.id, user, message.threadTs),
+          message_ts: message.ts,
+          message: writtenOut(message, false),
         },
       });
     },

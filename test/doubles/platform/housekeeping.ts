@@ -28,6 +28,10 @@ export const makeHousekeeping = (stage: Stage) => {
   };
 
   return {
+    /** A person opens the app's home, or its messages. */
+    openHome: (user = 'U0ADA', tab: 'home' | 'messages' = 'home'): readonly Sent[] =>
+      told({ type: 'app_home_opened', user, channel: `D${user.slice(1)}`, tab }),
+
     archive: (id: string): readonly Sent[] => archived(id, true),
     unarchive: (id: string): readonly Sent[] => archived(id, false),
 

@@ -10,6 +10,7 @@ import { makeRecords } from './records.ts';
 import { requestTransport, type Signing, sendRequest } from './requests.ts';
 import { makeResponses, type Responses } from './responses.ts';
 import { makeSockets } from './sockets.ts';
+import { makeViewing } from './viewing.ts';
 import { answerCall, bodyOf, type WebApi } from './webApi.ts';
 import { makeWorkspace } from './workspace.ts';
 
@@ -104,6 +105,7 @@ export const startPlatform = async (options: PlatformOptions = {}) => {
     ...makePeople(stage),
     ...makeCommands(stage),
     ...makeHousekeeping(stage),
+    ...makeViewing(stage),
     ...desk.records,
     time,
     faults,

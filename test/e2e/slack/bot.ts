@@ -48,6 +48,18 @@ export const echo: Conversation = {
   press: ({ value }) => Promise.resolve([spoken(`Working of: ${value}`)]),
   ready: async () => {},
   examples: async () => [spoken('Try: interval KELP 60d', { kind: 'help' })],
+  overhear: null,
+  form: {
+    view: () => ({
+      type: 'modal',
+      callback_id: 'ask',
+      title: { type: 'plain_text', text: 'Ask', emoji: false },
+      blocks: [section('A form.')],
+    }),
+    tickers: () => [],
+    read: () => ({ ok: true, question: 'interval KELP 60d' }),
+  },
+  home: async () => ({ type: 'home', callback_id: 'home', blocks: [section('Home.')] }),
 };
 
 /** Answers each question only when the test says so. */
@@ -65,7 +77,9 @@ export const answeringLater = () => {
 
 export type LogLine = { readonly level: 'info' | 'warn' | 'error'; readonly message: string };
 
-type BotOptions = PlatformOptions & {
+export type BotOptions = PlatformOptions & {
+  /** It will not be stopped: its store dies under it. */
+  readonly dies?: boolean;
   readonly conversation?: Partial<Conversation>;
   readonly mode?: Receiving['mode'];
   readonly store?: DurableStore;
@@ -91,12 +105,10 @@ afterEach(async () => {
   for (const each of running.splice(0).reverse()) await each.stop();
 });
 
-const identifiers = () => {
-  let count = 0;
-  return () => {
-    count += 1;
-    return `delivery-${count}`;
-  };
+let holders = 0;
+const newHolder = (): string => {
+  holders += 1;
+  return `holder-${holders}`;
 };
 
 const logInto = (lines: LogLine[]) => ({
@@ -109,6 +121,10 @@ const logInto = (lines: LogLine[]) => ({
 export const prepare = async (options: BotOptions = {}) => {
   const platform = await startPlatform(options);
   running.push(platform);
+  return prepareOn(platform, options);
+};
+
+const prepareOn = async (platform: Platform, options: BotOptions) => {
   const store = options.store ?? accepted(await openSqlite(null));
   const { whenUnsure = 'leave' } = options;
   const log: LogLine[] = [];
@@ -137,7 +153,7 @@ export const prepare = async (options: BotOptions = {}) => {
         conversation,
         log: logInto(log),
         time: platform.time,
-        newId: identifiers(),
+        newId: newHolder,
         seen: seenInMemory(),
         store,
         places: options.places ?? makePlaces(platform.time, logInto(log)),
@@ -147,17 +163,28 @@ export const prepare = async (options: BotOptions = {}) => {
   return { platform, log, asked, pressed, start };
 };
 
-export const startBot = async (options: BotOptions = {}): Promise<Stage> => {
-  const { start, ...stage } = await prepare(options);
+const startPrepared = async (
+  { start, ...stage }: Awaited<ReturnType<typeof prepareOn>>,
+  options: BotOptions,
+): Promise<Stage> => {
   const started = await start();
   if (!started.ok) throw new Error(started.problem.message);
   const bot = started.value;
-  running.push(bot);
+  if (options.dies !== true) running.push(bot);
   const url = `http://127.0.0.1:${bot.port ?? 0}/slack/events`;
   if (options.mode === 'http') stage.platform.sendTo(url);
-  else await stage.platform.sockets.connected(2);
   return { ...stage, bot, url };
 };
+
+export const startBot = async (options: BotOptions = {}): Promise<Stage> => {
+  const stage = await startPrepared(await prepare(options), options);
+  if (options.mode !== 'http') await stage.platform.sockets.connected(2);
+  return stage;
+};
+
+/** One more bot in a workspace that has some. */
+export const startBotOn = async (platform: Platform, options: BotOptions): Promise<Stage> =>
+  startPrepared(await prepareOn(platform, options), options);
 
 /** Everything that was sent has arrived and is dealt with. */
 export const settled = async (

@@ -1,15 +1,14 @@
 /** Pictures in the workspace: uploaded by the real client to the stand-in and shown in the thread. */
 import { beforeAll, describe, expect, it } from 'vitest';
-import { slackConversation } from '../../../src/start/slackConversation.ts';
 import type { Conversation } from '../../../src/workspaces/slack/ports.ts';
 import { emptyPng } from '../../doubles/drawing.ts';
 import { everyScope } from '../../doubles/platform/start.ts';
-import { demoConverse } from '../demoDesk.ts';
+import { demoConversation } from '../demoDesk.ts';
 import { settled, startBot } from './bot.ts';
 
 let conversation: Conversation;
 beforeAll(async () => {
-  conversation = slackConversation(await demoConverse(), () => ['KELP', 'TARN']);
+  conversation = await demoConversation();
 });
 
 const pauseMs = 1_000;

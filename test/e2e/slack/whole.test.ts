@@ -1,13 +1,12 @@
 /** The whole bot in the workspace: real prices, real answers, real Bolt and its real client, against the stand-in. */
 import { beforeAll, describe, expect, it } from 'vitest';
-import { slackConversation } from '../../../src/start/slackConversation.ts';
 import type { Conversation } from '../../../src/workspaces/slack/ports.ts';
-import { demoConverse } from '../demoDesk.ts';
+import { demoConversation } from '../demoDesk.ts';
 import { startBot } from './bot.ts';
 
 let conversation: Conversation;
 beforeAll(async () => {
-  conversation = slackConversation(await demoConverse(), () => ['KELP', 'TARN']);
+  conversation = await demoConversation();
 });
 
 const blockTypes = (blocks: unknown): readonly unknown[] =>

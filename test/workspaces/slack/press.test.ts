@@ -3,6 +3,7 @@ import { answerCommand } from '../../../src/workspaces/slack/command.ts';
 import type { Press, SpokenReply } from '../../../src/workspaces/slack/ports.ts';
 import type { Voice } from '../../../src/workspaces/slack/post.ts';
 import { answerPress } from '../../../src/workspaces/slack/press.ts';
+import { recentPresses } from '../../../src/workspaces/slack/recent.ts';
 import { seenInMemory } from '../../../src/workspaces/slack/seen.ts';
 import { notedDeliveries } from '../../doubles/deliveries.ts';
 import { manualTime } from '../../doubles/time.ts';
@@ -22,8 +23,10 @@ const setUp = () => {
     updateNow: () => Promise.resolve(true),
     remove: () => Promise.resolve(),
   };
+  const time = manualTime();
   return {
     ...spoken,
+    recent: recentPresses(time),
     presses,
     heard,
     posts: () => [...posts, ...sayings.map(({ channel, threadTs }) => `${channel} ${threadTs}`)],
@@ -31,7 +34,7 @@ const setUp = () => {
     logged: log,
     voice,
     showPicture: async () => said,
-    time: manualTime(),
+    time,
     seen: seenInMemory(),
     respond: (url: string) => {
       posts.push(url);
@@ -60,12 +63,31 @@ const press = (action: object, more: object = {}) => ({
   ...more,
 });
 
-it('the same press delivered twice is answered once, a second press again', async () => {
+it('the same press delivered twice is answered once, a second press after a while again', async () => {
   const desk = setUp();
   await answerPress(desk, press({ value: 'v' }));
   await answerPress(desk, press({ value: 'v' }));
+  desk.time.advance(60_000);
   await answerPress(desk, press({ value: 'v', action_ts: '7.0' }));
   expect(desk.posts()).toEqual(['C1 5.000001', 'C1 5.000001']);
+});
+
+it('however often and by whomever a button is pressed within a minute, it is answered once', async () => {
+  const desk = setUp();
+  await answerPress(desk, press({ value: 'v' }));
+  desk.time.advance(59_999);
+  await answerPress(desk, press({ value: 'v', action_ts: '7.0' }, { user: { id: 'U2' } }));
+  await answerPress(desk, press({ value: 'v', action_ts: '8.0', action_id: 'more' }));
+  expect(desk.presses.map(({ actionId }) => actionId)).toEqual(['working', 'more']);
+});
+
+it('a press of which others saw nothing does not stand in the way of theirs', async () => {
+  const desk = setUp();
+  const refusal: SpokenReply = { ...said, kind: 'refusal', private: true };
+  const barred = { ...desk, conversation: { ...desk.conversation, press: async () => [refusal] } };
+  await answerPress(barred, press({ value: 'v' }));
+  await answerPress(desk, press({ value: 'v', action_ts: '7.0' }, { user: { id: 'U2' } }));
+  expect(desk.presses).toHaveLength(1);
 });
 
 it('a chosen line of a menu counts as its value', async () => {
