@@ -6,6 +6,8 @@ import type { KnownPlaces } from './places.ts';
 import { postingTo } from './postingTo.ts';
 import { personalRate } from './rate.ts';
 
+const counted = (count: number, what: string): string => `${count} ${what}${count === 1 ? '' : 's'}`;
+
 /** What a desk’s settings and the state of the workspace allow. */
 export const createPermissions = (
   settings: PermissionSettings,
@@ -53,9 +55,9 @@ export const createPermissions = (
       if (!here.ok || asker.place === 'terminal') return here;
       const seconds = secondsToWait(`${asker.from.team} ${asker.from.person}`);
       if (seconds === 0) return allowed;
-      const unit = seconds === 1 ? 'second' : 'seconds';
+      const most = counted(settings.questionsPerMinute ?? 0, 'question');
       return privately(
-        `That is more than ${settings.questionsPerMinute} questions within a minute, the most that one person is answered. Ask again in ${seconds} ${unit}.`,
+        `That is more than ${most} within a minute, the most that one person is answered. Ask again in ${counted(seconds, 'second')}.`,
       );
     },
     mayAsk,

@@ -1,4 +1,5 @@
-import { movedOnReply, restatedReply } from '../../present/compose/card.ts';
+import { cardsReply, movedOnReply, restatedReply } from '../../present/compose/card.ts';
+import { refusalReply } from '../../present/compose/refusal.ts';
 import type { Reply } from '../../present/reply.ts';
 import { isoFromDay } from '../../terms/day.ts';
 import type { PinnedCard } from '../../terms/pins.ts';
@@ -6,6 +7,7 @@ import type { PriceSeries, PriceSnapshot } from '../../terms/prices.ts';
 import type { Desk } from '../desk.ts';
 import { changesThePast, dataChange } from '../records/dataChanges.ts';
 import { putUp } from './pinning.ts';
+import { terminalTeam } from './place.ts';
 import type { Wall } from './ports.ts';
 
 const mostLookedAt = 10_000;
@@ -90,4 +92,11 @@ export const takenOff = async (
   const found = await pins.store.findCard(team, channel, cardTs);
   if (!found.ok) records.tell(`A pin was taken off and not noted: ${found.problem.message}`);
   else if (found.value !== null) await pins.store.put({ ...found.value, state: 'removed' });
+};
+
+/** The cards at the terminal: where nothing can be pinned to a channel, the list is the wall. */
+export const cardsAtTerminal = async ({ pins }: Pick<Desk, 'pins'>): Promise<Reply> => {
+  const cards = await pins.store.list(['pinned'], mostLookedAt);
+  if (!cards.ok) return refusalReply(cards.problem);
+  return cardsReply(cards.value.filter(({ team }) => team === terminalTeam).reverse());
 };

@@ -3,6 +3,7 @@ import { cardReply } from '../../present/compose/card.ts';
 import { type Reply, reply } from '../../present/reply.ts';
 import type { PinnedCard, PinPlace } from '../../terms/pins.ts';
 import { problem } from '../../terms/problem.ts';
+import type { RecordLine } from '../../terms/records.ts';
 import { type Result, refuse, succeed } from '../../terms/result.ts';
 import { refused, type Spoken, said } from '../conversation.ts';
 import type { Desk } from '../desk.ts';
@@ -14,6 +15,7 @@ import type { Wall } from './ports.ts';
 
 /** Of so many newest answers of a thread one that the asker may read is taken. */
 const mostLookedAt = 5;
+const mostAtTerminal = 50;
 
 const privately = (sentence: string): Spoken => said(reply('refusal', sentence));
 
@@ -24,10 +26,22 @@ const nothingHere = refuse(
   ),
 );
 
+/** What was asked last at the terminal, in the channel and thread in which one stands. */
+const lastAtTerminal = async (desk: Desk, { from }: Asker): Promise<Result<readonly RecordLine[]>> => {
+  const lines = await desk.records.store.list({ ticker: null, sinceMs: null }, mostAtTerminal);
+  if (!lines.ok) return lines;
+  const here = (line: RecordLine): boolean =>
+    line.from.team === null && line.from.channel === from.channel && line.from.thread === from.thread;
+  return succeed(lines.value.filter(here));
+};
+
 /** The last result of the discussion. */
 const lastResult = async (desk: Desk, asker: Asker, place: PinPlace): Promise<Result<string>> => {
   const thread = { team: asker.from.team, channel: place.channel, thread: place.thread };
-  const found = await desk.records.store.conversations.lastIn(thread, mostLookedAt);
+  const found =
+    asker.from.team === null
+      ? await lastAtTerminal(desk, asker)
+      : await desk.records.store.conversations.lastIn(thread, mostLookedAt);
   if (!found.ok) return found;
   const last = found.value.find((each) => desk.permissions.mayRead(asker, each));
   return last === undefined ? nothingHere : succeed(last.id);

@@ -17,6 +17,7 @@ export type Line =
   | { readonly kind: 'leave' }
   | { readonly kind: 'channel'; readonly name: string }
   | { readonly kind: 'thread'; readonly number: number | null }
+  | { readonly kind: 'pinned' }
   | { readonly kind: 'press'; readonly number: number }
   | { readonly kind: 'message'; readonly text: string };
 
@@ -30,6 +31,7 @@ export const readLine = (line: string): Line => {
   if (text === '') return { kind: 'nothing' };
   if (/^(leave|quit|exit)$/i.test(text)) return { kind: 'leave' };
   if (/^top$/i.test(text)) return { kind: 'thread', number: null };
+  if (/^pinned$/i.test(text)) return { kind: 'pinned' };
   const channel = channelPattern.exec(text)?.[1];
   if (channel !== undefined) return { kind: 'channel', name: channel };
   const thread = threadPattern.exec(text)?.[1];

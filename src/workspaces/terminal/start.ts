@@ -1,5 +1,7 @@
+import type { Reply } from '../../present/reply.ts';
 import { toText } from '../../present/text.ts';
 import type { Result } from '../../terms/result.ts';
+import { said } from '../conversation.ts';
 import type { Converse, Spoken } from '../converse.ts';
 import type { Picture } from '../pictures.ts';
 import { emptyRoom, promptOf, type Room, readLine } from './room.ts';
@@ -20,7 +22,7 @@ const welcome = [
   'This is a workspace of your own in the terminal. Type a question, such as',
   '  interval KELP 60d',
   'or help. Other words here: #name goes to a channel, @leadsman to direct messages, thread 1 into a thread,',
-  'top out of it, press 1 presses a button, leave ends.',
+  'top out of it, press 1 presses a button, pinned shows what is pinned, leave ends.',
 ].join('\n');
 
 /** Asked one after the other where nobody types and nothing is piped in. */
@@ -91,7 +93,11 @@ const enterThread = (terminal: Terminal, room: Room, number: number | null): Roo
 };
 
 /** Runs the terminal workspace until the input closes or the person leaves. Resolves to the number of messages answered. */
-export const startTerminal = async (terminal: Terminal, converse: Converse): Promise<number> => {
+export const startTerminal = async (
+  terminal: Terminal,
+  converse: Converse,
+  pinned: () => Promise<Reply>,
+): Promise<number> => {
   let room = emptyRoom;
   let linesRead = 0;
   /** Where nobody types, what was read is shown, so that the whole can be read as a conversation. */
@@ -109,6 +115,7 @@ export const startTerminal = async (terminal: Terminal, converse: Converse): Pro
     if (line.kind === 'channel') room = { ...room, channel: line.name, thread: null };
     else if (line.kind === 'thread') room = enterThread(terminal, room, line.number);
     else if (line.kind === 'press') room = await press(terminal, converse, room, line.number);
+    else if (line.kind === 'pinned') room = await show(terminal, room, [said(await pinned())]);
     else if (line.kind === 'message') room = await ask(terminal, converse, room, line.text);
   }
   if (linesRead === 0 && !terminal.interactive)

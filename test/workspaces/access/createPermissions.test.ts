@@ -115,7 +115,7 @@ describe('the rate of one person', () => {
     expect(admit(inChannel('U1ADA'))).toMatchObject({
       ok: false,
       silent: false,
-      message: expect.stringContaining('more than 1 questions within a minute'),
+      message: expect.stringContaining('more than 1 question within a minute'),
     });
   });
 

@@ -6,7 +6,7 @@ import type { PriceSeries, PriceSnapshot } from '../../../src/terms/prices.ts';
 import { succeed } from '../../../src/terms/result.ts';
 import type { Asking } from '../../../src/workspaces/conversation.ts';
 import { createConverse } from '../../../src/workspaces/converse.ts';
-import { finishCards, takenOff, tellOfChanges } from '../../../src/workspaces/pins/notes.ts';
+import { cardsAtTerminal, finishCards, takenOff, tellOfChanges } from '../../../src/workspaces/pins/notes.ts';
 import type { PinOutcome, Posted, Wall } from '../../../src/workspaces/pins/ports.ts';
 import { seriesOf, wobbling } from '../../answers/madeSeries.ts';
 import { recordsInMemory } from '../../doubles/records.ts';
@@ -257,13 +257,14 @@ describe('the thread of a card', () => {
 
 describe('in a terminal', () => {
   test('the card is the reply, and it can be taken off again', async () => {
-    const { ask, idOf, said, records } = await setUp();
+    const { ask, idOf, said, records, desk } = await setUp();
     const nowhere = { ...inThread(null), team: null, channel: '#desk', message: null };
     const id = await idOf('interval KELP 60d', nowhere);
-    const [card] = await ask(`pin ${id}`, nowhere, 'direct');
+    const [card] = await ask('pin', nowhere);
     expect(card?.reply).toMatchObject({ kind: 'record', caution: fullCaution });
-    expect((await said('pin', nowhere, 'direct'))[0]).toContain('pinned here already');
+    expect((await said('pin', nowhere))[0]).toContain('pinned here already');
+    expect((await cardsAtTerminal(desk)).passages).toMatchObject([{ lines: [expect.stringContaining(id)] }]);
     expect(accepted(await records.store.pins.standingIn({ team: '', channel: '#desk' }))).toHaveLength(1);
-    expect(await said('unpin', nowhere, 'direct')).toEqual([`record: ${id} is no longer pinned here.`]);
+    expect(await said('unpin', nowhere)).toEqual([`record: ${id} is no longer pinned here.`]);
   });
 });

@@ -42,6 +42,7 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
   const count = await startTerminal(
     { nextLine, write, width: () => 80, interactive, savePicture: async () => succeed('pictures/one.png') },
     converse,
+    async () => reply('record', 'Pinned here: 2.'),
   );
   return { asked, screen, count, prompts };
 };
@@ -52,6 +53,12 @@ describe('the terminal workspace', () => {
     expect(asked.map(({ text }) => text)).toEqual(['interval KELP', 'feed']);
     expect(screen).toContain('#desk> interval KELP\n  You asked interval KELP\n');
     expect(count).toBe(2);
+  });
+
+  test('shows what is pinned, which is no message to the bot', async () => {
+    const { asked, screen } = await sitDown(['pinned']);
+    expect(asked).toEqual([]);
+    expect(screen).toContain('  Pinned here: 2.');
   });
 
   test('a picture is written to a file, whose path stands below, with its form in text', async () => {
