@@ -33,8 +33,11 @@ const room = { sentence: limits.section.text, warning: 1200, quietLine: 1500, ca
 /** The parts around the passages take at most ten of a message's blocks. */
 const mostPassages = limits.message.blocks - 10;
 
-/** Kept free for the lines that say how much is left out. */
+/** Kept free for the lines that say how much is left out, and for one that a workspace puts above the message. */
 const noteRoom = 400;
+
+/** The same for the text of notifications. */
+const textRoom = limits.message.textAdvised - noteRoom;
 
 const emptyCell = '–';
 const zeroWidthJoiner = '\u200d';
@@ -144,10 +147,10 @@ const fallbackText = (reply: Reply): string => {
   const { head, body, foot } = partsInWords(reply);
   const escaped = (lines: readonly string[]) => lines.map(escapeFallback);
   const ends = [...escaped(head), ...escaped(foot)].join('\n').length;
-  const middle = cutLines(escaped(body), limits.message.textAdvised - ends - 2, (count) =>
+  const middle = cutLines(escaped(body), textRoom - ends - 2, (count) =>
     escapeFallback(restInWords(count, 'line', reply)),
   );
-  return clipped([...escaped(head), ...middle, ...escaped(foot)].join('\n'), limits.message.textAdvised);
+  return clipped([...escaped(head), ...middle, ...escaped(foot)].join('\n'), textRoom);
 };
 
 const footBlocks = (reply: Reply): readonly Block[] => {

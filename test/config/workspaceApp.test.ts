@@ -7,12 +7,26 @@ import { z } from 'zod';
 import { commandName } from '../../src/workspaces/slack/command.ts';
 import { requestPath } from '../../src/workspaces/slack/receive.ts';
 import { featureEvents, featureScopes } from '../../src/workspaces/slack/scopes.ts';
+import { askShortcutId } from '../../src/workspaces/slack/surfaces/listenSurfaces.ts';
+import { pinShortcutId } from '../../src/workspaces/slack/surfaces/pinShortcut.ts';
 
 const text = readFileSync(new URL('../../config/workspace-app.yaml', import.meta.url), 'utf8');
 
 const manifest = z.object({
   features: z.object({
-    app_home: z.object({ messages_tab_enabled: z.boolean(), messages_tab_read_only_enabled: z.boolean() }),
+    app_home: z.object({
+      home_tab_enabled: z.boolean(),
+      messages_tab_enabled: z.boolean(),
+      messages_tab_read_only_enabled: z.boolean(),
+    }),
+    shortcuts: z.array(
+      z.object({
+        name: z.string().max(24),
+        type: z.enum(['global', 'message']),
+        callback_id: z.string().max(255),
+        description: z.string().max(150),
+      }),
+    ),
     slash_commands: z.array(z.object({ command: z.string(), url: z.string().optional() })),
   }),
   oauth_config: z.object({ scopes: z.strictObject({ bot: z.array(z.string()) }) }),
@@ -43,8 +57,16 @@ describe('the app manifest', () => {
     expect([...app.settings.event_subscriptions.bot_events].sort()).toEqual(distinct(featureEvents));
   });
 
-  it('lets people write to the bot, press its buttons and type its command', () => {
+  it('has the form and the shortcut that pins, under the names by which they are heard', () => {
+    expect(app.features.shortcuts.map(({ type, callback_id }) => [type, callback_id])).toEqual([
+      ['global', askShortcutId],
+      ['message', pinShortcutId],
+    ]);
+  });
+
+  it('lets people write to the bot, press its buttons, open its home and type its command', () => {
     expect(app.features.app_home).toEqual({
+      home_tab_enabled: true,
       messages_tab_enabled: true,
       messages_tab_read_only_enabled: false,
     });
