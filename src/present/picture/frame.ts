@@ -34,6 +34,9 @@ export const sizeOfChart = (svg: string): ChartSize => {
   return { width: Number(size[1]), height: Number(size[2]) };
 };
 
+/** The drawing without its own frame: one frame within another makes the rasteriser draw everything on a layer of its own. */
+const contentOf = (svg: string): string => svg.replace(/^<svg[^>]*>/, '').replace(/<\/svg>\s*$/, '');
+
 const gap = 10;
 
 /** The whole picture: title, sentences, chart and corners on an opaque ground with a border. */
@@ -56,7 +59,7 @@ export const framed = (sheet: Sheet, chart: string): string => {
     `<rect x="0.5" y="0.5" width="${wide - 1}" height="${total - 1}" rx="6" fill="${colours.ground}" stroke="${colours.border}"/>` +
     title.svg +
     lines.svg +
-    `<g transform="translate(${sheetMargin},${chartTop})">${chart}</g>` +
+    `<g transform="translate(${sheetMargin},${chartTop})">${contentOf(chart)}</g>` +
     textAt(left, sheetMargin, footLine, foot) +
     textAt(right, wide - sheetMargin, footLine, { ...foot, anchor: 'end' }) +
     '</svg>'

@@ -16,8 +16,13 @@ type Row = { readonly figures: DigestFigures; readonly returns: readonly number[
 const withFigures = (rows: DigestPicture['rows']): readonly Row[] =>
   rows.flatMap(({ line, returns }) => (line.ok ? [{ figures: line, returns }] : []));
 
-const varInWords = ({ var: estimate, varLower: lower, varUpper: upper }: DigestFigures): string =>
-  `${percentBounds({ estimate, lower, upper }, undefined, { plus: false }).estimate}%`;
+/** `2.72%, 2.40 to 3.19`: an end that there is not is said. */
+const varInWords = ({ var: estimate, varLower, varUpper }: DigestFigures): string => {
+  const bounds = { estimate, lower: varLower, upper: varUpper };
+  const { estimate: written, lower, upper } = percentBounds(bounds, undefined, { plus: false });
+  if (lower === null) return upper === null ? `${written}%` : `${written}%, up to ${upper}`;
+  return `${written}%, ${upper === null ? `${lower} or more` : `${lower} to ${upper}`}`;
+};
 
 const rowInWords = (figures: DigestFigures): string =>
   `${figures.ticker} VaR ${varInWords(figures)}, last return ${percent(figures.lastReturn, 2, { plus: true })}` +

@@ -23,16 +23,29 @@ export const digestStrip = ({ figures, returns, words, domain, days, frame }: Di
     axis: null,
   };
   const y = { ...within(domain), axis: null };
+  /** What goes beyond the strip ends at its edge. */
+  const inside = (each: number): number => Math.min(domain[1], Math.max(domain[0], each));
   const { var: value, varLower, varUpper, ticker } = figures;
-  const sticks = returns.map((each, place) => ({ at: place - returns.length + 1, from: 0, to: each }));
+  const sticks = returns.map((each, place) => ({
+    at: place - returns.length + 1,
+    from: 0,
+    to: inside(each),
+  }));
   return {
     width: frame.plot,
     height: digestRowHeight,
     layer: [
       {
-        data: { values: [{ lower: 0 - (varUpper ?? value), upper: 0 - (varLower ?? value) }] },
-        mark: { type: 'rect', color: colours.sky, opacity: 0.35, clip: true },
-        encoding: { y: { field: 'lower', ...y }, y2: { field: 'upper' } },
+        data: {
+          values: [{ lower: inside(0 - (varUpper ?? value)), upper: inside(0 - (varLower ?? value)) }],
+        },
+        mark: { type: 'rect', color: colours.sky, opacity: 0.6 },
+        encoding: {
+          x: { datum: -days, ...x },
+          x2: { datum: 1 },
+          y: { field: 'lower', ...y },
+          y2: { field: 'upper' },
+        },
       },
       {
         data: { values: [{ level: 0 }] },
@@ -46,17 +59,16 @@ export const digestStrip = ({ figures, returns, words, domain, days, frame }: Di
       },
       {
         data: { values: sticks },
-        mark: { type: 'rule', color: colours.border, strokeWidth: 2, clip: true },
+        mark: { type: 'rule', color: colours.border, strokeWidth: 2 },
         encoding: { x: { field: 'at', ...x }, y: { field: 'from', ...y }, y2: { field: 'to' } },
       },
       {
-        data: { values: [{ at: 0, last: figures.lastReturn }] },
+        data: { values: [{ at: 0, last: inside(figures.lastReturn) }] },
         mark: {
           type: 'point',
           filled: true,
           opacity: 1,
           size: 70,
-          clip: true,
           shape: figures.exceeded === true ? 'triangle-down' : 'circle',
           color: figures.exceeded === true ? colours.vermillion : colours.ink,
         },

@@ -92,12 +92,12 @@ export const pricePanel = ({ runs, gaps }: TickerPicture, head: string): Panel =
       },
       {
         data: { values: points },
-        mark: { type: 'rule', color: colours.blue, strokeWidth: 1, clip: true },
+        mark: { type: 'rule', color: colours.blue, strokeWidth: 1 },
         encoding: { x: { field: 'at', ...x }, y: { field: 'low', ...y }, y2: { field: 'high' } },
       },
       {
         data: { values: points },
-        mark: { type: 'line', color: colours.blue, strokeWidth: 1.5, clip: true },
+        mark: { type: 'line', color: colours.blue, strokeWidth: 1.5 },
         encoding: {
           x: { field: 'at', ...x },
           y: { field: 'close', ...y },

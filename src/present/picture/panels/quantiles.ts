@@ -36,7 +36,11 @@ const single = (
         encoding: { x: { field: 'end', ...scale }, y: { field: 'end', ...scale } },
       },
       {
-        data: { values: points.map((each) => ({ ...each })) },
+        data: {
+          values: points
+            .filter(({ expected }) => expected >= domain[0] && expected <= domain[1])
+            .map((each) => ({ ...each })),
+        },
         mark: {
           type: 'point' as const,
           shape,
@@ -45,7 +49,6 @@ const single = (
           opacity: 1,
           size: 28,
           strokeWidth: 1.5,
-          clip: true,
         },
         encoding: {
           x: { field: 'expected', ...scale, axis: { ...axis, title: axisTitle } },

@@ -2,7 +2,7 @@ import type { ReturnPicture } from '../../../answers/pictures/pictureData.ts';
 import { colours } from '../look.ts';
 import type { Panel } from '../sheet.ts';
 import { type Domain, type PlotFrame, sideAxis, signed, within } from './axes.ts';
-import { curveLegend, curveRows } from './curves.ts';
+import { curveLegend, curveRows, untilTheyLeave } from './curves.ts';
 import type { Landmark } from './strips.ts';
 
 const histogramHeight = 120;
@@ -98,10 +98,13 @@ export type LossPanel = {
   readonly axisTitle: string | null;
 };
 
-/** The share axis begins at half the share of the largest loss, and shows whole powers of ten. */
-const shareDomain = (shares: readonly number[]): Domain => [
-  Math.min(...shares) / 2,
-  Math.max(...shares) * 1.2,
+/** Where nothing was lost, what the fitted distributions say of losses is shown from here on. */
+const leastShareWithoutLosses = 0.001;
+
+/** The share axis begins at half the share of the largest loss, and ends above the curves. */
+const shareDomain = (shares: readonly number[], curvesBegin: number): Domain => [
+  Math.min(...(shares.length === 0 ? [leastShareWithoutLosses] : shares)) / 2,
+  Math.max(...shares, curvesBegin, 2 * leastShareWithoutLosses) * 1.1,
 ];
 
 /** The labels of the share axis, for the room that they take. */
@@ -110,10 +113,19 @@ export const shareLabels = ['0.01%', '10%'] as const;
 /** The loss side magnified: the share of days that lost at least as much, on a scale of powers of ten. */
 export const lossPanel = ({ head, returns, domain, landmarks, frame, axisTitle }: LossPanel): Panel => {
   const { losses, curve } = returns;
+  const rows = curveRows(
+    curve,
+    ({ loss }) => loss,
+    (each) => each,
+  );
+  const shares = shareDomain(
+    losses.map(({ share }) => share),
+    Math.max(curve[0]?.normal ?? 0, curve[0]?.student ?? 0),
+  );
   const x = within(domain);
   const y = {
     type: 'quantitative' as const,
-    scale: { type: 'log' as const, domain: [...shareDomain(losses.map(({ share }) => share))], nice: false },
+    scale: { type: 'log' as const, domain: [...shares], nice: false },
     axis: { ...sideAxis(frame), values: [0.1, 0.01, 0.001, 0.0001], labelExpr: "format(datum.value, '~%')" },
     title: null,
   };
@@ -124,7 +136,7 @@ export const lossPanel = ({ head, returns, domain, landmarks, frame, axisTitle }
     layer: [
       {
         data: { values: losses.map((each) => ({ ...each })) },
-        mark: { type: 'point', filled: true, opacity: 1, size: 26, color: colours.quiet, clip: true },
+        mark: { type: 'point', filled: true, opacity: 1, size: 26, color: colours.quiet },
         encoding: {
           x: { field: 'loss', ...x, axis: { labelExpr: signed('~%'), title: axisTitle, tickCount: 6 } },
           y: { field: 'share', ...y },
@@ -132,13 +144,9 @@ export const lossPanel = ({ head, returns, domain, landmarks, frame, axisTitle }
       },
       {
         data: {
-          values: curveRows(
-            curve,
-            ({ loss }) => loss,
-            (each) => each,
-          ),
+          values: [...untilTheyLeave(rows, domain[1], shares[0])],
         },
-        mark: { type: 'line', strokeWidth: 2, clip: true },
+        mark: { type: 'line', strokeWidth: 2 },
         encoding: { x: { field: 'x', ...x }, y: { field: 'y', ...y }, ...curveLegend(null) },
       },
       ...landmarkLayers(landmarks, x),
