@@ -1,5 +1,5 @@
 import type { InstantMs } from '../terms/clock.ts';
-import type { FeedReport } from '../terms/feedReport.ts';
+import type { FeedReport, TickerReport } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
 import { problem } from '../terms/problem.ts';
 import { type Result, refuse, succeed } from '../terms/result.ts';
@@ -12,7 +12,7 @@ import { fingerprintOf } from './internal/fingerprint.ts';
 import { quarantinedReports } from './internal/quarantine.ts';
 import { type Database, passingDatabase } from './internal/read/database.ts';
 import { type ReadFiles, readPriceFiles } from './internal/read/readPriceFiles.ts';
-import { type SortedColumns, sortRows } from './internal/sortRows.ts';
+import { sortRows } from './internal/sortRows.ts';
 import { type FileState, listPriceFiles, signatureOf } from './priceFiles.ts';
 import { type FeedSettings, meaningOf } from './settings.ts';
 import { type SnapshotColumns, snapshotFromColumns } from './snapshot.ts';
@@ -40,29 +40,29 @@ const sortAndSift = async (read: ReadFiles, settings: FeedSettings, nowMs: Insta
   const { collected } = read;
   const { findings } = collected;
   const extras = extrasByTicker(collected);
-  const sorted = await sortRows(collected.names, collected, (ticker) =>
+  const sorted = await sortRows(collected.names, collected.rows(), (ticker) =>
     findings.record('daysOutOfOrder', { ticker }),
   );
   for (const [place, ticker] of sorted.tickers.entries()) {
-    if (sorted.starts[place] === sorted.starts[place + 1]) findings.record('noPrice', { ticker });
+    if (sorted.starts[place] === sorted.ends[place]) findings.record('noPrice', { ticker });
     checkDays(sorted, place, nowMs, findings);
     const ownExtras = extras.get(ticker);
     if (ownExtras !== undefined) checkCurrency(ownExtras, settings, findings);
     if (place % 64 === 63) await breathe();
   }
   const heldBack = quarantinedReports(sorted, settings, findings);
-  return { extras, findings, heldBack, columns: compact(sorted, findings.quarantinedTickers()) };
+  const columns = compact(sorted, findings.quarantinedTickers(), findings.tickersOf('sameDayEqual'));
+  return { extras, findings, heldBack, columns };
 };
 
-const extentOf = (columns: SortedColumns): { firstDay: number; lastDay: number } => {
-  let firstDay = Number.POSITIVE_INFINITY;
-  let lastDay = Number.NEGATIVE_INFINITY;
-  for (let place = 0; place < columns.tickers.length; place += 1) {
-    firstDay = Math.min(firstDay, columns.days[columns.starts[place] as number] as number);
-    lastDay = Math.max(lastDay, columns.days[(columns.starts[place + 1] as number) - 1] as number);
-  }
-  return { firstDay, lastDay };
-};
+const extentOf = (served: readonly TickerReport[]) => ({
+  priceCount: served.reduce((sum, { priceCount }) => sum + priceCount, 0),
+  firstDay: served.reduce(
+    (least, { firstDay }) => Math.min(least, firstDay ?? least),
+    Number.POSITIVE_INFINITY,
+  ),
+  lastDay: served.reduce((most, { lastDay }) => Math.max(most, lastDay ?? most), Number.NEGATIVE_INFINITY),
+});
 
 const assemble = async (
   read: ReadFiles,
@@ -87,7 +87,7 @@ const assemble = async (
   );
   const served = await checkTickers({ columns, meanings, extras, holidays, findings });
   const fingerprint = await fingerprintOf(columns);
-  const extent = extentOf(columns);
+  const extent = extentOf(served);
   const snapshot = snapshotFromColumns({
     ...columns,
     fingerprint,
@@ -99,7 +99,6 @@ const assemble = async (
   const report: FeedReport = {
     files: read.files,
     fingerprint,
-    priceCount: columns.days.length,
     ...extent,
     findings: findings.list(),
     tickers: [...served, ...heldBack].sort((first, second) => (first.ticker < second.ticker ? -1 : 1)),

@@ -1,17 +1,13 @@
 import type { Day } from '../terms/day.ts';
 import type { PriceFlag, PriceMeaning, PriceSeries, PriceSnapshot } from '../terms/prices.ts';
+import { rowsOf, type SortedColumns } from './internal/sortedColumns.ts';
 
 /**
  * Everything a snapshot is made of, as plain data: it can be posted to a worker thread, which then sees the same
- * memory without a copy. Row ranges: ticker i owns rows `starts[i]` to `starts[i + 1]`, its days ascend strictly.
+ * memory without a copy. Every ticker's days ascend strictly.
  */
-export type SnapshotColumns = {
+export type SnapshotColumns = SortedColumns & {
   readonly fingerprint: string;
-  /** In ascending order of their UTF-16 code units. */
-  readonly tickers: readonly string[];
-  readonly starts: Int32Array;
-  readonly days: Int32Array;
-  readonly closes: Float64Array;
   readonly meanings: readonly PriceMeaning[];
   readonly flags: readonly (readonly PriceFlag[])[];
   readonly quarantined: ReadonlyMap<string, string>;
@@ -33,20 +29,12 @@ const placeOf = (tickers: readonly string[], ticker: string): number => {
 export const snapshotFromColumns = (
   columns: SnapshotColumns,
 ): PriceSnapshot & { readonly columns: SnapshotColumns } => {
-  const { tickers, starts, days, closes, meanings, flags } = columns;
+  const { tickers, meanings, flags } = columns;
   const series = (ticker: string): PriceSeries | null => {
     const place = placeOf(tickers, ticker);
     const meaning = meanings[place];
     if (meaning === undefined) return null;
-    const start = starts[place] as number;
-    const end = starts[place + 1] as number;
-    return {
-      ticker,
-      days: days.subarray(start, end),
-      closes: closes.subarray(start, end),
-      meaning,
-      flags: flags[place] ?? [],
-    };
+    return { ticker, ...rowsOf(columns, place), meaning, flags: flags[place] ?? [] };
   };
   return {
     fingerprint: columns.fingerprint,

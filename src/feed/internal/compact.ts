@@ -1,29 +1,31 @@
-import { type SortedColumns, sharedInts } from './sortRows.ts';
+import { type Rows, rowsOf, type SortedColumns, sharedInts } from './sortedColumns.ts';
 
-/**
- * The columns without the tickers that are left out and without repeated days, in the same memory: rows only move
- * towards the start. Nothing is moved where nothing is left out.
- */
-export const compact = (columns: SortedColumns, leftOut: ReadonlySet<string>): SortedColumns => {
-  const { days, closes } = columns;
-  const tickers = columns.tickers.filter((ticker) => !leftOut.has(ticker));
-  const starts = sharedInts(tickers.length + 1);
+/** Moves a ticker's rows together so that no day stands twice; how many rows remain. */
+const dropRepeatedDays = ({ days, closes }: Rows): number => {
   let to = 0;
-  let kept = 0;
-  columns.tickers.forEach((ticker, place) => {
-    if (leftOut.has(ticker)) return;
+  for (let from = 0; from < days.length; from += 1) {
+    if (to > 0 && days[from] === days[to - 1]) continue;
+    days[to] = days[from] as number;
+    closes[to] = closes[from] as number;
+    to += 1;
+  }
+  return to;
+};
+
+/** The columns without the tickers that are left out and without repeated days, in the same memory. */
+export const compact = (
+  columns: SortedColumns,
+  leftOut: ReadonlySet<string>,
+  withRepeatedDays: ReadonlySet<string>,
+): SortedColumns => {
+  const kept = [...columns.tickers.entries()].filter(([, ticker]) => !leftOut.has(ticker));
+  const starts = sharedInts(kept.length);
+  const ends = sharedInts(kept.length);
+  for (const [at, [place, ticker]] of kept.entries()) {
     const start = columns.starts[place] as number;
-    const end = columns.starts[place + 1] as number;
-    for (let from = start; from < end; from += 1) {
-      if (from > start && days[from] === days[from - 1]) continue;
-      if (to !== from) {
-        days[to] = days[from] as number;
-        closes[to] = closes[from] as number;
-      }
-      to += 1;
-    }
-    kept += 1;
-    starts[kept] = to;
-  });
-  return { tickers, starts, days: days.subarray(0, to), closes: closes.subarray(0, to) };
+    const rows = rowsOf(columns, place);
+    starts[at] = start;
+    ends[at] = start + (withRepeatedDays.has(ticker) ? dropRepeatedDays(rows) : rows.days.length);
+  }
+  return { ...columns, tickers: kept.map(([, ticker]) => ticker), starts, ends };
 };

@@ -21,6 +21,8 @@ export type Findings = {
   readonly first: (code: FeedCheckCode, ticker?: string) => FindingExample | null;
   /** The code for which a ticker is not served, the first by the order of the list; null where it is served. */
   readonly quarantineOf: (ticker: string) => FeedCheckCode | null;
+  /** The tickers at which a code was seen. */
+  readonly tickersOf: (code: FeedCheckCode) => ReadonlySet<string>;
   readonly quarantinedTickers: () => ReadonlySet<string>;
   readonly list: () => readonly FeedFinding[];
 };
@@ -53,13 +55,14 @@ export const makeFindings = (): Findings => {
     const seen = seenOf.get(code);
     return (ticker === undefined ? seen?.examples[0] : seen?.firstOfTicker.get(ticker)) ?? null;
   };
+  const tickersOf: Findings['tickersOf'] = (code) => new Set(seenOf.get(code)?.firstOfTicker.keys());
   return {
     record,
     first,
     count: (code) => seenOf.get(code)?.count ?? 0,
     quarantineOf: (ticker) => quarantining.find((code) => first(code, ticker) !== null) ?? null,
-    quarantinedTickers: () =>
-      new Set(quarantining.flatMap((code) => [...(seenOf.get(code)?.firstOfTicker.keys() ?? [])])),
+    tickersOf,
+    quarantinedTickers: () => new Set(quarantining.flatMap((code) => [...tickersOf(code)])),
     list: () =>
       codes.flatMap((code) => {
         const seen = seenOf.get(code);

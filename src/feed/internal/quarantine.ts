@@ -3,7 +3,7 @@ import type { TickerReport } from '../../terms/feedReport.ts';
 import { feedChecks } from '../checks.ts';
 import { type FeedSettings, meaningOf } from '../settings.ts';
 import type { Findings } from './findings.ts';
-import type { SortedColumns } from './sortRows.ts';
+import { rowsOf, type SortedColumns } from './sortedColumns.ts';
 
 /** Why a ticker is not served, as one sentence with the place where it was first seen; null where it is served. */
 export const quarantineReason = (ticker: string, findings: Findings): string | null => {
@@ -28,16 +28,15 @@ export const quarantinedReports = (
   columns.tickers.flatMap((ticker, place) => {
     const quarantine = quarantineReason(ticker, findings);
     if (quarantine === null) return [];
-    const start = columns.starts[place] as number;
-    const end = columns.starts[place + 1] as number;
+    const { days } = rowsOf(columns, place);
     return [
       {
         ticker,
         state: 'quarantined' as const,
         quarantine,
-        priceCount: end - start,
-        firstDay: end > start ? (columns.days[start] ?? null) : null,
-        lastDay: end > start ? (columns.days[end - 1] ?? null) : null,
+        priceCount: days.length,
+        firstDay: days[0] ?? null,
+        lastDay: days.at(-1) ?? null,
         missingSessions: 0,
         longestGapDays: 0,
         flags: [],

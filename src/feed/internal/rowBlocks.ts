@@ -10,10 +10,10 @@ export type RowBlock = {
 
 const rowsPerBlock = 262_144;
 
-const makeBlock = (): RowBlock => ({
-  tickerNumbers: new Int32Array(rowsPerBlock),
-  days: new Int32Array(rowsPerBlock),
-  closes: new Float64Array(rowsPerBlock),
+export const makeBlock = (rows: number): RowBlock => ({
+  tickerNumbers: new Int32Array(rows),
+  days: new Int32Array(rows),
+  closes: new Float64Array(rows),
   count: 0,
 });
 
@@ -103,11 +103,7 @@ const addCounts = (block: RowBlock, counts: number[]): void => {
 };
 
 export type RowBlocks = {
-  readonly add: (tickerNumber: number, day: number, close: number) => void;
-  /** The same for many rows at once, of which every one is to be kept. */
   readonly addAll: (tickerNumbers: Int32Array, days: Int32Array, closes: Float64Array) => void;
-  /** The row that was added last. */
-  readonly last: () => { readonly tickerNumber: number; readonly day: number; readonly close: number } | null;
   /** How many rows each ticker has, by its number; absent for one without a row. */
   readonly counts: () => readonly number[];
   /** Every block in the order of the files, each given up as soon as it has been worked through. */
@@ -119,7 +115,7 @@ export type RowBlocks = {
  * once: the engine frees an ordinary one whenever it likes, and rows must not be held twice while they are sorted.
  */
 export const makeRowBlocks = (): RowBlocks => {
-  const current = makeBlock();
+  const current = makeBlock(rowsPerBlock);
   const putAway: PutAway[] = [];
   const countsPutAway: number[] = [];
 
@@ -128,14 +124,6 @@ export const makeRowBlocks = (): RowBlocks => {
     putAway.push(putAwayFrom(current));
     addCounts(current, countsPutAway);
     current.count = 0;
-  };
-  const add: RowBlocks['add'] = (tickerNumber, day, close) => {
-    makeRoom();
-    const at = current.count;
-    current.tickerNumbers[at] = tickerNumber;
-    current.days[at] = day;
-    current.closes[at] = close;
-    current.count = at + 1;
   };
   const addAll: RowBlocks['addAll'] = (tickerNumbers, days, closes) => {
     for (let start = 0; start < days.length; ) {
@@ -148,22 +136,13 @@ export const makeRowBlocks = (): RowBlocks => {
       start = end;
     }
   };
-  const last: RowBlocks['last'] = () => {
-    const at = current.count - 1;
-    if (at < 0) return null;
-    return {
-      tickerNumber: current.tickerNumbers[at] as number,
-      day: current.days[at] as number,
-      close: current.closes[at] as number,
-    };
-  };
   const counts: RowBlocks['counts'] = () => {
     const all = [...countsPutAway];
     addCounts(current, all);
     return all;
   };
   const takeAll: RowBlocks['takeAll'] = async (work) => {
-    const scratch = makeBlock();
+    const scratch = makeBlock(rowsPerBlock);
     for (const block of putAway.splice(0)) {
       takeOut(block, scratch);
       await work(scratch);
@@ -171,5 +150,5 @@ export const makeRowBlocks = (): RowBlocks => {
     await work(current);
     current.count = 0;
   };
-  return { add, addAll, last, counts, takeAll };
+  return { addAll, counts, takeAll };
 };

@@ -1,17 +1,8 @@
 import { breathe } from './breathe.ts';
+import type { GroupedRows, RowRange } from './groupedRows.ts';
 import { endOfRun, type RowBlock, type RowBlocks } from './rowBlocks.ts';
-
-/** Row ranges by ticker: ticker i owns rows `starts[i]` to `starts[i + 1]`. */
-export type SortedColumns = {
-  readonly tickers: readonly string[];
-  readonly starts: Int32Array;
-  readonly days: Int32Array;
-  readonly closes: Float64Array;
-};
-
-export const sharedInts = (length: number): Int32Array => new Int32Array(new SharedArrayBuffer(4 * length));
-export const sharedDoubles = (length: number): Float64Array =>
-  new Float64Array(new SharedArrayBuffer(8 * length));
+import type { StoredRows } from './rowStore.ts';
+import { rowsOf, type SortedColumns, sharedDoubles, sharedInts } from './sortedColumns.ts';
 
 /** Where a ticker's rows go on, in columns in which they began at `start`. */
 type SortedRange = {
@@ -35,12 +26,26 @@ const placesOf = (order: readonly number[]): Int32Array => {
   return places;
 };
 
-const rangeStarts = (order: readonly number[], counts: readonly number[]): Int32Array => {
-  const starts = sharedInts(order.length + 1);
-  order.forEach((number, place) => {
-    starts[place + 1] = (starts[place] as number) + (counts[number] ?? 0);
+type Ranges = Pick<SortedColumns, 'starts' | 'ends'>;
+
+/** The range that each ticker of the order has, by its number. */
+const rangesBy = (order: readonly number[], rangeOf: (number: number) => RowRange): Ranges => {
+  const ranges = order.map(rangeOf);
+  const starts = sharedInts(order.length);
+  const ends = sharedInts(order.length);
+  starts.set(ranges.map(({ start }) => start));
+  ends.set(ranges.map(({ end }) => end));
+  return { starts, ends };
+};
+
+/** Ranges one after the other. */
+const rangesInOrder = (order: readonly number[], counts: readonly number[]): Ranges => {
+  let row = 0;
+  return rangesBy(order, (number) => {
+    const start = row;
+    row += counts[number] ?? 0;
+    return { start, end: row };
   });
-  return starts;
 };
 
 /** Shorter runs are copied row by row, which is then faster. */
@@ -76,23 +81,21 @@ const sortRange = (days: Int32Array, closes: Float64Array): void => {
   days.set(sortedDays);
 };
 
-/**
- * Columns in shared memory, by ticker and then by day. `names` are the tickers by their number in the rows. `onUnordered` is told of tickers whose days did not ascend.
- */
-export const sortRows = async (
-  names: readonly string[],
-  rows: RowBlocks,
-  onUnordered: (ticker: string) => void,
-): Promise<SortedColumns> => {
-  const order = orderOf(names);
+type Unsorted = Omit<SortedColumns, 'tickers'>;
+
+/** Copies scattered rows to where they belong. The places of tickers whose days do not ascend are added to `unordered`. */
+const gather = async (
+  order: readonly number[],
+  blocks: RowBlocks,
+  unordered: Set<number>,
+): Promise<Unsorted> => {
   const places = placesOf(order);
-  const starts = rangeStarts(order, rows.counts());
-  const rowCount = starts[names.length] as number;
+  const { starts, ends } = rangesInOrder(order, blocks.counts());
+  const rowCount = ends.at(-1) ?? 0;
   const days = sharedInts(rowCount);
   const closes = sharedDoubles(rowCount);
   const next = Int32Array.from(starts);
-  const unordered = new Set<number>();
-  await rows.takeAll(async (block) => {
+  await blocks.takeAll(async (block) => {
     for (let from = 0; from < block.count; ) {
       const end = endOfRun(block, from);
       const place = places[block.tickerNumbers[from] as number] as number;
@@ -104,13 +107,55 @@ export const sortRows = async (
     }
     await breathe();
   });
+  return { starts, ends, days, closes };
+};
+
+const ascends = (days: Int32Array): boolean => {
+  for (let row = 1; row < days.length; row += 1) {
+    if ((days[row] as number) < (days[row - 1] as number)) return false;
+  }
+  return true;
+};
+
+const tickersPerBreath = 64;
+
+/** Leaves grouped rows where they are. */
+const leave = async (
+  order: readonly number[],
+  { ranges, columns }: GroupedRows,
+  unordered: Set<number>,
+): Promise<Unsorted> => {
+  const left = { ...rangesBy(order, (number) => ranges[number] ?? noRows), ...columns() };
+  for (const place of order.keys()) {
+    if (!ascends(rowsOf(left, place).days)) unordered.add(place);
+    if (place % tickersPerBreath === 0) await breathe();
+  }
+  return left;
+};
+
+const noRows: RowRange = { start: 0, end: 0 };
+
+/**
+ * Columns in shared memory, every ticker's rows by day. `names` are the tickers by their number in the rows.
+ * `onUnordered` is told of tickers whose days did not ascend.
+ */
+export const sortRows = async (
+  names: readonly string[],
+  stored: StoredRows,
+  onUnordered: (ticker: string) => void,
+): Promise<SortedColumns> => {
+  const order = orderOf(names);
+  const unordered = new Set<number>();
+  const columns =
+    stored.kind === 'grouped'
+      ? await leave(order, stored.rows, unordered)
+      : await gather(order, stored.blocks, unordered);
   const tickers = order.map((number) => names[number] as string);
   for (const place of unordered) {
-    const from = starts[place] as number;
-    const to = starts[place + 1] as number;
-    sortRange(days.subarray(from, to), closes.subarray(from, to));
+    const { days, closes } = rowsOf(columns, place);
+    sortRange(days, closes);
     onUnordered(tickers[place] as string);
     await breathe();
   }
-  return { tickers, starts, days, closes };
+  return { tickers, ...columns };
 };

@@ -106,8 +106,8 @@ test('the first and the last day of the sane calendar pass, those beside them an
   const check = (iso: string, now: number | null) => {
     const findings = makeFindings();
     const days = Int32Array.from([dayFromIso(iso) ?? 0]);
-    const starts = Int32Array.from([0, 1]);
-    checkDays({ tickers: ['KELP'], starts, days, closes: Float64Array.from([1]) }, 0, now, findings);
+    const ranges = { starts: Int32Array.from([0]), ends: Int32Array.from([1]) };
+    checkDays({ tickers: ['KELP'], ...ranges, days, closes: Float64Array.from([1]) }, 0, now, findings);
     return findings.list().map(({ code }) => code);
   };
   expect(check('1900-01-01', null)).toEqual([]);

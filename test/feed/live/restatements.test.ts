@@ -21,7 +21,8 @@ const snapshot = (table: Readonly<Record<string, Prices>>, quarantined: readonly
   return snapshotFromColumns({
     fingerprint: '',
     tickers,
-    starts: Int32Array.from(starts),
+    starts: Int32Array.from(starts.slice(0, -1)),
+    ends: Int32Array.from(starts.slice(1)),
     days: Int32Array.from(rows, ([day]) => day),
     closes: Float64Array.from(rows, ([, close]) => close),
     meanings: tickers.map(() => meaning),

@@ -4,7 +4,7 @@ import { type Holidays, type SessionCalendar, sessionsOf } from '../../sessions.
 import { breathe, rowsPerBreath } from '../breathe.ts';
 import type { Findings } from '../findings.ts';
 import type { TickerExtras } from '../read/collected.ts';
-import type { SortedColumns } from '../sortRows.ts';
+import { rowsOf, type SortedColumns } from '../sortedColumns.ts';
 import { checkExtras } from './extras.ts';
 import { type Flagger, makeFlagger } from './flagger.ts';
 import { checkSessions, longestGapDays } from './gaps.ts';
@@ -23,9 +23,6 @@ type Context = {
   readonly findings: Findings;
 };
 
-const daysOf = ({ starts, days }: SortedColumns, place: number): Int32Array =>
-  days.subarray(starts[place] as number, starts[place + 1] as number);
-
 /** The sessions of every group of tickers that share a calendar. */
 export const calendarsOf = (
   columns: SortedColumns,
@@ -35,7 +32,7 @@ export const calendarsOf = (
   const groups = new Map<string | null, Int32Array[]>();
   meanings.forEach(({ calendar }, place) => {
     const group = groups.get(calendar) ?? [];
-    group.push(daysOf(columns, place));
+    group.push(rowsOf(columns, place).days);
     groups.set(calendar, group);
   });
   return new Map([...groups].map(([name, group]) => [name, sessionsOf(group, holidays.get(name) ?? null)]));
@@ -62,8 +59,7 @@ export const checkTickers = async (context: Context): Promise<readonly TickerRep
   const reports: TickerReport[] = [];
   let sinceBreath = 0;
   for (const [place, ticker] of columns.tickers.entries()) {
-    const days = daysOf(columns, place);
-    const closes = columns.closes.subarray(columns.starts[place], columns.starts[place + 1]);
+    const { days, closes } = rowsOf(columns, place);
     const meaning = meanings[place] as PriceMeaning;
     const flagger = makeFlagger(ticker, findings);
     const series = { ticker, days, closes };

@@ -1,7 +1,7 @@
 import type { InstantMs } from '../../../terms/clock.ts';
 import { type Day, dayFromDate } from '../../../terms/day.ts';
 import type { Findings } from '../findings.ts';
-import type { SortedColumns } from '../sortRows.ts';
+import { rowsOf, type SortedColumns } from '../sortedColumns.ts';
 
 const firstSaneDay = dayFromDate(1900, 1, 1) ?? 0;
 const lastSaneDay = dayFromDate(2199, 12, 31) ?? 0;
@@ -20,16 +20,14 @@ export const checkDays = (
   nowMs: InstantMs | null,
   findings: Findings,
 ): void => {
-  const { tickers, starts, days, closes } = columns;
-  const ticker = tickers[place] ?? '';
-  const start = starts[place] as number;
-  const end = starts[place + 1] as number;
+  const ticker = columns.tickers[place] ?? '';
+  const { days, closes } = rowsOf(columns, place);
   const latest = nowMs === null ? lastSaneDay : latestDayOnEarth(nowMs);
-  for (let row = start; row < end; row += 1) {
+  for (let row = 0; row < days.length; row += 1) {
     const day = days[row] as number;
     if (day < firstSaneDay || day > lastSaneDay) findings.record('dateOutside', { ticker, day });
     else if (day > latest) findings.record('futureDate', { ticker, day });
-    if (row === start || day !== days[row - 1]) continue;
+    if (row === 0 || day !== days[row - 1]) continue;
     const value = String(closes[row]);
     if (closes[row] === closes[row - 1]) findings.record('sameDayEqual', { ticker, day, value });
     else findings.record('sameDayDifferent', { ticker, day, value: `${closes[row - 1]} and ${value}` });

@@ -25,35 +25,44 @@ const patterns: Readonly<Record<WrittenDate, readonly [parse: string, shape: str
 /** Days from the day that a spreadsheet counts as 0 to 1970-01-01. */
 const spreadsheetEpoch = 25_569;
 
+/** Years of four digits alone: other calendars of the reader reach beyond what a day can be shown for. */
+const datedByUs = (date: string): string =>
+  `CASE WHEN (${date}) BETWEEN DATE '0001-01-01' AND DATE '9999-12-31' THEN (${date}) END`;
+
 const dateOfText = (cell: string, format: WrittenDate): string => {
   if (format === 'YYYY-MM-DD') {
     // faster than the pattern, and held to the very text: alone the cast takes even signs among the digits
-    return `CASE WHEN CAST(TRY_CAST(${cell} AS DATE) AS VARCHAR) = ${cell} THEN TRY_CAST(${cell} AS DATE) END`;
+    const date = `TRY_CAST(${cell} AS DATE)`;
+    return `CASE WHEN strlen(${cell}) = 10 AND CAST(${date} AS VARCHAR) = ${cell} THEN ${date} END`;
   }
   const [parse, shape] = patterns[format];
-  return `CASE WHEN regexp_full_match(${cell}, ${sqlText(shape)}) THEN CAST(try_strptime(${cell}, ${sqlText(parse)}) AS DATE) END`;
+  const date = `CAST(try_strptime(${cell}, ${sqlText(parse)}) AS DATE)`;
+  return datedByUs(`CASE WHEN regexp_full_match(${cell}, ${sqlText(shape)}) THEN ${date} END`);
 };
 
-/** Years of four digits alone: other calendars of the reader reach beyond what a day can be shown for. */
-const dayOfDate = (date: string): string =>
-  `CAST(CASE WHEN (${date}) BETWEEN DATE '0001-01-01' AND DATE '9999-12-31' THEN date_diff('day', DATE '1970-01-01', ${date}) END AS INTEGER)`;
+const epoch = `DATE '1970-01-01'`;
 
-/** The day number of a cell, null where it is blank or no date in the format. */
-export const daySql = (column: SourceColumn, { dateFormat }: TextFormat): string => {
+/** The date of a cell, null where it is blank or no date in the format. */
+export const dateSql = (column: SourceColumn, { dateFormat }: TextFormat): string => {
   const { cell, type } = column;
   if (isText(column)) {
-    if (dateFormat !== 'spreadsheet number') return dayOfDate(dateOfText(cell, dateFormat));
-    return `TRY_CAST(CASE WHEN regexp_full_match(${cell}, '[0-9]{1,6}') THEN CAST(${cell} AS INTEGER) - ${spreadsheetEpoch} END AS INTEGER)`;
+    if (dateFormat !== 'spreadsheet number') return dateOfText(cell, dateFormat);
+    const day = `TRY_CAST(${cell} AS INTEGER) - ${spreadsheetEpoch}`;
+    return `CASE WHEN regexp_full_match(${cell}, '[0-9]{1,6}') THEN ${epoch} + (${day}) END`;
   }
-  if (type === 'DATE') return dayOfDate(cell);
+  if (type === 'DATE') return datedByUs(cell);
   // an instant within a day is not a trading day
   if (type.startsWith('TIMESTAMP') && !type.endsWith('TIME ZONE')) {
-    return dayOfDate(
+    return datedByUs(
       `CASE WHEN isfinite(${cell}) AND date_trunc('day', ${cell}) = ${cell} THEN CAST(${cell} AS DATE) END`,
     );
   }
-  return 'CAST(NULL AS INTEGER)';
+  return 'CAST(NULL AS DATE)';
 };
+
+/** The number of the day of a cell, null where it has no date. */
+export const daySql = (column: SourceColumn, format: TextFormat): string =>
+  `CAST((${dateSql(column, format)}) - ${epoch} AS INTEGER)`;
 
 /** The number of a cell, null where it is blank or no number. Digits are never grouped. */
 export const numberSql = (column: SourceColumn, decimalMark: DecimalMark): string => {

@@ -1,5 +1,5 @@
 import { type Findings, makeFindings } from '../findings.ts';
-import { makeRowBlocks, type RowBlocks } from '../rowBlocks.ts';
+import { makeRowStore, type RowStore } from '../rowStore.ts';
 
 /** What the optional columns say of one ticker, gathered over all its rows. */
 export type TickerExtras = {
@@ -11,7 +11,7 @@ export type TickerExtras = {
 };
 
 /** Rows gathered from one price file after the other. */
-export type Collected = RowBlocks & {
+export type Collected = RowStore & {
   readonly names: string[];
   /** The number of a ticker, a new one at its first sight. */
   readonly numberOf: (ticker: string) => number;
@@ -43,7 +43,7 @@ export const makeCollected = (): Collected => {
     };
     return extras[number];
   };
-  return { names, numberOf, ...makeRowBlocks(), extrasOf, findings: makeFindings() };
+  return { names, numberOf, ...makeRowStore(), extrasOf, findings: makeFindings() };
 };
 
 const mostTickerLength = 40;
@@ -51,3 +51,15 @@ const mostTickerLength = 40;
 /** A quotation mark that was left open swallows whole rows into a name; such a name is refused, not served. */
 export const isTickerName = (name: string): boolean =>
   name.length <= mostTickerLength && !/[\p{Cc}\p{Zl}\p{Zp}\uFFFD]/u.test(name);
+
+/** Stands for a row without a ticker. */
+export const noTicker = -1;
+/** Stands for a ticker whose name cannot be one. */
+export const wrongName = -2;
+
+/** The number of the ticker that a cell names, or what stands for none. */
+export const numberOfCell = (text: string, { numberOf }: Collected): number => {
+  const name = text.trim();
+  if (name === '') return noTicker;
+  return isTickerName(name) ? numberOf(name) : wrongName;
+};

@@ -1,4 +1,4 @@
-import { type DuckDBConnection, DuckDBInstance } from '@duckdb/node-api';
+import type { DuckDBConnection, DuckDBInstance } from '@duckdb/node-api';
 
 /** A text as an SQL literal. */
 export const sqlText = (text: string): string => `'${text.replaceAll("'", "''")}'`;
@@ -11,6 +11,12 @@ const options = {
 
 /** Runs work on a connection of its own. */
 export type Database = <Value>(work: (connection: DuckDBConnection) => Promise<Value>) => Promise<Value>;
+
+const createInstance = async (): Promise<DuckDBInstance> => {
+  // loaded when it is first needed
+  const { DuckDBInstance } = await import('@duckdb/node-api');
+  return DuckDBInstance.create(':memory:', options);
+};
 
 const runOn = async <Value>(
   instance: DuckDBInstance,
@@ -28,7 +34,7 @@ const runOn = async <Value>(
 
 /** A database that is made for the work and gone after it with all its memory. */
 export const passingDatabase: Database = async (work) => {
-  const instance = await DuckDBInstance.create(':memory:', options);
+  const instance = await createInstance();
   try {
     return await runOn(instance, work);
   } finally {
@@ -41,6 +47,6 @@ export const openDatabase = async (): Promise<{
   readonly database: Database;
   readonly close: () => void;
 }> => {
-  const instance = await DuckDBInstance.create(':memory:', options);
+  const instance = await createInstance();
   return { database: (work) => runOn(instance, work), close: () => instance.closeSync() };
 };

@@ -2,7 +2,7 @@ import type { DuckDBConnection, DuckDBDataChunk } from '@duckdb/node-api';
 import type { Problem } from '../../../terms/problem.ts';
 import type { FeedSettings } from '../../settings.ts';
 import { isPrice } from './cellCodes.ts';
-import { daySql, numberSql, textSql } from './cellSql.ts';
+import { dateSql, numberSql, textSql } from './cellSql.ts';
 import type { Collected } from './collected.ts';
 import { findColumns } from './columnsNeeded.ts';
 import { type ExtraColumns, makeExtras } from './extras.ts';
@@ -25,7 +25,7 @@ const querySql = (
   from: string,
 ): string => {
   const name = ticker.type === 'VARCHAR' ? ticker.cell : textSql(ticker);
-  const columns = [name, daySql(date, format), numberSql(price, format.decimalMark), ...extras.sql];
+  const columns = [name, dateSql(date, format), numberSql(price, format.decimalMark), ...extras.sql];
   return `SELECT ${columns.join(', ')} FROM ${from}`;
 };
 

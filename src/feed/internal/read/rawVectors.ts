@@ -5,7 +5,7 @@ import duckdb from '@duckdb/node-bindings';
 const bytesOf = (chunk: DuckDBDataChunk, column: number, bytesPerRow: number): Uint8Array =>
   duckdb.vector_get_data(duckdb.data_chunk_get_vector(chunk.chunk, column), chunk.rowCount * bytesPerRow);
 
-/** A column of type INTEGER; where it has nulls there is anything in their place. */
+/** A column of type INTEGER, or of type DATE, which is kept as its days since 1970-01-01; where it has nulls there is anything in their place. */
 export const rawInts = (chunk: DuckDBDataChunk, column: number): Int32Array => {
   const { buffer, byteOffset } = bytesOf(chunk, column, 4);
   return new Int32Array(buffer, byteOffset, chunk.rowCount);
@@ -25,8 +25,6 @@ export const rawTextWords = (chunk: DuckDBDataChunk, column: number): Int32Array
   const { buffer, byteOffset } = bytesOf(chunk, column, 16);
   return new Int32Array(buffer, byteOffset, 4 * chunk.rowCount);
 };
-
-export const longestWordedText = 12;
 
 /** Which rows of a column have a value, one bit a row from the lowest on; null where all have. */
 export type ValueBits = Uint8Array | null;

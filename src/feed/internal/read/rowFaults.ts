@@ -11,10 +11,9 @@ import {
   unreadDay,
 } from './cellCodes.ts';
 import { daySql, numberSql, type SourceColumn, textSql } from './cellSql.ts';
-import type { Collected } from './collected.ts';
+import { type Collected, noTicker } from './collected.ts';
 import { rawDoubles, rawInts } from './rawVectors.ts';
 import type { Source } from './source.ts';
-import { noTicker } from './tickerNumbers.ts';
 import { chunksOf } from './vectors.ts';
 import { firstRowOfFile, makeWantedTexts, textsOfRows, type WantedTexts } from './wantedTexts.ts';
 

@@ -3,12 +3,11 @@ import type { Delimiter } from '../../../terms/tableFormat.ts';
 import type { SourceColumn } from './cellSql.ts';
 import { sqlText } from './database.ts';
 import type { FileKind } from './fileKind.ts';
+import { cellsOfLine, delimiterOf } from './textLine.ts';
 import { mostLineBytes } from './wholeness.ts';
 
 /** A file ready to be read: its columns and the SQL that stands for its rows. */
 export type Source = { readonly columns: readonly SourceColumn[]; readonly from: string };
-
-const delimiterOf: Readonly<Record<Delimiter, string>> = { comma: ',', semicolon: ';', tab: '\t' };
 
 /** The reader’s own buffers are many times larger without being faster. */
 const bufferBytes = 2_000_000;
@@ -19,18 +18,6 @@ const csvScan = (path: string, cells: readonly string[], more: string): string =
     `read_csv(${sqlText(path)}, auto_detect = false, columns = {${types}}, ` +
     `max_line_size = ${mostLineBytes}, buffer_size = ${bufferBytes}, strict_mode = true, null_padding = false, ${more})`
   );
-};
-
-/** The cells of one CSV record that stands on one line, white space around them taken off. */
-export const cellsOfLine = (line: string, delimiter: string): string[] => {
-  const cells: string[] = [];
-  const cell = new RegExp(`(?:"((?:[^"]|"")*)"|([^${delimiter}]*))(${delimiter}|$)`, 'y');
-  for (;;) {
-    const found = cell.exec(line);
-    if (found === null) return [line];
-    cells.push((found[1]?.replaceAll('""', '"') ?? found[2] ?? '').trim());
-    if (found[3] === '') return cells;
-  }
 };
 
 const openCsv = async (connection: DuckDBConnection, path: string, delimiter: string): Promise<Source> => {

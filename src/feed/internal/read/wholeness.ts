@@ -1,7 +1,6 @@
-import { createReadStream } from 'node:fs';
 import { type FileHandle, open } from 'node:fs/promises';
-import { createGunzip } from 'node:zlib';
 import type { FileKind } from './fileKind.ts';
+import { gunzippedPieces, textPieces } from './pieces.ts';
 
 /**
  * Whether a file reaches its own end and has rows of a sane length. The reader accepts a compressed file that was cut
@@ -15,6 +14,22 @@ export const mostLineBytes = 1_000_000;
 
 const [lineFeed, carriageReturn] = [0x0a, 0x0d];
 
+const isLineEnd = (byte: number | undefined): boolean => byte === lineFeed || byte === carriageReturn;
+
+/** Where the first line of a piece ends that has a line end. */
+const firstLineEnd = (piece: Uint8Array): number => {
+  let at = 0;
+  while (!isLineEnd(piece[at])) at += 1;
+  return at;
+};
+
+/** −1 where there is none. */
+const lastLineEnd = (piece: Uint8Array): number => {
+  let at = piece.length - 1;
+  while (at >= 0 && !isLineEnd(piece[at])) at -= 1;
+  return at;
+};
+
 /** Looks at text piece by piece. Pieces are far shorter than the longest row, so that only a row over several counts. */
 const makeTextWatch = () => {
   let sinceLineEnd = 0;
@@ -22,38 +37,31 @@ const makeTextWatch = () => {
   let last: number | undefined;
   return {
     see: (piece: Uint8Array): void => {
-      const ends = [lineFeed, carriageReturn].filter((end) => piece.includes(end));
-      const first = Math.min(...ends.map((end) => piece.indexOf(end)), piece.length);
+      const lastEnd = lastLineEnd(piece);
+      const first = lastEnd < 0 ? piece.length : firstLineEnd(piece);
       isTooLong ||= sinceLineEnd + first > mostLineBytes;
-      const lastEnd = Math.max(...ends.map((end) => piece.lastIndexOf(end)), -1);
       sinceLineEnd = lastEnd < 0 ? sinceLineEnd + piece.length : piece.length - 1 - lastEnd;
       last = piece.at(-1) ?? last;
     },
     verdict: (): Wholeness => {
       if (isTooLong) return 'lineTooLong';
-      return last === undefined || last === lineFeed || last === carriageReturn ? 'whole' : 'unfinishedLine';
+      return last === undefined || isLineEnd(last) ? 'whole' : 'unfinishedLine';
     },
   };
 };
 
-const pieceBytes = 262_144;
-
-const wholenessOfText = async (path: string): Promise<Wholeness> => {
+const wholenessOfText = async (pieces: AsyncIterable<Uint8Array>): Promise<Wholeness> => {
   const watch = makeTextWatch();
-  for await (const piece of createReadStream(path, { highWaterMark: pieceBytes })) watch.see(piece);
+  for await (const piece of pieces) watch.see(piece);
   return watch.verdict();
 };
 
 const wholenessOfGzip = async (path: string): Promise<Wholeness> => {
-  const watch = makeTextWatch();
   try {
-    // the check sum at the end of each member is verified on the way
-    for await (const piece of createReadStream(path).pipe(createGunzip({ chunkSize: pieceBytes })))
-      watch.see(piece);
+    return await wholenessOfText(gunzippedPieces(path));
   } catch {
     return 'cutOff';
   }
-  return watch.verdict();
 };
 
 type Bytes = (position: number, count: number) => Promise<DataView | null>;
@@ -106,7 +114,7 @@ const wholenessOfZstandard = async (file: FileHandle, size: number): Promise<Who
 /** Parquet has its directory at its end, so that the reader itself refuses one that was cut off. */
 export const wholenessOf = async (path: string, kind: FileKind): Promise<Wholeness> => {
   if (kind === 'parquet') return 'whole';
-  if (kind === 'csv') return wholenessOfText(path);
+  if (kind === 'csv') return wholenessOfText(textPieces(path));
   if (kind === 'gz') return wholenessOfGzip(path);
   const file = await open(path);
   try {
