@@ -23,7 +23,10 @@ export const exampleSettings = (): Settings => {
 };
 
 /** The desk of the demonstration prices, on the morning after they end. */
-const demoDesk = async (keeps = true, more: Pick<DeskParts, 'permissions'> = {}): Promise<Desk> => {
+export const demoDesk = async (
+  keeps = true,
+  more: Pick<DeskParts, 'permissions' | 'wall'> = {},
+): Promise<Desk> => {
   const settings = exampleSettings();
   const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
   const feed = await feedOnce(settings, clock);
@@ -40,7 +43,7 @@ export const demoConverse = async (keeps = true): Promise<Converse> => createCon
 /** The same as the workspace has it, with its form and its home. */
 export const demoConversation = async (
   listensInThreads = false,
-  more: Pick<DeskParts, 'permissions'> = {},
+  more: Pick<DeskParts, 'permissions' | 'wall'> = {},
 ): Promise<Conversation> => {
   const desk = await demoDesk(true, more);
   const surfaces = createSurfaces(desk, listensInThreads);

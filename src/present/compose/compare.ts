@@ -88,6 +88,13 @@ const pairRow = ({ figures }: CompareAnswer): readonly string[] => {
   ];
 };
 
+/** `KELP less TARN +0.1%, p adjusted 0.21`: a pair as it is read out. */
+const pairInWords = ({ figures }: CompareAnswer): string => {
+  const [one, other] = figures.order;
+  const adjusted = figures.holmP === null ? '' : `, p adjusted ${probabilityValue(figures.holmP)}`;
+  return `${one} less ${other} ${meanBounds(figures).estimate}%${adjusted}`;
+};
+
 /** Every pair of several tickers in one reply, with p-values that hold although all pairs are read at once. */
 export const compareManyReply = (answers: readonly [CompareAnswer, ...CompareAnswer[]]): Reply => {
   const [first] = answers;
@@ -115,5 +122,6 @@ export const compareManyReply = (answers: readonly [CompareAnswer, ...CompareAns
       ],
       rows: answers.map(pairRow),
     },
+    figuresInWords: `Differences of the mean a day: ${answers.map(pairInWords).join('; ')}`,
   });
 };
