@@ -37,7 +37,9 @@ export const answeredIn = (configured: Configured, places: KnownPlaces): ((asker
     const facts = places.channel(team, channel);
     if (facts === null || !facts.there) return privately(denials.cannotTell);
     if (facts.shared || facts.guests === true) return shut(team, person);
-    return facts.guests === null ? privately(denials.cannotTell) : allowed;
+    if (facts.guests === null) return privately(denials.cannotTell);
+    // whoever came in since the channel was looked at
+    return places.person(team, person)?.guest === true ? silence : alone(team, person);
   };
 
   return (asker) => {
