@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { type BacktestQuestion, backtest } from '../../../src/stats/backtests/backtest.ts';
 import type { ModelVerdict } from '../../../src/stats/backtests/judgedModel.ts';
 import { nextNormal } from '../../../src/stats/random/draws.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level } from '../levels.ts';
@@ -139,8 +139,27 @@ describe('refusals', () => {
     [{ firstDay: 249 }, 'tooFewReturns'],
   ] as const)('%j', (more, code) => expect(refusalCode(run(more))).toBe(code));
 
+  test.each([
+    [{ tailLevel: level('0.5') }, 'A backtest at 50% judges no tail.'],
+    [{ dayCount: 1 }, 'A backtest needs at least 2 days to judge, and there is 1.'],
+    [{ dayCount: 0 }, 'A backtest needs at least 2 days to judge, and there are none.'],
+    [
+      { firstDay: 249 },
+      'The first day judged needs 250 returns before it, and there are 249. Ask for 1 days fewer, or for a shorter',
+    ],
+  ] as const)('%j is refused in words', (more, words) => expect(refusalMessage(run(more))).toContain(words));
+
+  test('two days are enough, and as many returns before the first as the window holds', () => {
+    const least = { firstDay: 250, dayCount: 2, models: ['normal'] as const, replicates: 9 };
+    const [normal] = verdicts(least);
+    expect([...(normal?.forecasts.days ?? [])]).toEqual([250, 251]);
+    expect(run({ ...least, firstDay: dax.length - 2 }).ok).toBe(true);
+  });
+
   test('days beyond the returns are a bug of the caller', () => {
-    expect(() => run({ dayCount: 501 })).toThrow(RangeError);
+    expect(() => run({ dayCount: 501 })).toThrow(
+      `backtest: days up to ${dax.length + 1} of ${dax.length} returns`,
+    );
   });
 });
 

@@ -74,7 +74,18 @@ describe('exact two-sided coverage', () => {
   });
 
   test('a count that is not one is a bug of the caller', () => {
-    expect(() => exactCoverageP(3, 2, levelOfFailure(0.01))).toThrow(RangeError);
-    expect(() => coverageTest(0.5, 2, levelOfFailure(0.01))).toThrow(RangeError);
+    expect(() => exactCoverageP(3, 2, levelOfFailure(0.01))).toThrow(
+      /^exactCoverageP: 3 exceedances in 2 days is not a count/,
+    );
+    for (const [exceedances, days] of [
+      [0.5, 2],
+      [1, 2.5],
+      [-1, 2],
+      [0, 0],
+    ] as const)
+      expect(() => coverageTest(exceedances, days, levelOfFailure(0.01))).toThrow(/^coverageTest: /);
+    // Every day may be an exceedance, and none.
+    expect(coverageTest(1, 1, levelOfFailure(0.01)).p).toBeLessThan(0.05);
+    expect(coverageTest(0, 1, levelOfFailure(0.01)).p).toBeGreaterThan(0.5);
   });
 });

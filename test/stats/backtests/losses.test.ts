@@ -58,7 +58,7 @@ describe('joint loss', () => {
   });
 
   test('an ES of 0 or less has no logarithm', () => {
-    expect(() => jointLoss(0.1, 0, 0, 0.01)).toThrow(RangeError);
+    expect(() => jointLoss(0.1, 0, 0, 0.01)).toThrow('jointLoss: ES must be positive, got 0');
   });
 
   test('the mean over a sample is lowest at its VaR and ES', () => {

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { ratioInterval } from '../../../src/stats/ratio/interval.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level95 } from '../levels.ts';
@@ -39,6 +39,9 @@ describe('ratioInterval', () => {
 
   test('refusals', () => {
     expect(refusalCode(ratioInterval([0.1], level95))).toBe('tooFewReturns');
+    expect(refusalMessage(ratioInterval([0.1], level95))).toMatch(
+      /^An interval for the ratio of mean to standard deviation needs at least 2 returns/,
+    );
     expect(refusalCode(ratioInterval([0.1, 0.1], level95))).toBe('priceDoesNotMove');
   });
 });

@@ -3,7 +3,7 @@ import { simpleReturns } from '../../../src/stats/returns/returns.ts';
 import { blockDeviationInterval } from '../../../src/stats/spread/blockInterval.ts';
 import { bonettInterval } from '../../../src/stats/spread/bonett.ts';
 import { chiSquareInterval } from '../../../src/stats/spread/chiSquareInterval.ts';
-import { accepted, refusalCode } from '../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../laws/outcomes.ts';
 import { relativeError } from '../../laws/relativeError.ts';
 import { indexReturns } from '../indexWindows.ts';
 import { level, level95 } from '../levels.ts';
@@ -112,4 +112,25 @@ describe('blockDeviationInterval', () => {
     expect(refused({ returns: new Float64Array(12) })).toBe('priceDoesNotMove');
     expect(refused({ level: level('0.9999') })).toBe('levelOutside');
   });
+});
+
+test('each refusal names the interval that cannot be had', () => {
+  const nine = indexReturns('DAX', '20').subarray(0, 9);
+  expect(refusalMessage(chiSquareInterval([0.1], level95))).toMatch(
+    /^An interval for the standard deviation needs at least 2 returns/,
+  );
+  expect(refusalMessage(bonettInterval(nine, level95))).toMatch(
+    /^An interval for the standard deviation that allows for fat tails needs at least 10 returns/,
+  );
+  expect(refusalMessage(blockDeviationInterval({ returns: nine, level: level95, streams }))).toMatch(
+    /^An interval for the standard deviation that allows for clustering needs at least 10 returns/,
+  );
+});
+
+test('both ends must be within the resamples', () => {
+  // (19 + 1)·0.025 is half a rank, (39 + 1)·0.025 a whole one.
+  const asked = { returns: indexReturns('DAX', '60'), level: level95, streams };
+  expect(refusalCode(blockDeviationInterval({ ...asked, replicates: 19 }))).toBe('levelOutside');
+  const { lower, upper } = accepted(blockDeviationInterval({ ...asked, replicates: 39 }));
+  expect(lower).toBeLessThan(upper);
 });

@@ -87,6 +87,13 @@ describe('which interval of the standard deviation to believe', () => {
     });
   });
 
+  test('four returns have a kurtosis', () => {
+    // By hand: of 0, 0, 0, 1 the fourth central moment is 21/256 and the second 3/16, so m4/m2² − 3 = −2/3.
+    const found = trusted([0, 0, 0, 1]);
+    expect(found.excessKurtosis).toBeCloseTo(-2 / 3, 14);
+    expect(found.jarqueBera).not.toBeNull();
+  });
+
   test('is refused like the chi-square interval', () => {
     expect(refusalCode(deviationTrust({ returns: [0.1], level: level95, streams }))).toBe('tooFewReturns');
   });
