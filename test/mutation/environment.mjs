@@ -66,9 +66,10 @@ export const openEnvironment = async (testFiles) => {
       }
       return registry().tests;
     },
-    /** What the next `load` takes; `file` is the one that stays mutated, or '' for none. */
+    /** What the next `load` takes; `file` is the one that stays mutated, '' for none, null for all. */
     mutateOnly: (file, originalTexts) => {
-      for (const id of mutated === null ? Object.keys(originalTexts) : [mutated, file]) forget(id);
+      const isOne = mutated !== null && file !== null;
+      for (const id of isOne ? [mutated, file] : Object.keys(originalTexts)) forget(id);
       originals = originalTexts;
       mutated = file;
     },

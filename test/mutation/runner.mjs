@@ -20,7 +20,10 @@ import { openEnvironment } from './environment.mjs';
  * - a mutant that is not killed within `millisecondsPerMutant` of tests (as timed without mutants) counts as
  *   survived, so the score is never flattered by what was not run.
  */
-const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 3000);
+const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 2000);
+
+/** Tests above this are left out: what only they would notice counts as survived. */
+const dearestTest = Number(process.env.MUTATION_TEST_MS ?? 400);
 
 /**
  * A share of the mutants to try, for a machine that has no time for all. Which ones follows from their place and
@@ -77,7 +80,8 @@ class InProcessRunner {
   environment = null;
   tests = new Map();
   learned = { testFiles: [], originals: {}, durations: {}, coverage: {} };
-  mutatedFile = null;
+  /** '' for none, null for all, undefined before the first. */
+  mutatedFile = undefined;
   isFresh = false;
 
   capabilities() {
@@ -89,7 +93,7 @@ class InProcessRunner {
     this.isFresh = true;
   }
 
-  /** Only the file of the mutant is mutated; the others run as they were written. */
+  /** Only the file of the mutant is mutated while it is judged; the others run as they were written. */
   async turnTo(file) {
     if (file === this.mutatedFile) return;
     this.environment.mutateOnly(file, this.learned.originals);
@@ -97,37 +101,43 @@ class InProcessRunner {
     await this.load();
   }
 
-  async runAll() {
+  async runAll(ids) {
     const stryker = instrumented();
     const results = [];
-    for (const { id, name, body } of this.tests.values()) {
+    for (const id of ids) {
+      const { name, body } = this.tests.get(id);
       stryker.currentTestId = id;
-      const start = performance.now();
+      const start = process.cpuUsage();
       const failureMessage = await failureOf(body);
-      const timeSpentMs = performance.now() - start;
+      const { user, system } = process.cpuUsage(start);
       stryker.currentTestId = undefined;
       const status = failureMessage === null ? TestStatus.Success : TestStatus.Failed;
+      const timeSpentMs = (user + system) / 1000;
       results.push({ id, name, timeSpentMs, status, failureMessage: failureMessage ?? '' });
     }
     return results;
   }
 
-  /** Once with all files mutated, which counts who passes which mutant, and once without, which times the tests. */
+  /**
+   * Once without mutants, which times the tests by the processor, so that a busy machine makes none dear; then those
+   * that are cheap enough with all files mutated, which counts who passes which mutant.
+   */
   async dryRun({ testFiles, files }) {
     const stryker = instrumented();
     this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
     this.learned.originals = originalsOf(files ?? []);
     this.environment = await openEnvironment(this.learned.testFiles);
-    await this.load();
-    const counted = await this.runAll();
+    await this.turnTo('');
+    const timed = await this.runAll([...this.tests.keys()]);
+    const cheap = timed.filter(({ timeSpentMs }) => timeSpentMs <= dearestTest);
+    for (const { id, timeSpentMs } of cheap) this.learned.durations[id] = timeSpentMs;
+    await this.turnTo(null);
+    const counted = await this.runAll(cheap.map(({ id }) => id));
     const { mutantCoverage } = stryker;
     this.learned.coverage = mutantCoverage?.perTest ?? {};
-    await this.turnTo('');
-    const tests = await this.runAll();
-    for (const { id, timeSpentMs } of tests) this.learned.durations[id] = timeSpentMs;
     writeFileSync(learnedFile, JSON.stringify(this.learned));
-    const failed = counted.filter(({ status }) => status === TestStatus.Failed);
-    return { status: DryRunStatus.Complete, tests: failed.length > 0 ? counted : tests, mutantCoverage };
+    const failed = counted.some(({ status }) => status === TestStatus.Failed);
+    return { status: DryRunStatus.Complete, tests: failed ? counted : timed, mutantCoverage };
   }
 
   async resume() {
