@@ -1,4 +1,4 @@
-import { type Collected, numberOfCell } from './collected.ts';
+import { type Collected, noTicker, numberOfCell } from './collected.ts';
 import { makeDateReader, notPlain, readNumber } from './plainText.ts';
 import { longestWordedText, makeWordTable } from './wordTable.ts';
 
@@ -18,6 +18,8 @@ const makeTickerReader = (collected: Collected) => {
   const table = makeWordTable();
   const words = new Int32Array(3);
   const wordBytes = new Uint8Array(words.buffer);
+  const last = new Int32Array(4).fill(-1);
+  let lastNumber = noTicker;
   const textOf = (bytes: Uint8Array, start: number, end: number): string =>
     String.fromCharCode(...bytes.subarray(start, end));
   return (bytes: Uint8Array, start: number, end: number): number => {
@@ -25,12 +27,16 @@ const makeTickerReader = (collected: Collected) => {
     if (length > longestWordedText) return numberOfCell(textOf(bytes, start, end), collected);
     words.fill(0);
     for (let at = 0; at < length; at += 1) wordBytes[at] = bytes[start + at] as number;
-    const [first, second, third] = [words[0] as number, words[1] as number, words[2] as number];
+    const first = words[0] as number;
+    const second = words[1] as number;
+    const third = words[2] as number;
+    const isLast = length === last[0] && first === last[1] && second === last[2] && third === last[3];
+    if (isLast) return lastNumber;
     const known = table.get(length, first, second, third);
-    if (known !== null) return known;
-    const number = numberOfCell(textOf(bytes, start, end), collected);
-    table.add(length, first, second, third, number);
-    return number;
+    lastNumber = known ?? numberOfCell(textOf(bytes, start, end), collected);
+    if (known === null) table.add(length, first, second, third, lastNumber);
+    last.set([length, first, second, third]);
+    return lastNumber;
   };
 };
 
