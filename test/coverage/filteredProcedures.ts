@@ -12,6 +12,7 @@ import { type Level, tailFraction } from '../../src/terms/level.ts';
 import type { Random } from '../../src/terms/random.ts';
 import { level } from '../stats/levels.ts';
 import { garch, type Path, trueDeviation, trueMean } from './processes.ts';
+import { remembered } from './remembered.ts';
 import type { Ends, Procedure, Sample } from './simulate.ts';
 import { tailLevels } from './tailProcedures.ts';
 import { trueTail } from './tailTruth.ts';
@@ -58,18 +59,8 @@ const allEnds = ({ returns, level: confidence, streams, replicates }: Sample): E
   return ends;
 };
 
-/** A suite asks for one figure after another over the same samples; each sample is worked through once. */
-const remembered = new Map<string, EndsByFigure>();
-
-const sampleKey = ({ returns, level: { digits, places } }: Sample): string =>
-  `${returns.length} ${returns[0]} ${returns[returns.length - 1]} ${digits} ${places}`;
-
-const endsOf = (sample: Sample, figure: string): Ends | null => {
-  const key = sampleKey(sample);
-  const known = remembered.get(key) ?? allEnds(sample);
-  remembered.set(key, known);
-  return known.get(figure) ?? null;
-};
+/** All figures of a sample come from the same refits. */
+const endsOf = remembered(allEnds);
 
 /** The figure of an innovation with mean 0 and standard deviation 1. */
 const unitFigure = (figure: 'var' | 'es', process: CoverageProcess, tailLevel: Level): number => {
@@ -89,7 +80,7 @@ export const filteredProcedures: readonly Procedure[] = tailLevels.flatMap((text
   (['var', 'es'] as const).map(
     (figure): Procedure => ({
       name: `tail.filtered.${figure}.${text}`,
-      ends: (sample) => endsOf(sample, keyOf(figure, text)),
+      ends: (sample) => endsOf(sample).get(keyOf(figure, text)) ?? null,
       truth: nextDayTruth(figure, level(text)),
     }),
   ),

@@ -10,6 +10,7 @@ export type Ends = { readonly lower: number | null; readonly upper: number | nul
 
 /** What an interval is given of a simulated sample: the returns, and streams of its own for resampling. */
 export type Sample = {
+  readonly process: CoverageProcess;
   readonly returns: Float64Array;
   readonly level: Level;
   readonly streams: RandomStreams;
@@ -25,13 +26,14 @@ export type Procedure = {
   readonly truth: (process: CoverageProcess, path: Path) => number;
 };
 
-export type Cell = {
-  readonly procedure: Procedure;
+/** Where intervals are tried: how the returns are made, how many of them, and how many times. */
+export type Setting = {
   readonly process: CoverageProcess;
   readonly count: number;
-  readonly level: string;
   readonly replications: number;
 };
+
+export type Cell = Setting & { readonly procedure: Procedure; readonly level: string };
 
 /** Streams 0 to 2^20 − 1 make the paths; those of a path's own resamples follow in a block of the same size. */
 const block = 2 ** 20;
@@ -53,29 +55,53 @@ const readLevel = (text: string): Level => {
   return level;
 };
 
-/**
- * Counts how often an interval holds the truth. The paths depend on the process, the count and the replicate alone, so
- * intervals of one process meet the same samples, and a cell comes out the same whenever and wherever it is run.
- */
-export const simulateCell = (cell: Cell): CoverageCell => {
-  const { procedure, process, count, replications } = cell;
-  const level = readLevel(cell.level);
-  const root = createStreams(seedOf(`coverage ${process} ${count}`));
-  let held = 0;
-  let refused = 0;
-  for (let replicate = 0; replicate < replications; replicate += 1) {
-    const path = processes[process](root.stream(replicate), count);
-    const streams = { stream: (inner: number) => root.stream((replicate + 1) * block + inner) };
-    const ends = procedure.ends({
-      returns: path.returns,
-      level,
-      streams,
-      replicates: resamplesAt(count),
-    });
-    if (ends === null) refused += 1;
-    else if (holds(ends, procedure.truth(process, path))) held += 1;
-  }
-  const given = replications - refused;
+/** One interval at one level, with what was counted so far. */
+type Tally = {
+  readonly procedure: Procedure;
+  readonly text: string;
+  readonly level: Level;
+  held: number;
+  refused: number;
+};
+
+const count = (tally: Tally, sample: Omit<Sample, 'level'>, path: Path): void => {
+  const ends = tally.procedure.ends({ ...sample, level: tally.level });
+  if (ends === null) tally.refused += 1;
+  else if (holds(ends, tally.procedure.truth(sample.process, path))) tally.held += 1;
+};
+
+const cellOf = ({ procedure, text, held, refused }: Tally, setting: Setting): CoverageCell => {
+  const given = setting.replications - refused;
   const coverage = given === 0 ? 0 : Number((held / given).toFixed(4));
-  return [procedure.name, process, count, cell.level, coverage, replications, refused];
+  return [procedure.name, setting.process, setting.count, text, coverage, setting.replications, refused];
+};
+
+/**
+ * Counts how often intervals hold the truth, all of them on the same samples. The paths depend on the process, the count and
+ * the replicate alone, so a cell comes out the same whenever, wherever and beside whichever others it is run.
+ */
+export const simulateCells = (
+  procedures: readonly Procedure[],
+  levels: readonly string[],
+  setting: Setting,
+): readonly CoverageCell[] => {
+  const { process, count: returnCount, replications } = setting;
+  const tallies = procedures.flatMap((procedure) =>
+    levels.map((text): Tally => ({ procedure, text, level: readLevel(text), held: 0, refused: 0 })),
+  );
+  const root = createStreams(seedOf(`coverage ${process} ${returnCount}`));
+  for (let replicate = 0; replicate < replications; replicate += 1) {
+    const path = processes[process](root.stream(replicate), returnCount);
+    const streams = { stream: (inner: number) => root.stream((replicate + 1) * block + inner) };
+    const sample = { process, returns: path.returns, streams, replicates: resamplesAt(returnCount) };
+    for (const tally of tallies) count(tally, sample, path);
+  }
+  return tallies.map((tally) => cellOf(tally, setting));
+};
+
+/** One cell of a table by itself. */
+export const simulateCell = ({ procedure, level, ...setting }: Cell): CoverageCell => {
+  const [cell] = simulateCells([procedure], [level], setting);
+  if (cell === undefined) throw new Error('coverage: a cell without an interval');
+  return cell;
 };

@@ -1,7 +1,7 @@
 import { writeFileSync } from 'node:fs';
 import { afterAll, describe, test } from 'vitest';
 import type { CoverageCell, CoverageProcess } from '../../src/stats/coverage/cell.ts';
-import { type Procedure, simulateCell } from './simulate.ts';
+import { type Procedure, simulateCells } from './simulate.ts';
 
 /** A plan of cells: which processes at which counts. */
 export type Grid = readonly {
@@ -17,7 +17,7 @@ export const promisedGrid: Grid = (['normal', 'studentT4', 'garchT'] as const).m
 
 export const replicationsPerCell = 4_000;
 
-const literal = (value: string | number): string =>
+export const literal = (value: string | number): string =>
   typeof value === 'string' ? `'${value}'` : String(value);
 
 /** The source text of one file under src/stats/coverage/measured. */
@@ -38,29 +38,27 @@ export type Suite = {
   readonly procedures: readonly Procedure[];
   readonly grid: Grid;
   readonly levels: readonly string[];
+  /** Where a sample is so dear that the usual number is not affordable. */
+  readonly replications?: number;
 };
 
-const cellsOf = ({ procedures, grid, levels }: Suite) =>
-  procedures.flatMap((procedure) =>
-    grid.flatMap(({ process, counts }) =>
-      counts.flatMap((count) => levels.map((level) => ({ procedure, process, count, level }))),
-    ),
-  );
-
-/** Measures a suite, a test for each cell so that progress can be seen, and writes its file when all are done. */
+/** Measures a suite, a test for each process and count so that progress can be seen, and writes its file when all are done. */
 export const measureSuite = (suite: Suite): void => {
+  const { procedures, grid, levels, replications = replicationsPerCell } = suite;
   describe(`coverage of ${suite.name}`, () => {
+    const settings = grid.flatMap(({ process, counts }) =>
+      counts.map((count) => [process, count, { process, count, replications }] as const),
+    );
     const measured: CoverageCell[] = [];
-    const cells = cellsOf(suite);
-    test.each(
-      cells.map((cell) => [cell.procedure.name, cell.process, cell.count, cell.level, cell] as const),
-    )('%s of %s returns, %i at %s', (_, __, ___, ____, cell) => {
-      measured.push(simulateCell({ ...cell, replications: replicationsPerCell }));
+    test.each(settings)('%s returns, %i', (_, __, setting) => {
+      measured.push(...simulateCells(procedures, levels, setting));
     });
     afterAll(() => {
-      if (measured.length < cells.length) return;
+      if (measured.length < settings.length * procedures.length * levels.length) return;
       // Where every sample was too short for the interval there is no share to report.
-      const given = measured.filter(([, , , , , replications, refused]) => refused < replications);
+      const given = procedures.flatMap(({ name }) =>
+        measured.filter(([cell, , , , , made, refused]) => cell === name && refused < made),
+      );
       const file = new URL(`../../src/stats/coverage/measured/${suite.name}.ts`, import.meta.url);
       writeFileSync(file, sourceOf(`${suite.name}Coverage`, given));
     });

@@ -1,12 +1,12 @@
-import type { CoveredInterval } from '../../src/stats/coverage/cell.ts';
 import { sampleStandardDeviation } from '../../src/stats/moments/deviation.ts';
 import { arithmeticMean } from '../../src/stats/moments/mean.ts';
 import { historicalTail } from '../../src/stats/tails/historicalTail.ts';
 import { normalTail } from '../../src/stats/tails/normalTail.ts';
 import { studentTail } from '../../src/stats/tails/studentTail.ts';
 import type { TailFigures, TailInput, TailModelName } from '../../src/stats/tails/tailFigures.ts';
-import { type Level, levelFromFraction } from '../../src/terms/level.ts';
+import { type Level, levelFromFraction, levelText } from '../../src/terms/level.ts';
 import { type Result, valueOrNull } from '../../src/terms/result.ts';
+import { remembered } from './remembered.ts';
 import type { Ends, Procedure, Sample } from './simulate.ts';
 import { trueTail } from './tailTruth.ts';
 
@@ -23,58 +23,47 @@ type Model = (input: TailInput) => Result<TailFigures<TailModelName, unknown>>;
 /** The fewest resamples whose outer ranks reach 95%, for figures that no bootstrap touches. */
 const fewest = 39;
 
-const tailProcedure = (
-  name: CoveredInterval,
-  model: Model,
-  figure: 'var' | 'es',
-  text: string,
-  replicatesOf: (sample: Sample) => number,
-): Procedure => {
-  const tailLevel = readLevel(text);
-  return {
-    name,
-    ends: (sample): Ends | null => {
-      const { returns, level: confidence, streams } = sample;
-      const replicates = replicatesOf(sample);
-      const figures = valueOrNull(model({ returns, tailLevel, confidence, streams, replicates }));
-      return figures === null ? null : figure === 'var' ? figures.varInterval : figures.esInterval;
-    },
-    truth: (process) => trueTail(figure, process, tailLevel),
-  };
-};
-
-/** VaR and ES of a model at every tail level; `esReplicates` are the resamples for its ES. */
+/** VaR and ES of a model at every tail level; `replicatesOf` are the resamples for its ES. */
 export const tailProcedures = (
   model: TailModelName,
   of: Model,
-  esReplicates: (sample: Sample) => number,
+  replicatesOf: (sample: Sample) => number,
 ): readonly Procedure[] =>
-  tailLevels.flatMap((text) => [
-    tailProcedure(`tail.${model}.var.${text}`, of, 'var', text, () => fewest),
-    tailProcedure(`tail.${model}.es.${text}`, of, 'es', text, esReplicates),
-  ]);
+  tailLevels.flatMap((text) => {
+    const tailLevel = readLevel(text);
+    const figuresOf = remembered((sample) =>
+      valueOrNull(of({ ...sample, confidence: sample.level, tailLevel, replicates: replicatesOf(sample) })),
+    );
+    return (['var', 'es'] as const).map(
+      (figure): Procedure => ({
+        name: `tail.${model}.${figure}.${text}`,
+        ends: (sample) => figuresOf(sample)?.[`${figure}Interval`] ?? null,
+        truth: (process) => trueTail(figure, process, tailLevel),
+      }),
+    );
+  });
 
 /**
- * Both normal intervals end a fixed number of sample deviations from the mean, fixed by the count of returns alone, so
- * one sample shows the numbers for all: exactly for VaR, and for ES from more resamples than the model makes by itself.
+ * Every normal interval ends a fixed number of sample deviations from the mean, fixed by the count of returns and the level
+ * alone, so one sample shows the numbers for all.
  */
-const normalProcedure = (name: CoveredInterval, figure: 'var' | 'es', text: string): Procedure => {
-  const inDeviations = new Map<number, Ends>();
-  const measured = tailProcedure(name, normalTail, figure, text, () => 9_999);
+const inDeviations = (procedure: Procedure): Procedure => {
+  const known = new Map<string, Ends | null>();
   const deviationsOf = (sample: Sample, mean: number, deviation: number): Ends | null => {
-    const ends = measured.ends(sample);
+    const ends = procedure.ends(sample);
     if (ends === null || ends.lower === null || ends.upper === null) return null;
     return { lower: (ends.lower + mean) / deviation, upper: (ends.upper + mean) / deviation };
   };
   return {
-    ...measured,
+    ...procedure,
     ends: (sample) => {
       const mean = arithmeticMean(sample.returns);
       const deviation = sampleStandardDeviation(sample.returns);
-      const known = inDeviations.get(sample.returns.length) ?? deviationsOf(sample, mean, deviation);
-      if (known === null || known.lower === null || known.upper === null) return null;
-      inDeviations.set(sample.returns.length, known);
-      return { lower: deviation * known.lower - mean, upper: deviation * known.upper - mean };
+      const key = `${sample.returns.length} ${levelText(sample.level)}`;
+      const ends = known.get(key) ?? deviationsOf(sample, mean, deviation);
+      known.set(key, ends);
+      if (ends === null || ends.lower === null || ends.upper === null) return null;
+      return { lower: deviation * ends.lower - mean, upper: deviation * ends.upper - mean };
     },
   };
 };
@@ -89,10 +78,7 @@ export const studentProcedures = tailProcedures(
   (input) => studentTail(input),
   () => fewest,
 );
-export const normalProcedures = tailLevels.flatMap((text) => [
-  normalProcedure(`tail.normal.var.${text}`, 'var', text),
-  normalProcedure(`tail.normal.es.${text}`, 'es', text),
-]);
+export const normalProcedures = tailProcedures('normal', normalTail, () => fewest).map(inDeviations);
 
 /** nu of the two independent processes: infinity for the normal one. */
 export const nuProcedure: Procedure = {

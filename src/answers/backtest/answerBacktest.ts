@@ -157,7 +157,12 @@ export const answerBacktest = (
           'Traffic light: Basel Committee on Banking Supervision (1996)',
           'ES: Acerbi & Szekely (2014), Risk; league: Patton, Ziegel & Chen (2019), Diebold & Mariano (1995)',
         ],
-        working: backtestWorking(outcome.value, question, judged.dayCount),
+        working: backtestWorking(
+          outcome.value,
+          question,
+          judged.dayCount,
+          whole.returns.subarray(from, firstDay + dayCount),
+        ),
       },
     ),
   );

@@ -40,7 +40,10 @@ export const tailTopics: readonly VerbTopic[] = [
       'Makes the tail figure for each past day from the returns before it, and counts the losses beyond it.',
     forms: ['backtest TICKER [window] [at LEVEL] [on window DAYS] [by MODEL] [log]'],
     examples: ['backtest KELP 250d at 99%', 'backtest KELP at 97.5% on window 500d by filtered'],
-    remarks: ['The window holds the days that are judged; on window the returns behind each day’s figure.'],
+    remarks: [
+      'The window holds the days that are judged; on window the returns behind each day’s figure.',
+      'The working says how often such a test rejects by chance alone, as measured in simulations.',
+    ],
   },
   {
     name: 'feed',

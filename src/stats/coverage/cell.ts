@@ -12,11 +12,16 @@ export const coverageProcesses = {
 
 export type CoverageProcess = keyof typeof coverageProcesses;
 
-/** Every interval whose coverage is measured, named figure first. Tail figures carry their tail level: `tail.student.var.0.99`. */
+/**
+ * Every interval whose coverage is measured, named figure first. Tail figures carry their tail level, `tail.student.var.0.99`,
+ * and chances of a loss the true chance at which they were measured, `beyond.student.0.01`.
+ */
 export type CoveredInterval =
   | `mean.${'plain' | 'normal' | 'neweyWest' | 'studentised' | 'stationary' | 'trusted' | 'prediction'}`
   | `deviation.${'chiSquare' | 'bonett' | 'block' | 'trusted'}`
   | 'ratio.noncentralT'
+  | `compare.${'paired' | 'welch'}.${'mean' | 'deviationRatio'}`
+  | `beyond.${TailModelName}.${string}`
   | 'tail.student.nu'
   | `tail.${TailModelName}.${'var' | 'es'}.${string}`;
 
