@@ -9,7 +9,7 @@ import type { Time } from '../workspaces/slack/ports.ts';
 
 /** What it takes to follow what becomes of channels, people and pins. */
 export type TendingParts = {
-  readonly desk: Pick<Desk, 'records' | 'pins' | 'snapshot'>;
+  readonly desk: Pick<Desk, 'records' | 'pins' | 'permissions' | 'snapshot'>;
   readonly store: {
     readonly pins: Pick<PinStore, 'moves' | 'moveChannel'>;
     readonly subscriptions: {

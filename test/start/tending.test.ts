@@ -7,7 +7,7 @@ import { tendEveryMs, tendWorkspace } from '../../src/start/tending.ts';
 import { problem } from '../../src/terms/problem.ts';
 import { refuse, succeed } from '../../src/terms/result.ts';
 import type { NewSubscription } from '../../src/terms/subscriptions.ts';
-import type { PlaceVerdict } from '../../src/workspaces/permissions.ts';
+import { everythingAllowed, type PlaceVerdict } from '../../src/workspaces/permissions.ts';
 import { makePlaces } from '../../src/workspaces/slack/places/places.ts';
 import { seriesOf, wobbling } from '../answers/madeSeries.ts';
 import { cardMade } from '../contracts/pins.contract.ts';
@@ -68,6 +68,7 @@ const setUp = async (fill: (store: Store) => Promise<void> = async () => {}) => 
     desk: {
       records: { store, keeps: true, versions: testVersions, tell: (message) => void told.push(message) },
       snapshot: () => live,
+      permissions: everythingAllowed,
       pins: {
         store: store.pins,
         wall: () => ({
@@ -229,6 +230,7 @@ test('a store in trouble is told to the operator and ends nothing', async () => 
     desk: {
       records: { store: parts, keeps: true, versions: testVersions, tell: () => {} },
       snapshot: () => refuse(problem('feedMissing', 'none')),
+      permissions: everythingAllowed,
       pins: { store: store.pins, wall: () => null },
     },
     store: { pins: parts.pins, subscriptions: store.subscriptions },

@@ -39,18 +39,27 @@ const notesFor = (
   return notes;
 };
 
-type Told = Pick<Desk, 'records' | 'pins'>;
+type Told = Pick<Desk, 'records' | 'pins' | 'permissions'>;
+
+/** Nobody waits for it there: it is posted only where the place may still be posted to. Its owner may have left. */
+const mayPost = async ({ permissions }: Told, { team, channel, person }: PinnedCard): Promise<boolean> => {
+  const verdict = await permissions.placeVerdict(team, channel, person ?? '');
+  return verdict.kind === 'fine' || verdict.why === 'ownerLeft';
+};
 
 const tellThread = async (
-  { records, pins }: Told,
+  desk: Told,
   wall: Wall,
   card: PinnedCard,
   snapshot: PriceSnapshot,
 ): Promise<void> => {
+  const { records, pins } = desk;
   const record = await records.store.find(card.answerId);
   if (!record.ok || record.value === null) return;
+  const notes = notesFor(card, record.value.answer.series, snapshot);
+  if (notes.length === 0 || !(await mayPost(desk, card))) return;
   let told = card;
-  for (const { kind, words } of notesFor(card, record.value.answer.series, snapshot)) {
+  for (const { kind, words } of notes) {
     const thread = card.thread ?? card.cardTs;
     const said = await wall.say(noteKey(card, kind), { ...card, thread }, words);
     if (said.kind === 'said') told = { ...told, [kind === 'moved' ? 'toldMoved' : 'toldRestated']: true };
@@ -79,12 +88,12 @@ export const finishCards = async (desk: Told): Promise<void> => {
   const wall = desk.pins.wall();
   const cards = await desk.pins.store.list(['posting'], mostLookedAt);
   if (wall === null || !cards.ok) return;
-  for (const card of cards.value) await putUp(desk.pins, wall, card);
+  for (const card of cards.value) if (await mayPost(desk, card)) await putUp(desk.pins, wall, card);
 };
 
 /** A person took the pin off: the card gets no notes any more. */
 export const takenOff = async (
-  { records, pins }: Told,
+  { records, pins }: Pick<Told, 'records' | 'pins'>,
   team: string,
   channel: string,
   cardTs: string,

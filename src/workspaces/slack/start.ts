@@ -23,7 +23,7 @@ import { type Feature, featuresOf } from './scopes.ts';
 import { callTimeoutMs, type SlackSettings } from './settings.ts';
 import { makeSlots } from './slots.ts';
 import { atMost } from './wait.ts';
-import { makeWire, type Outcome, type Wire } from './wire.ts';
+import { makeWire, type Outcome, routed, type Wire } from './wire.ts';
 import { makeWork } from './work.ts';
 
 const stopLimitMs = 30_000;
@@ -112,11 +112,12 @@ export const startSlack = async (
     allowAbsoluteUrls: false,
     ...(settings.apiUrl === null ? {} : { slackApiUrl: settings.apiUrl }),
   };
-  const wire = makeWire(new webApi.WebClient(botToken, { ...clientOptions, logger: silentLog }));
-  const identified = await identify(wire);
+  const straight = makeWire(new webApi.WebClient(botToken, { ...clientOptions, logger: silentLog }));
+  const identified = await identify(straight);
   if (!identified.ok) return identified;
 
   const { scopes, team, ...self } = identified.value;
+  const wire = routed(straight, (channel) => places.currentId(team, channel));
   places.connect(lookupsOver(wire), self.userId);
   const features = featuresOf(scopes, log);
   const pace = makePace(time, messagePace);
@@ -129,7 +130,7 @@ export const startSlack = async (
   const showPicture = makeShow(features.has('picture'), wire, time, log);
   const respond = makeRespond(time, log, showPicture);
   const holder = newId();
-  const durable = makeDurable({ store, holder, delivering, respond, work, app: () => app });
+  const durable = makeDurable({ store, holder, delivering, voice, respond, work, app: () => app });
   const { outbox: deliveries, inbox, memory } = durable;
   const reception = receptionOf(receiving, { self, inbox, work, time, log, clientOptions });
   const app: App = new App({

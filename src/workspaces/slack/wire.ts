@@ -63,6 +63,14 @@ export const outcomeOfError = (error: unknown): Outcome => {
   return { kind: 'unsure', reason: inWords(error) };
 };
 
+/** The same wire, along which a channel is found under the id that it has now. */
+export const routed = (wire: Wire, currentId: (channel: string) => string): Wire => ({
+  call: (method, args) => {
+    const { channel } = args;
+    return wire.call(method, typeof channel === 'string' ? { ...args, channel: currentId(channel) } : args);
+  },
+});
+
 export const makeWire = (client: webApi.WebClient): Wire => ({
   call: async (method, args) => {
     try {

@@ -22,6 +22,8 @@ export const createHome =
   (desk: Desk): Home =>
   async (asking, wanted, note) => {
     const asker = readerOf(asking);
+    await desk.permissions.learn(asker);
+    const may = desk.permissions.mayAsk(asker, 'feed');
     const { team, owner } = makerOf(asker);
     const status = desk.feedStatus();
     const live = desk.snapshot();
@@ -37,8 +39,8 @@ export const createHome =
     const readable = (asked.ok ? asked.value : []).filter((line) => desk.permissions.mayRead(asker, line));
     const [ticker = 'KELP'] = live.ok ? live.value.tickers : [];
     return {
-      feed: feedReply(status, desk.timeZone).sentence,
-      stale: stalenessInWords(status.freshness),
+      feed: may.ok ? feedReply(status, desk.timeZone).sentence : may.message,
+      stale: may.ok ? stalenessInWords(status.freshness) : null,
       subscriptions: all.slice(page * subscriptionsPerPage, (page + 1) * subscriptionsPerPage),
       subscriptionCount: all.length,
       page,

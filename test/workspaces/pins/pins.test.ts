@@ -6,6 +6,7 @@ import type { PriceSeries, PriceSnapshot } from '../../../src/terms/prices.ts';
 import { succeed } from '../../../src/terms/result.ts';
 import type { Asking } from '../../../src/workspaces/conversation.ts';
 import { createConverse } from '../../../src/workspaces/converse.ts';
+import { everythingAllowed, type PlaceVerdict } from '../../../src/workspaces/permissions.ts';
 import { cardsAtTerminal, finishCards, takenOff, tellOfChanges } from '../../../src/workspaces/pins/notes.ts';
 import type { PinOutcome, Posted, Wall } from '../../../src/workspaces/pins/ports.ts';
 import { seriesOf, wobbling } from '../../answers/madeSeries.ts';
@@ -243,6 +244,19 @@ describe('the thread of a card', () => {
     await takenOff(desk, 'T1', 'C1', '9.0');
     await tellOfChanges(desk, oneMore);
     expect(cards()).toHaveLength(1);
+  });
+
+  test('is told nothing where others can read along by now, and is told where its owner has left', async () => {
+    const { desk, cards } = await pinned();
+    const under = (verdict: PlaceVerdict) => ({
+      ...desk,
+      permissions: { ...everythingAllowed, placeVerdict: async () => verdict },
+    });
+    await tellOfChanges(under({ kind: 'stopped', why: 'shared' }), oneMore);
+    await tellOfChanges(under({ kind: 'paused', why: 'archived' }), oneMore);
+    expect(cards()).toHaveLength(1);
+    await tellOfChanges(under({ kind: 'paused', why: 'ownerLeft' }), oneMore);
+    expect(cards()).toHaveLength(2);
   });
 
   test('is told later where it could not be told', async () => {

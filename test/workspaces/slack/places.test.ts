@@ -3,7 +3,7 @@ import type { PersonFacts } from '../../../src/workspaces/access/places.ts';
 import { lookupsOver } from '../../../src/workspaces/slack/places/lookups.ts';
 import { newsOf } from '../../../src/workspaces/slack/places/newsOf.ts';
 import { learnLimitMs, makePlaces } from '../../../src/workspaces/slack/places/places.ts';
-import type { Outcome, Wire } from '../../../src/workspaces/slack/wire.ts';
+import { type Outcome, routed, type Wire } from '../../../src/workspaces/slack/wire.ts';
 import { manualTime } from '../../doubles/time.ts';
 
 const bot = 'U0BOT';
@@ -238,4 +238,25 @@ describe('news', () => {
   test('in no known form is no news', () => {
     expect(setUp().hear({ type: 'channel_archive' })).toBe(null);
   });
+});
+
+test('calls about a channel reach it under its new id; others are left as they are', async () => {
+  const { places, hear } = setUp();
+  hear({ type: 'channel_id_changed', old_channel_id: 'C8', new_channel_id: 'C1' });
+  const calls: unknown[] = [];
+  const straight: Wire = {
+    call: async (method, args) => {
+      calls.push([method, args]);
+      return done({});
+    },
+  };
+  const wire = routed(straight, (channel) => places.currentId('T1', channel));
+  await wire.call('chat.postMessage', { channel: 'C8', text: 'one' });
+  await wire.call('pins.add', { channel: 'C7', timestamp: '1.5' });
+  await wire.call('users.info', { user: 'C8' });
+  expect(calls).toEqual([
+    ['chat.postMessage', { channel: 'C1', text: 'one' }],
+    ['pins.add', { channel: 'C7', timestamp: '1.5' }],
+    ['users.info', { user: 'C8' }],
+  ]);
 });
