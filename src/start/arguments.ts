@@ -15,6 +15,9 @@ export type Arguments = {
   readonly csv: boolean;
   /** The file that the picture of the answer is written to. */
   readonly picture: string | null;
+  /** The file that a conversation in the terminal is written to, or typed again from. */
+  readonly record: string | null;
+  readonly replay: string | null;
   readonly words: readonly string[];
 };
 
@@ -35,6 +38,8 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
         since: { type: 'string' },
         csv: { type: 'boolean', default: false },
         picture: { type: 'string' },
+        record: { type: 'string' },
+        replay: { type: 'string' },
       },
     });
     return {
@@ -48,6 +53,8 @@ export const readArguments = (argv: readonly string[]): Arguments | { readonly w
       since: values.since ?? null,
       csv: values.csv ?? false,
       picture: values.picture ?? null,
+      record: values.record ?? null,
+      replay: values.replay ?? null,
       words: positionals,
     };
   } catch (error) {

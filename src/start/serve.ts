@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { readTokens, type WorkspaceToStart } from '../config/tokens.ts';
 import type { LiveFeed } from '../feed/live/liveFeed.ts';
+import { homeReply } from '../present/views/homePage.ts';
 import type { Problem } from '../terms/problem.ts';
 import { problem } from '../terms/problem.ts';
 import { createPermissions } from '../workspaces/access/createPermissions.ts';
@@ -13,8 +14,8 @@ import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
 import type { WhenUnsure } from '../workspaces/slack/settings.ts';
 import { terminalTeam } from '../workspaces/subscriptions/managing.ts';
 import { createSurfaces, type Surfaces } from '../workspaces/surfaces/surfaces.ts';
-import { startTerminal } from '../workspaces/terminal/start.ts';
-import { readArguments } from './arguments.ts';
+import { atTerminal, startTerminal } from '../workspaces/terminal/start.ts';
+import { type Arguments, readArguments } from './arguments.ts';
 import { computeInPool } from './compute/pool.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
@@ -25,13 +26,15 @@ import { machineTime } from './machineTime.ts';
 import { drawInThread } from './pictures/draw.ts';
 import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
 import type { Reopening } from './records/reopening.ts';
+import { sitAt } from './session.ts';
 import { settingsFor } from './settings.ts';
 import { createSubscriptions, type Subscriptions } from './subscriptions/deskSubscriptions.ts';
 import { deliverInTerminal, runSubscriptions } from './subscriptions/running.ts';
 import { thisTerminal } from './terminal.ts';
 import { laterWall } from './wall.ts';
 
-const usage = 'npm start -- [--config FILE] [--feed FILE] [--records FILE] [--workspace auto|slack|terminal]';
+const usage =
+  'npm start -- [--config FILE] [--feed FILE] [--records FILE] [--workspace auto|slack|terminal] [--record FILE] [--replay FILE]';
 
 const refuseWith = (problems: readonly Pick<Problem, 'message'>[]): number => {
   for (const { message } of problems) process.stderr.write(`${message}\n`);
@@ -75,18 +78,32 @@ const tickersOf = (feed: LiveFeed): readonly string[] => {
   return live.ok ? live.value.tickers : [];
 };
 
-const serveTerminal = async ({ converse, subscriptions, permissions, desk }: Serving): Promise<number> => {
-  const terminal = thisTerminal();
-  const running = runSubscriptions(subscriptions, {
-    team: terminalTeam,
-    deliver: deliverInTerminal(terminal),
-    placeState: permissions.placeVerdict,
-    tell: terminal.write,
+/** A sitting at the terminal is told from every other by so many characters. */
+const sittingLength = 8;
+
+const serveTerminal = async (
+  { converse, surfaces, subscriptions, permissions, desk }: Serving,
+  asked: Arguments,
+): Promise<number> => {
+  const here = thisTerminal();
+  const beside = {
+    sitting: randomUUID().slice(0, sittingLength),
+    pinned: () => cardsAtTerminal(desk),
+    home: async (page: number) =>
+      homeReply(await surfaces.home({ place: 'terminal', from: atTerminal }, page - 1, null)),
+  };
+  const code = await sitAt(here, asked, async (terminal) => {
+    const running = runSubscriptions(subscriptions, {
+      team: terminalTeam,
+      deliver: deliverInTerminal(terminal),
+      placeState: permissions.placeVerdict,
+      tell: terminal.write,
+    });
+    await startTerminal(terminal, converse, beside);
+    await running.stop();
   });
-  await startTerminal(terminal, converse, () => cardsAtTerminal(desk));
-  await running.stop();
-  terminal.close();
-  return exitCodes.answered;
+  here.close();
+  return code;
 };
 
 const main = async (): Promise<number> => {
@@ -97,6 +114,10 @@ const main = async (): Promise<number> => {
   const { settings } = reading;
   const workspace = readTokens(process.env, settings);
   if (!workspace.ok) return refuseWith([workspace.problem]);
+  if (workspace.value.kind === 'slack' && (asked.record !== null || asked.replay !== null))
+    return refuseWith([
+      { message: 'Sessions are recorded and replayed in the terminal only. Add --workspace terminal.' },
+    ]);
   const clock = { nowMs: Date.now };
   const log = workspace.value.kind === 'slack' ? operatorLog() : silentLog;
   const feed = await feedLive(settings, clock, (event) =>
@@ -106,7 +127,7 @@ const main = async (): Promise<number> => {
   if (!first.ok) return refuseWith([first.problem]);
   const compute = computeInPool();
   const drawing = drawInThread();
-  const store = recordsToKeep(settings);
+  const store = recordsToKeep(settings, log);
   const stopTidying = keepTidy(store, settings, clock, log.error);
   const records = { store, keeps: true, versions: versionsOf(settings), tell: log.error };
   const places = makePlaces(machineTime, log);
@@ -133,7 +154,7 @@ const main = async (): Promise<number> => {
   try {
     return workspace.value.kind === 'slack'
       ? await serveSlack(workspace.value, serving, log)
-      : await serveTerminal(serving);
+      : await serveTerminal(serving, asked);
   } finally {
     stopTidying();
     feed.close();

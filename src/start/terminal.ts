@@ -38,6 +38,7 @@ export const thisTerminal = (): Terminal & { readonly close: () => void } => {
   return {
     nextLine: interactive ? promptedLines() : pipedLines(),
     write: (text) => process.stdout.write(text),
+    hint: (text) => process.stdout.write(text),
     savePicture: (picture) => savePicture(picture),
     width: () => process.stdout.columns ?? widthWithoutTerminal,
     interactive,

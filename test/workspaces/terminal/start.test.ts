@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { type Reply, reply } from '../../../src/present/reply.ts';
 import { succeed } from '../../../src/terms/result.ts';
-import type { Asking, Converse } from '../../../src/workspaces/converse.ts';
+import type { Asking, Converse, Pressing } from '../../../src/workspaces/converse.ts';
 import { demonstrationQuestions, startTerminal } from '../../../src/workspaces/terminal/start.ts';
 import { emptyPng } from '../../doubles/drawing.ts';
 
@@ -16,6 +16,7 @@ const drawn = {
 /** A conversation that repeats what it is asked, and a terminal that keeps what is written on it. */
 const sitDown = async (typed: readonly string[], interactive = false) => {
   const asked: Asking[] = [];
+  const pressed: Pressing[] = [];
   const answer = (text: string): Reply =>
     reply('answer', `You asked ${text}`, {
       buttons: [{ action: 'working', label: `Working of ${text}`, answerId: 'R-0000000000', question: text }],
@@ -27,7 +28,10 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
       return [{ reply: answer(asking.text), outcome: null, pictures }];
     },
     overhear: async () => [],
-    press: async ({ question }) => [{ reply: reply('working', `Working of ${question}.`), outcome: null }],
+    press: async (pressing) => {
+      pressed.push(pressing);
+      return [{ reply: reply('working', `Working of ${pressing.question}.`), outcome: null }];
+    },
   };
   let screen = '';
   const left = [...typed];
@@ -39,12 +43,21 @@ const sitDown = async (typed: readonly string[], interactive = false) => {
   const write = (text: string) => {
     screen += text;
   };
+  let pictureCount = 0;
+  const savePicture = async () => {
+    pictureCount += 1;
+    return succeed(`pictures/${pictureCount}.png`);
+  };
   const count = await startTerminal(
-    { nextLine, write, width: () => 80, interactive, savePicture: async () => succeed('pictures/one.png') },
+    { nextLine, write, hint: write, width: () => 80, interactive, savePicture },
     converse,
-    async () => reply('record', 'Pinned here: 2.'),
+    {
+      sitting: 's',
+      pinned: async () => reply('record', 'Pinned here: 2.'),
+      home: async (page) => reply('help', `Home, page ${page}.`),
+    },
   );
-  return { asked, screen, count, prompts };
+  return { asked, pressed, screen, count, prompts };
 };
 
 describe('the terminal workspace', () => {
@@ -64,7 +77,7 @@ describe('the terminal workspace', () => {
   test('a picture is written to a file, whose path stands below, with its form in text', async () => {
     const { screen } = await sitDown(['feed KELP as picture']);
     expect(screen).toContain('  ▁▂▃\n');
-    expect(screen).toContain('\n  Picture: pictures/one.png\n');
+    expect(screen).toContain('\n  Picture: pictures/1.png\n');
   });
 
   test('with nothing typed at all it shows three questions with their answers', async () => {
@@ -101,7 +114,43 @@ describe('the terminal workspace', () => {
     expect(screen).toContain('Working of second.');
   });
 
+  test('messages and presses come from the thread that they stand in', async () => {
+    const { asked, pressed } = await sitDown([
+      'first',
+      'thread 1',
+      'second',
+      'top',
+      '#risk',
+      'third',
+      'press 2',
+    ]);
+    expect(asked.map(({ from }) => [from?.channel, from?.message, from?.thread])).toEqual([
+      ['#desk', 's:1', null],
+      ['#desk', 's:2', 's:1'],
+      ['#risk', 's:3', null],
+    ]);
+    expect(pressed).toMatchObject([{ from: { team: null, person: 'you', message: 's:1', thread: 's:1' } }]);
+  });
+
+  test('see says where pictures are, and home shows a page', async () => {
+    const { screen, asked } = await sitDown([
+      'KELP as picture',
+      'TARN as picture',
+      'see 1',
+      'see',
+      'home',
+      'home 3',
+    ]);
+    expect(screen).toMatch(/> see 1\nPicture: pictures\/1\.png\n/);
+    expect(screen).toMatch(/> see\nPicture: pictures\/2\.png\n/);
+    expect(screen).toContain('Home, page 1.');
+    expect(screen).toContain('Home, page 3.');
+    expect(asked).toHaveLength(2);
+  });
+
   test.each([
+    [['see'], 'There is no picture yet. Ask for one'],
+    [['KELP as picture', 'see 2'], 'There is no picture 2: see 1 to 1.'],
     [['press 1'], 'There is no button yet.'],
     [['feed', 'press 7'], 'There is no button 7: press 1 to 1.'],
     [['thread 3'], 'There is no message yet.'],
