@@ -57,9 +57,9 @@ const started = await startSlack(
 );
 if (!started.ok) throw new Error(started.problem.message);
 
-const sayDigest = async ({ key, channel, dueMs }) => {
-  await wait(Math.max(0, dueMs - time.nowMs()));
-  await started.value.deliveries.say({
+/** Every copy is told of every digest that is due, and says it: which of them posts it is theirs to settle. */
+const sayDigest = ({ key, channel }) =>
+  started.value.deliveries.say({
     key,
     team: 'T0DESK',
     channel,
@@ -68,7 +68,8 @@ const sayDigest = async ({ key, channel, dueMs }) => {
     urgent: false,
     expiresAtMs: null,
   });
-};
 
-process.stdout.write('ready\n');
-await Promise.all(plan.digests.map(sayDigest));
+process.on('message', (digests) => {
+  for (const digest of digests) void sayDigest(digest);
+});
+process.send('ready');

@@ -13,6 +13,8 @@ import { fastTime } from './fastTime.mjs';
 const speed = 10;
 const digestCount = 50;
 const channelCount = 20;
+/** Within this much of the machine’s time what belongs to one kill happens. */
+const spanMs = 1_200;
 
 /** Where the bots keep their records, and how to see that nothing is left to be done there. */
 export type Place = {
@@ -77,27 +79,42 @@ const timeFrom = (epochMs: number): ManualTime => ({
 
 const childPath = fileURLToPath(new URL('bot.mjs', import.meta.url));
 
-/** A bot in a process of its own, started anew each time it is killed. */
-const keepCopy = (plan: object) => {
+type Digest = { readonly key: string; readonly channel: string };
+
+/** A bot in a process of its own, started anew each time it is killed, that is told of every digest that is due. */
+const keepCopy = (plan: object, due: readonly Digest[]) => {
   let child: ChildProcess | null = null;
   let ended = false;
+  let ready: Promise<void> = Promise.resolve();
   const complaints: string[] = [];
   const start = (): void => {
     const running = spawn(process.execPath, [childPath], {
       env: { ...process.env, LEADSMAN_KILL_PLAN: JSON.stringify(plan) },
-      stdio: ['ignore', 'ignore', 'pipe'],
+      stdio: ['ignore', 'ignore', 'pipe', 'ipc'],
     });
-    running.stderr.on('data', (data: Buffer) => complaints.push(data.toString()));
+    running.stderr?.on('data', (data: Buffer) => complaints.push(data.toString()));
     running.on('exit', (code) => {
       if (code !== null && code !== 0) complaints.push(`ended with ${code}`);
       if (!ended) start();
+    });
+    ready = new Promise((resolve) => {
+      running.once('message', () => {
+        running.send(due, () => {});
+        resolve();
+      });
     });
     child = running;
   };
   start();
   return {
-    kill: () => child?.kill('SIGKILL'),
-    end: () => {
+    ready: () => ready,
+    tell: (digests: readonly Digest[]): void => {
+      if (child?.connected === true) child.send(digests, () => {});
+    },
+    kill: (): void => {
+      child?.kill('SIGKILL');
+    },
+    end: (): void => {
       ended = true;
       child?.kill('SIGKILL');
     },
@@ -117,23 +134,14 @@ const faultsOf = (random: () => number, count: number): readonly Fault[] =>
     return { kind: 'silent', accepted };
   });
 
-/** Asks questions in the channels at random moments of the time in which digests fall due. */
-const ask = async (
-  platform: Platform,
-  random: () => number,
-  count: number,
-  lastsMs: number,
-): Promise<readonly Said[]> => {
-  const asked: Said[] = [];
-  for (let number = 0; number < count; number += 1) {
-    await pause((lastsMs / count) * (0.5 + random()));
-    // every third answer takes long enough for a placeholder
-    const takesMs = number % 3 === 0 ? 1_600 + Math.floor(random() * 10_000) : 0;
-    const channel = channelOf(Math.floor(random() * channelCount));
-    asked.push(platform.mention({ channel, text: `question ${number} takes ${takesMs}` }));
-  }
-  return asked;
+/** A question in some channel; every third takes long enough for a placeholder. */
+const ask = (platform: Platform, random: () => number, number: number): Said => {
+  const takesMs = number % 3 === 0 ? 1_600 + Math.floor(random() * 10_000) : 0;
+  const channel = channelOf(Math.floor(random() * channelCount));
+  return platform.mention({ channel, text: `question ${number} takes ${takesMs}` });
 };
+
+type Copy = ReturnType<typeof keepCopy>;
 
 const notOnceOf = (names: readonly string[], countOf: (name: string) => number): readonly string[] =>
   names.flatMap((name) => (countOf(name) === 1 ? [] : [`${name}: ${countOf(name)} times`]));
@@ -165,6 +173,25 @@ const acknowledgedOf = (asked: readonly Said[]) => {
   return acknowledged;
 };
 
+/** The share of a whole that falls into one of so many parts. */
+const partOf = <T>(all: readonly T[], part: number, parts: number): readonly T[] =>
+  all.slice(Math.floor((part * all.length) / parts), Math.floor(((part + 1) * all.length) / parts));
+
+/** Between two kills some digests fall due and some questions are asked, all at random moments. */
+const strike = async (copies: readonly Copy[], random: () => number, happenings: readonly (() => void)[]) => {
+  const victim = copies[Math.floor(random() * copies.length)];
+  const killAtMs = random() * spanMs;
+  const moments = happenings.map((happen) => ({ happen, atMs: random() * spanMs }));
+  const all = [...moments, { happen: () => victim?.kill(), atMs: killAtMs }].sort((a, b) => a.atMs - b.atMs);
+  await Promise.all(copies.map((copy) => copy.ready()));
+  let nowMs = 0;
+  for (const { happen, atMs } of all) {
+    await pause(atMs - nowMs);
+    nowMs = atMs;
+    happen();
+  }
+};
+
 /**
  * A morning on which digests fall due and people ask, the bots are killed at random moments and started anew, the platform
  * loses answers and the store is locked. Ends once there is nothing left to be done, or fails to after `withinMs`.
@@ -176,33 +203,40 @@ export const liveThrough = async (
 ): Promise<MorningOutcome & { readonly complaints: readonly string[] }> => {
   const random = seeded(plan.seed);
   const epochMs = Date.now();
-  const time = timeFrom(epochMs);
   const latency = () => pause(random() * 60);
-  const platform = await startPlatform({ time, latency });
+  const platform = await startPlatform({ time: timeFrom(epochMs), latency });
   for (let index = 0; index < channelCount; index += 1)
     platform.workspace.addChannel({ id: channelOf(index) });
   platform.faults.next('chat.postMessage', ...faultsOf(random, plan.faults));
-  // nothing falls due while the first copies are still starting
-  const lastsMs = Math.max(2_000, plan.kills * 1_200);
-  const digests = Array.from({ length: digestCount }, (_, index) => ({
-    key: `digest:T0DESK:D-${index}:${epochMs}`,
-    channel: channelOf(index),
-    dueMs: epochMs + Math.floor(random() * lastsMs * speed),
-  }));
+  const digests = Array.from(
+    { length: digestCount },
+    (_, index): Digest => ({
+      key: `digest:T0DESK:D-${index}:${epochMs}`,
+      channel: channelOf(index),
+    }),
+  );
+  const due: Digest[] = [];
+  const asked: Said[] = [];
   const { path, url } = place;
   const { apiUrl, botToken, appToken } = platform;
-  const told = { epochMs, speed, digests, path, url, apiUrl, botToken, appToken };
-  const copies = Array.from({ length: plan.copies }, () => keepCopy(told));
+  const told = { epochMs, speed, path, url, apiUrl, botToken, appToken };
+  const copies = Array.from({ length: plan.copies }, () => keepCopy(told, due));
+  const fallsDue = (digest: Digest) => (): void => {
+    due.push(digest);
+    for (const copy of copies) copy.tell([digest]);
+  };
   try {
-    await platform.sockets.connected(2 * plan.copies);
-    const asking = ask(platform, random, plan.questions, lastsMs);
-    const locking = lockAtTimes(place, random, plan.locks, lastsMs);
-    for (let killed = 0; killed < plan.kills; killed += 1) {
-      await pause((lastsMs / plan.kills) * (0.5 + random()));
-      copies[Math.floor(random() * copies.length)]?.kill();
+    const numbers = Array.from({ length: plan.questions }, (_, number) => number);
+    for (let part = 0; part < plan.kills; part += 1) {
+      const locked = part < plan.locks ? lockFor(place, random) : Promise.resolve();
+      await strike(copies, random, [
+        ...partOf(digests, part, plan.kills).map(fallsDue),
+        ...partOf(numbers, part, plan.kills).map((number) => () => {
+          asked.push(ask(platform, random, number));
+        }),
+      ]);
+      await locked;
     }
-    const asked = await asking;
-    await locking;
     const acknowledged = acknowledgedOf(asked);
     const untilMs = Date.now() + withinMs;
     const isDone = async () => (await place.unsettled()) === 0 && platform.posts.all.length >= digestCount;
@@ -216,17 +250,10 @@ export const liveThrough = async (
   }
 };
 
-/** The store is locked for ten seconds of the morning’s clock, so many times. */
-const lockAtTimes = async (
-  { lock }: Place,
-  random: () => number,
-  count: number,
-  lastsMs: number,
-): Promise<void> => {
-  for (let number = 0; number < count; number += 1) {
-    await pause((lastsMs / count) * random());
-    const unlock = await lock();
-    await pause(10_000 / speed);
-    await unlock();
-  }
+/** The store is locked for ten seconds of the morning’s clock, from some moment on. */
+const lockFor = async ({ lock }: Place, random: () => number): Promise<void> => {
+  await pause(random() * spanMs);
+  const unlock = await lock();
+  await pause(10_000 / speed);
+  await unlock();
 };

@@ -7,17 +7,27 @@ import { connectPostgres } from '../../records/openPostgres.ts';
 import { connectSqlite } from '../../records/openSqlite.ts';
 import type { Clock } from '../../terms/clock.ts';
 import type { Versions } from '../../terms/records.ts';
-import { type Reopening, reopening } from './reopening.ts';
+import { type Reopening, reopening, type TellTrouble } from './reopening.ts';
 
 const project = fileURLToPath(new URL('../../../', import.meta.url));
 
 export const recordsPath = ({ records }: Settings): string => resolve(project, records.path);
 
+type OperatorLog = Readonly<Record<'info' | 'error', (message: string) => void>>;
+
+const toldTo =
+  ({ info, error }: OperatorLog): TellTrouble =>
+  (trouble) =>
+    trouble === null
+      ? info('the store of records works again')
+      : error(`the store of records fails, and what is asked meanwhile may not be kept: ${trouble.message}`);
+
 /** The records of a desk, made where there are none. */
-export const recordsToKeep = (settings: Settings): Reopening => {
+export const recordsToKeep = (settings: Settings, log?: OperatorLog): Reopening => {
   const { url } = settings.records;
-  return reopening(() =>
-    url === null ? connectSqlite(recordsPath(settings)) : connectPostgres(url.reveal()),
+  return reopening(
+    () => (url === null ? connectSqlite(recordsPath(settings)) : connectPostgres(url.reveal())),
+    log === undefined ? undefined : toldTo(log),
   );
 };
 
@@ -37,22 +47,34 @@ export const versionsOf = (settings: Settings): Versions => {
   };
 };
 
-const dayMs = 86_400_000;
+const hourMs = 3_600_000;
+const dayMs = 24 * hourMs;
+/** An event is sent again for an hour at the most, and a question can be edited to some effect for ten minutes. */
+const inboxLifeMs = dayMs;
+/** What was said can be marked as superseded for so long; then the records of answers are the place for it. */
+const contentLifeMs = hourMs;
+/** For so long no key is used again. */
+const keyLifeMs = 400 * dayMs;
 
-/** Deletes what is older than the settings allow, now and once a day; the result ends it. */
+/** Deletes what is older than the settings allow, and what was dealt with long ago, now and every hour; the result ends it. */
 export const keepTidy = (
   store: Reopening,
   { records: { keepDays } }: Settings,
   clock: Clock,
   tell: (message: string) => void,
 ): (() => void) => {
-  if (keepDays === null) return () => {};
   const tidy = async () => {
-    const forgotten = await store.forgetBefore(clock.nowMs() - keepDays * dayMs);
-    if (!forgotten.ok) tell(`Old records were not deleted: ${forgotten.problem.message}`);
+    const nowMs = clock.nowMs();
+    if (keepDays !== null) {
+      const forgotten = await store.forgetBefore(nowMs - keepDays * dayMs);
+      if (!forgotten.ok) tell(`Old records were not deleted: ${forgotten.problem.message}`);
+    }
+    // what these leave behind they take the next time
+    await store.inbox.tidy(nowMs - inboxLifeMs);
+    await store.deliveries.tidy(nowMs - contentLifeMs, nowMs - keyLifeMs);
   };
   void tidy();
-  const timer = setInterval(() => void tidy(), dayMs);
+  const timer = setInterval(() => void tidy(), hourMs);
   timer.unref();
   return () => clearInterval(timer);
 };

@@ -10,22 +10,32 @@ export type Reopening = Store & {
 
 type Kind = 'read' | 'write';
 
+/** Tells the operator that the store has begun to fail, with the reason, and null once it works again. */
+export type TellTrouble = (trouble: Problem | null) => void;
+
 /** What went wrong last with reading and with writing. A store that was written can be read too. */
-const troubles = () => {
+const troubles = (tell: TellTrouble) => {
   const found: Record<Kind, Problem | null> = { read: null, write: null };
+  const last = () => found.write ?? found.read;
   return {
     note: (kind: Kind, outcome: Result<unknown>): void => {
+      const before = last();
       found[kind] = outcome.ok ? null : outcome.problem;
       if (kind === 'write' && outcome.ok) found.read = null;
+      const after = last();
+      if ((before === null) !== (after === null)) tell(after);
     },
-    last: () => found.write ?? found.read,
+    last,
   };
 };
 
 /** A store that is opened when it is first used, and tried anew at each use for as long as it cannot be opened. */
-export const reopening = (connect: () => Promise<Result<Connection>>): Reopening => {
+export const reopening = (
+  connect: () => Promise<Result<Connection>>,
+  tell: TellTrouble = () => {},
+): Reopening => {
   let opened: Promise<Result<Connection>> | null = null;
-  const trouble = troubles();
+  const trouble = troubles(tell);
 
   const ready = async (): Promise<Result<Connection>> => {
     const trying = opened ?? connect();

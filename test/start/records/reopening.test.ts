@@ -52,6 +52,32 @@ describe('a store that is opened when it is needed', () => {
   });
 });
 
+describe('the operator', () => {
+  test('is told once when the store begins to fail, and once when it works again', async () => {
+    const told: (string | null)[] = [];
+    const store = reopening(openingAfter(2).open, (trouble) => void told.push(trouble?.message ?? null));
+    await store.find('R-A');
+    await store.keep(answerOf('R-A'), askingAt(1));
+    expect(told).toEqual(['The file is locked.']);
+    accepted(await store.keep(answerOf('R-A'), askingAt(1)));
+    accepted(await store.verify());
+    expect(told).toEqual(['The file is locked.', null]);
+    await store.close();
+  });
+
+  test('is not told that it works where it can be read and not written', async () => {
+    const told: (string | null)[] = [];
+    const store = reopening(openingAfter(0).open, (trouble) => void told.push(trouble?.code ?? null));
+    accepted(await store.keep(answerOf('R-A'), askingAt(1)));
+    const other = answerOf('R-A', { content: 'ff'.repeat(32) });
+    await store.keep(other, askingAt(2));
+    accepted(await store.find('R-A'));
+    expect(store.trouble()?.code).toBe('storeUnavailable');
+    expect(told).toEqual(['storeUnavailable']);
+    await store.close();
+  });
+});
+
 describe('old records', () => {
   const dayMs = 86_400_000;
   const settings = (keepDays: number | null) => ({

@@ -33,6 +33,17 @@ describe('pace', () => {
     expect(turns).toEqual(['a', 'b', 'c', 'd']);
   });
 
+  it('serves those first for whom a person waits, whenever they came', async () => {
+    const { pace, turns, ask, advance } = setUp();
+    for (const name of ['a', 'b', 'c', 'd']) ask('one', name);
+    await breathe();
+    void pace.turn('one', true).then(() => turns.push('urgent'));
+    await advance(1_000);
+    expect(turns).toEqual(['a', 'b', 'urgent']);
+    await advance(2_000);
+    expect(turns).toEqual(['a', 'b', 'urgent', 'c', 'd']);
+  });
+
   it('keeps lanes apart', async () => {
     const { turns, ask } = setUp();
     for (const name of ['a', 'b', 'c']) ask('one', name);

@@ -1,6 +1,6 @@
 import type { KeptEvent } from '../../../terms/inbox.ts';
 import type { Posted } from '../answer.ts';
-import type { Asked, AskedQuestions } from '../asked.ts';
+import type { AskedQuestions } from '../asked.ts';
 import { heardIn } from '../heard.ts';
 import { mostReplies, replyKey } from '../keys.ts';
 import type { Self } from '../lookup.ts';
@@ -21,13 +21,22 @@ const postedOf = async ({ deliveries }: DurableStore, event: KeptEvent): Promise
   return [{ ...at, reply: { ...content, kind: 'answer', private: false } }];
 };
 
-const askedIn = (store: DurableStore, self: Self, event: KeptEvent): Asked => {
+const wordsOf = (self: Self, event: KeptEvent): string => {
   // written when the event was kept
   const body: EventBody = JSON.parse(event.body);
-  return {
-    words: heardIn(body.event, body.team_id, self)?.words ?? '',
-    replies: postedOf(store, event),
-  };
+  return heardIn(body.event, body.team_id, self)?.words ?? '';
+};
+
+/** The replies that stand below the latest event that has any: an edit that reads the same gets none. */
+const standingOf = async (
+  store: DurableStore,
+  latestFirst: readonly KeptEvent[],
+): Promise<readonly Posted[]> => {
+  for (const event of latestFirst) {
+    const posted = await postedOf(store, event);
+    if (posted.length > 0) return posted;
+  }
+  return [];
 };
 
 /** What this process remembers, and beyond that what the records hold of a message that another has answered. */
@@ -37,7 +46,9 @@ export const askedOnRecord = (memory: AskedQuestions, store: DurableStore, self:
     const remembered = await memory.recall(messageKey, eventKey);
     if (remembered !== null) return remembered;
     const found = await store.inbox.ofMessage(messageKey);
-    const before = (found.ok ? found.value : []).filter(({ key }) => key !== eventKey).at(-1);
-    return before === undefined ? null : askedIn(store, self, before);
+    const latestFirst = (found.ok ? found.value : []).filter(({ key }) => key !== eventKey).reverse();
+    const [latest] = latestFirst;
+    if (latest === undefined) return null;
+    return { words: wordsOf(self, latest), replies: standingOf(store, latestFirst) };
   },
 });

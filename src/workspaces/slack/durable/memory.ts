@@ -1,14 +1,33 @@
 import type { KeptSaying } from '../../../terms/delivery.ts';
 import { placeholderKey, replyKey } from '../keys.ts';
-import type { EventMemory, Recalled } from '../ports.ts';
+import type { EventMemory, Recalled, Time } from '../ports.ts';
+import { wait } from '../wait.ts';
 import type { DurableInbox } from './inbox.ts';
 import type { Outbox } from './outbox.ts';
 import type { DeliveryStore } from './ports.ts';
 
+const patienceMs = 30_000;
+const storeRetryMs = 1_000;
+
 const firstTime: Recalled = { again: false, standing: null, editing: null };
 
 /** What an earlier try at an answer has left in the workspace, from the records. */
-export const makeMemory = (inbox: DurableInbox, outbox: Outbox, store: DeliveryStore): EventMemory => {
+export const makeMemory = (
+  inbox: Pick<DurableInbox, 'underWay' | 'willEdit'>,
+  outbox: Outbox,
+  store: DeliveryStore,
+  time: Time,
+): EventMemory => {
+  /** Without knowing what stands, the answer could be given twice: a store in trouble is waited for, for a while. */
+  const left = async (keys: readonly string[]): Promise<readonly KeptSaying[]> => {
+    for (const untilMs = time.nowMs() + patienceMs; ; ) {
+      const found = await store.find(keys);
+      if (found.ok) return found.value;
+      if (time.nowMs() >= untilMs) return [];
+      await wait(time, storeRetryMs);
+    }
+  };
+
   /** A placeholder of which it is not known whether it stands is cleared up first. */
   const standingOf = async (placeholder: KeptSaying | undefined) => {
     if (placeholder === undefined) return null;
@@ -20,8 +39,7 @@ export const makeMemory = (inbox: DurableInbox, outbox: Outbox, store: DeliveryS
     recall: async (key) => {
       const event = inbox.underWay(key);
       if (event === null || event.tries <= 1) return firstTime;
-      const found = await store.find([placeholderKey(key), replyKey(key, 0)]);
-      const kept = found.ok ? found.value : [];
+      const kept = await left([placeholderKey(key), replyKey(key, 0)]);
       const standing = await standingOf(kept.find((saying) => saying.key === placeholderKey(key)));
       const replied = kept.some((saying) => saying.key === replyKey(key, 0));
       return { again: true, standing, editing: replied ? null : event.editing };

@@ -43,11 +43,11 @@ export const makeOutbox = (desk: OutboxDesk): Outbox => {
 
   /** Tries until the store does it; null where somebody waits and the store has used up the patience. */
   const insist = async <T>(urgent: boolean, ask: () => Promise<Result<T>>): Promise<T | null> => {
-    const untilMs = time.nowMs() + patienceMs;
     for (;;) {
-      const done = await ask();
+      const done = holding.note(await ask());
       if (done.ok) return done.value;
-      if (urgent && time.nowMs() >= untilMs) return null;
+      const sinceMs = holding.failingSinceMs() ?? time.nowMs();
+      if (urgent && time.nowMs() - sinceMs >= patienceMs) return null;
       await wait(time, storeRetryMs);
     }
   };

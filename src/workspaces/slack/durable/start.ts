@@ -3,6 +3,7 @@ import type { KeptEvent } from '../../../terms/inbox.ts';
 import type { Delivering } from '../deliver.ts';
 import { makeSend } from '../deliver.ts';
 import type { EventMemory } from '../ports.ts';
+import type { Voice } from '../post.ts';
 import type { Respond } from '../respond.ts';
 import type { Work } from '../work.ts';
 import { type DurableInbox, makeInbox } from './inbox.ts';
@@ -15,6 +16,7 @@ export type DurableDesk = {
   readonly store: DurableStore;
   readonly holder: string;
   readonly delivering: Delivering;
+  readonly voice: Pick<Voice, 'remove'>;
   readonly respond: Respond;
   readonly work: Work;
   readonly app: () => App;
@@ -27,7 +29,15 @@ export type Durable = {
 };
 
 /** What arrives and what is said, kept so that neither is lost with the process nor done twice. */
-export const makeDurable = ({ store, holder, delivering, respond, work, app }: DurableDesk): Durable => {
+export const makeDurable = ({
+  store,
+  holder,
+  delivering,
+  voice,
+  respond,
+  work,
+  app,
+}: DurableDesk): Durable => {
   const { time, log, self } = delivering;
   const outbox = makeOutbox({
     store: store.deliveries,
@@ -41,7 +51,9 @@ export const makeDurable = ({ store, holder, delivering, respond, work, app }: D
   const takeUp = async (event: KeptEvent): Promise<void> => {
     const instead = lineInstead(event, time.nowMs());
     if (instead !== null) {
+      const { standing } = await memory.recall(event.key);
       await sayLate({ self, time, deliveries: outbox, respond }, event, instead);
+      if (standing !== null) await voice.remove(standing);
       return;
     }
     // it was acknowledged when it arrived
@@ -49,5 +61,6 @@ export const makeDurable = ({ store, holder, delivering, respond, work, app }: D
   };
 
   const inbox = makeInbox({ store: store.inbox, holder, self, time, log, work, takeUp });
-  return { outbox, inbox, memory: makeMemory(inbox, outbox, store.deliveries) };
+  const memory = makeMemory(inbox, outbox, store.deliveries, time);
+  return { outbox, inbox, memory };
 };
