@@ -32,6 +32,7 @@ import {
   studentTTwoSidedTail,
   studentTUpperTail,
 } from '../../../src/stats/distributions/studentT.ts';
+import { relativeError } from '../../laws/relativeError.ts';
 
 const { NaN: notANumber, POSITIVE_INFINITY: infinity } = Number;
 
@@ -64,6 +65,14 @@ describe('at the ends of the domain', () => {
   it('chi-square', () => {
     expect([chiSquareCdf(0, 3), chiSquareCdf(-1, 3), chiSquareCdf(infinity, 3)]).toEqual([0, 0, 1]);
     expect([chiSquareUpperTail(0, 3), chiSquareUpperTail(infinity, 3)]).toEqual([1, 0]);
+  });
+
+  it('chi-square beyond a tail of almost one is the lower tail that is left', () => {
+    // 1 − 2^-40 is exact; the lower tail of 2^-40 keeps all digits, its complement would keep five of them.
+    for (const df of [1, 9, 200])
+      expect(
+        relativeError(chiSquareUpperQuantile(1 - 2 ** -40, df), chiSquareQuantile(2 ** -40, df)),
+      ).toBeLessThan(1e-12);
   });
 
   it('beta', () => {
@@ -122,6 +131,18 @@ describe('outside the domain every function throws and names itself', () => {
     ['chiSquareUpperTail', () => chiSquareUpperTail(notANumber, 1)],
     ['chiSquareQuantile', () => chiSquareQuantile(0, 1)],
     ['chiSquareUpperQuantile', () => chiSquareUpperQuantile(1, 1)],
+    ['chiSquareQuantile', () => chiSquareQuantile(1, 1)],
+    ['chiSquareUpperQuantile', () => chiSquareUpperQuantile(0, 1)],
+    ['studentTQuantile', () => studentTQuantile(0, 3)],
+    ['noncentralTQuantile', () => noncentralTQuantile(0, 3, 1)],
+    ['noncentralityAt', () => noncentralityAt(1, 1, 3)],
+    ['noncentralTCdf', () => noncentralTCdf(1, 3, infinity)],
+    ['betaCdf', () => betaCdf(-0.1, 1, 1)],
+    ['betaUpperTail', () => betaUpperTail(0.5, 1, 0)],
+    ['betaUpperTail', () => betaUpperTail(0.5, 1, infinity)],
+    ['binomialMass', () => binomialMass(1, -1, 0.5)],
+    ['binomialCdf', () => binomialCdf(1, 2, -0.1)],
+    ['chiSquareCdf', () => chiSquareCdf(1, infinity)],
     ['chiSquareQuantile', () => chiSquareQuantile(0.5, infinity)],
     ['betaCdf', () => betaCdf(1.1, 1, 1)],
     ['betaUpperTail', () => betaUpperTail(0.5, 0, 1)],
