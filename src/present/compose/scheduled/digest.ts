@@ -108,7 +108,7 @@ const tableOf = (post: AnyDigest): Table | null => {
       right(interval),
       right('ES'),
       right(interval),
-      right('VaR moved (half-widths)'),
+      right('moved'),
       right('exceeded'),
     ],
     rows: figures.map(rowOf),
@@ -137,7 +137,7 @@ const aboutFigures = ({ tailLevel, confidenceLevel, model, window }: AnyDigest):
 
 const quietLine = (post: AnyDigest): string => {
   const due = post.dueMs === null ? 'asked for now' : `due ${instantInWords(post.dueMs, post.timeZone)}`;
-  return `${post.id}, ${due}, ${lastDayOf(post)}, ${aboutFigures(post)}`;
+  return `${post.id}, ${due}, ${lastDayOf(post)}, ${aboutFigures(post)}; moved: VaR since the digest before, in brackets in half-widths of its interval`;
 };
 
 /** The post of a digest: old prices, what was left out and flags first, then what stands out, then a line per ticker. */
