@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { confinableVerbs } from '../../src/config/permissionsSchema.ts';
 import { parseSettings } from '../../src/config/read.ts';
@@ -66,6 +67,13 @@ describe('permissions in the settings', () => {
     const problems = problemsOf(written);
     expect(problems).toHaveLength(1);
     expect(problems[0]).toContain(says);
+  });
+
+  test('stand in the README as they can be written', () => {
+    const readme = readFileSync(new URL('../../README.md', import.meta.url), 'utf8');
+    const written = /```yaml\n(permissions:[\s\S]*?)```/.exec(readme)?.[1] ?? 'missing: true';
+    const reading = parseSettings(`feed: { path: prices.csv }\n${written}`, '/desk');
+    expect(reading.ok && reading.settings.permissions.verbs).toEqual({ book: ['C024RISK'] });
   });
 
   test('know every verb of the language', () => {
