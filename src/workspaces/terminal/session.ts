@@ -58,6 +58,10 @@ export type FirstDifference = {
 
 const nothing = '(nothing)';
 
+/** When something was asked is another time each time, and no difference. */
+const withoutInstants = (line: string): string =>
+  line.replace(/\b\d{4}-\d\d-\d\d \d\d:\d\d [A-Z][\w/+-]*/g, '(an instant)');
+
 /** Where what was noted anew first differs from a session; null where it is the same. */
 export const firstDifference = ({ lines }: Session, noted: readonly string[]): FirstDifference | null => {
   const [, ...again] = noted.map((line) => line.trimEnd());
@@ -65,7 +69,7 @@ export const firstDifference = ({ lines }: Session, noted: readonly string[]): F
   for (let index = 0; index < count; index += 1) {
     const before = lines[index];
     const came = again[index];
-    if (before === undefined || came === undefined || before.text !== came)
+    if (before === undefined || came === undefined || withoutInstants(before.text) !== withoutInstants(came))
       return { line: before?.number ?? null, expected: before?.text ?? nothing, came: came ?? nothing };
   }
   return null;

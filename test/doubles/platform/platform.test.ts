@@ -317,3 +317,48 @@ describe('pins and pictures', () => {
     expect(await refusalOf('chat.postMessage', post)).toBe('ok');
   });
 });
+
+describe('forms', () => {
+  const form = (text: string) => ({
+    type: 'modal' as const,
+    callback_id: 'form',
+    title: { type: 'plain_text' as const, text: 'Form' },
+    blocks: [
+      {
+        type: 'input',
+        block_id: 'ticker',
+        label: { type: 'plain_text', text },
+        element: { type: 'external_select', action_id: 'ticker', min_query_length: 1 },
+      },
+    ],
+  });
+
+  it('take an update under their newest hash only', async () => {
+    const { platform, client, refusalOf } = await setUp();
+    platform.shortcut('form');
+    const [trigger_id = ''] = platform.triggers.keys();
+    const opened = await client.views.open({ trigger_id, view: form('one') });
+    const { id: view_id = '', hash = '' } = opened.view ?? {};
+    expect(await refusalOf('views.update', { view_id, hash, view: form('two') })).toBe('ok');
+    expect(await refusalOf('views.update', { view_id, hash, view: form('three') })).toBe('hash_conflict');
+  });
+
+  it('are told what is typed from the least number of letters on', async () => {
+    const { platform, client } = await setUp();
+    platform.shortcut('form');
+    const [trigger_id = ''] = platform.triggers.keys();
+    await client.views.open({ trigger_id, view: form('one') });
+    expect(() => platform.typeAhead('ticker', '')).toThrow('from 1 characters on');
+  });
+
+  it('come with an address to answer at only where the place was chosen', async () => {
+    const { platform, app, client } = await setUp();
+    platform.shortcut('form');
+    const [trigger_id = ''] = platform.triggers.keys();
+    await client.views.open({ trigger_id, view: form('one') });
+    await app.requests.next();
+    platform.submit({ ticker: 'KELP' });
+    const payload = new URLSearchParams((await app.requests.next()).body).get('payload') ?? '';
+    expect(JSON.parse(payload)).toMatchObject({ type: 'view_submission', response_urls: [] });
+  });
+});

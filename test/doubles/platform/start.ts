@@ -112,6 +112,7 @@ export const startPlatform = async (options: PlatformOptions = {}) => {
     sockets,
     workspace: desk.workspace,
     files: desk.files,
+    triggers: desk.triggers,
     apiUrl: `${origin}/api/`,
     botToken: tokens.bot,
     appToken: tokens.app,

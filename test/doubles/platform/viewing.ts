@@ -1,3 +1,5 @@
+import { z } from 'zod';
+import { viewFaults } from '../../../src/present/limits/viewFaults.ts';
 import type { Sent } from './deliveries.ts';
 import type { OpenView } from './desk.ts';
 import type { Stage } from './events.ts';
@@ -45,6 +47,15 @@ const stateOf = ({ type }: Element, value: string) => {
   if (type === 'conversations_select') return { type, selected_conversation: value };
   return { type, selected_option: { text: { type: 'plain_text', text: value }, value } };
 };
+
+const offered = z.object({ options: z.array(z.unknown()) });
+
+/** A list of options has the same limits wherever it comes from. */
+const formWith = (element: object) => ({
+  type: 'modal',
+  title: { type: 'plain_text', text: 'Options' },
+  blocks: [{ type: 'input', label: { type: 'plain_text', text: 'Options' }, element }],
+});
 
 export type Filled = Readonly<Record<string, string>>;
 
@@ -124,7 +135,7 @@ export const makeViewing = ({ desk, responses, deliver }: Stage) => {
       const { blockId, element } = elementIn(shownIn(held), actionId);
       const least = Number(element['min_query_length'] ?? 3);
       if (value.length < least) throw new Error(`the platform asks only from ${least} characters on`);
-      return deliver({
+      const asked = deliver({
         kind: 'interactive',
         payload: {
           ...common,
@@ -137,6 +148,15 @@ export const makeViewing = ({ desk, responses, deliver }: Stage) => {
           value,
         },
       });
+      const checked = asked.acknowledged.then((answer) => {
+        const { options } = offered.parse(typeof answer === 'string' ? JSON.parse(answer) : answer);
+        if (options.length > 0)
+          desk.records.limitFaults.push(
+            ...viewFaults(formWith({ ...element, type: 'static_select', options })),
+          );
+        return answer;
+      });
+      return { ...asked, acknowledged: checked };
     },
 
     /** Sends the form. A place that was chosen comes with a response address, whether or not the bot is there. */

@@ -1,6 +1,8 @@
 /** Every surface and button, with the real chat library, over sockets and over HTTP. */
 import { describe, expect, it } from 'vitest';
+import { openSqlite } from '../../../src/records/openSqlite.ts';
 import { everythingAllowed } from '../../../src/workspaces/permissions.ts';
+import { accepted } from '../../laws/outcomes.ts';
 import { demoConversation } from '../demoDesk.ts';
 import { settled, spoken, startBot } from './bot.ts';
 
@@ -169,6 +171,18 @@ describe.each(modes)('over %s', (mode) => {
       const { platform, log } = await opened();
       expect(platform.calls.all.at(-1)).toMatchObject({ method: 'views.open', outcome: 'ok' });
       expect(log).toEqual([]);
+    });
+
+    it('opens while the store stands still', async () => {
+      const store = accepted(await openSqlite(null));
+      const never = () => new Promise<never>(() => {});
+      const { platform } = await startBot({
+        conversation: await demoConversation(),
+        mode,
+        store: { ...store, inbox: { ...store.inbox, keep: never } },
+      });
+      platform.shortcut('ask_form');
+      expect(await platform.views.next()).toMatchObject({ kind: 'open' });
     });
 
     it('offers tickers of the feed while they are typed, those that begin so first', async () => {

@@ -91,6 +91,14 @@ describe('a session', () => {
     });
   });
 
+  test('is the same at another time of the day', async () => {
+    const file = await record(['2026-12-01 14:58 UTC R-A', '2026-12-01 14:58 Europe/London R-B']);
+    expect(
+      await replay(file.replaceAll('    You asked 2026-12-01 14:58', '    You asked 2026-12-02 09:03')),
+    ).toBe(null);
+    expect(await replay(file.replaceAll('    You asked 2026', '    You asked 202'))).not.toBe(null);
+  });
+
   test('of which less or more is shown says so too', async () => {
     const file = await record(['interval KELP']);
     expect(await replay(`${file}  and more\n`)).toMatchObject({
