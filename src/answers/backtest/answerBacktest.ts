@@ -141,7 +141,7 @@ export const answerBacktest = (
         returnType: question.returnType,
         span,
         meaning: series.meaning,
-        feedWarnings: feedWarnings(series),
+        feedWarnings: feedWarnings(series, used),
         identity,
         policy,
       },

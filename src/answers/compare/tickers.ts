@@ -95,7 +95,7 @@ const enclosingOf = (
       cutToHistory: first.cutToHistory,
     },
     meaning: sharedMeaning(one.meaning, other.meaning),
-    feedWarnings: [...feedWarnings(one), ...feedWarnings(other)],
+    feedWarnings: [...feedWarnings(one, first), ...feedWarnings(other, sample.second)],
     identity,
     policy,
   };

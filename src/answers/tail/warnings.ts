@@ -54,10 +54,12 @@ const clusteringWarning = (models: Figures): readonly Warning[] => {
 /** Without the largest loss the rest must say much the same; else one day speaks for all. */
 const outlierWarning = ({ days }: ReturnSample, input: TailInput): readonly Warning[] => {
   const { returns } = input;
-  const worst = returns.indexOf(Math.min(...returns));
+  const worst = returns.indexOf(returns.reduce((least, value) => Math.min(least, value)));
   const rest = Float64Array.from([...returns.subarray(0, worst), ...returns.subarray(worst + 1)]);
-  const whole = historicalTail(input);
-  const without = historicalTail({ ...input, returns: rest });
+  // The figures alone are compared, so no resample is made for their intervals.
+  const plain = { ...input, replicates: 0 };
+  const whole = historicalTail(plain);
+  const without = historicalTail({ ...plain, returns: rest });
   if (!whole.ok || !without.ok || whole.value.es === null || without.value.es === null) return [];
   const change = Math.abs(whole.value.es - without.value.es);
   if (change <= carriedShare * Math.abs(whole.value.es)) return [];
