@@ -35,6 +35,19 @@ export const change = async (
   return null;
 };
 
+/**
+ * Ends a claim: for good where what was done is noted, else so that it is taken up again; what was said then is said
+ * under the same key, and so not twice.
+ */
+export const finish = async (
+  { store, clock, holder, tell }: Pick<RunParts, 'store' | 'clock' | 'holder' | 'tell'>,
+  key: string,
+  noted: Subscription | null,
+): Promise<void> => {
+  const ended = noted === null ? await store.release(key, holder) : await store.settle(key, clock.nowMs());
+  if (!ended.ok) tell(`${key} was done but not noted: ${ended.problem.message}`);
+};
+
 /** Whether the clock brings anything: not where a person paused or stopped it. */
 const isPlanned = ({ state, pausedWhy }: Subscription): boolean =>
   state === 'active' || (state === 'paused' && pausedWhy === 'place');

@@ -7,7 +7,7 @@ import { readDigestMemory } from '../memory.ts';
 import type { Calendar } from '../ports.ts';
 import { makeDigest, varsOf } from '../post/makeDigest.ts';
 import { oldPricesOf } from '../post/oldPrices.ts';
-import { change, planned, settledUpTo } from './changing.ts';
+import { change, finish, planned, settledUpTo } from './changing.ts';
 import { leaseMs, type RunParts } from './parts.ts';
 import { holdBack, refusedBecause, takenUp } from './places.ts';
 
@@ -23,15 +23,6 @@ export type Due = {
 
 export const keyOf = ({ team, id }: Pick<Subscription, 'team' | 'id'>, dueMs: InstantMs): string =>
   `digest:${team}:${id}:${dueMs}`;
-
-const settle = async (
-  { store, clock, tell }: RunParts,
-  subscription: Subscription,
-  dueMs: InstantMs,
-): Promise<void> => {
-  const settled = await store.settle(keyOf(subscription, dueMs), clock.nowMs());
-  if (!settled.ok) tell(`${subscription.id} was posted but not noted: ${settled.problem.message}`);
-};
 
 /** Notes that it was posted: what it said for the next one, and whether it still waits for prices. */
 const notePosted = (
@@ -81,13 +72,12 @@ const say = async (parts: RunParts, due: Due, post: DigestPost): Promise<void> =
       expiresAtMs: null,
       post: { ...post, kind: 'detail' },
     });
-    await notePosted(parts, due, post, outcome.ts);
+    await finish(parts, key, await notePosted(parts, due, post, outcome.ts));
   } else {
     const verdict = outcome.kind === 'refused' ? refusedBecause(outcome.code) : null;
     if (verdict !== null && verdict.kind !== 'fine') await holdBack(parts, subscription, verdict, dueMs);
-    await noteLeftOut(parts, due);
+    await finish(parts, key, await noteLeftOut(parts, due));
   }
-  await settle(parts, subscription, dueMs);
 };
 
 /** Posts a digest that is due, unless its prices are still waited for or another copy has it. */

@@ -3,7 +3,7 @@ import { readDigestBody } from '../body.ts';
 import { readDigestMemory } from '../memory.ts';
 import { makeDigest, varsOf } from '../post/makeDigest.ts';
 import { oldPricesOf } from '../post/oldPrices.ts';
-import { change } from './changing.ts';
+import { change, finish } from './changing.ts';
 import { leaseMs, type RunParts } from './parts.ts';
 import { keyOf } from './runDigest.ts';
 
@@ -41,7 +41,7 @@ export const runFresh = async (parts: RunParts, subscription: Subscription): Pro
     expiresAtMs: awaitingUntilMs,
     post: { ...post, kind: 'fresh' },
   });
-  await change(parts, subscription, (current) => {
+  const noted = await change(parts, subscription, (current) => {
     const now = readDigestMemory(current.memory);
     // a later digest may wait by now
     if (now.awaiting?.dueMs !== awaiting.dueMs) return current;
@@ -51,5 +51,5 @@ export const runFresh = async (parts: RunParts, subscription: Subscription): Pro
       memory: JSON.stringify({ ...now, vars: varsOf(post.lines, now.vars), awaiting: null }),
     };
   });
-  await parts.store.settle(key, parts.clock.nowMs());
+  await finish(parts, key, noted);
 };

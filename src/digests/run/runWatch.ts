@@ -9,7 +9,7 @@ import type { PricesNow } from '../ports.ts';
 import { oldPricesOf } from '../post/oldPrices.ts';
 import { figureOf, watchStep } from '../watch/checkWatch.ts';
 import { pastOf } from '../watch/past.ts';
-import { change } from './changing.ts';
+import { change, finish } from './changing.ts';
 import { leaseMs, type RunParts } from './parts.ts';
 import { holdBack, refusedBecause, takenUp } from './places.ts';
 
@@ -24,7 +24,7 @@ type Watching = {
   readonly prices: PricesNow;
 };
 
-const remember = ({ parts, subscription }: Watching, memory: WatchMemory): Promise<unknown> =>
+const remember = ({ parts, subscription }: Watching, memory: WatchMemory): Promise<Subscription | null> =>
   change(parts, subscription, (current) => ({ ...takenUp(current), memory: JSON.stringify(memory) }));
 
 const namesOf = ({ tail: { ticker, tailLevel, confidence, model } }: WatchBody) => ({
@@ -107,12 +107,12 @@ const lookAt = async (watching: Watching, series: PriceSeries, lastDay: number, 
     await parts.store.release(key, parts.holder);
     return;
   }
-  await remember(watching, {
+  const noted = await remember(watching, {
     ...step.memory,
     past: pastOf(series, lastDay),
     restated: event === null && restated,
   });
-  await parts.store.settle(key, parts.clock.nowMs());
+  await finish(parts, key, noted);
 };
 
 /** Looks at one watch: once for each new last day of its prices. A past that was restated sets nothing off. */

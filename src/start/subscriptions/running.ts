@@ -22,7 +22,8 @@ export const deliverInTerminal = (terminal: Terminal): Deliver => {
   return async ({ post, channel, threadTs }) => {
     count += 1;
     const where = threadTs === null ? '' : ', in the thread';
-    const text = toText(scheduledReply(post), { width: terminal.width() - 2 });
+    // what is not asked for has no place among the buttons that a person presses by their number
+    const text = toText({ ...scheduledReply(post), buttons: [] }, { width: terminal.width() - 2 });
     const indented = text.replace(/^(?=.)/gm, '  ');
     terminal.write(`\n  posted in ${channel}${where}\n${indented}\n\n`);
     return { kind: 'said', ts: String(count) };

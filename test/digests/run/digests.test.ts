@@ -277,3 +277,17 @@ test('a store in trouble is told of, and what is due is posted when it works aga
   await runner.idle();
   expect(heard(stage)).toHaveLength(2);
 });
+
+test('what was posted but could not be noted is noted later, and not posted again', async () => {
+  const stage = stageAt('2026-12-01T08:00Z');
+  await stage.make('digest KELP 08:30');
+  const { store } = stage.parts;
+  const works = store.save;
+  Object.assign(store, { save: async () => refuse(problem('storeUnavailable', 'disk is full')) });
+  await stage.at('2026-12-01T08:30Z');
+  expect(stage.told).toEqual(['D-1 could not be noted: disk is full']);
+  Object.assign(store, { save: works });
+  await stage.at('2026-12-01T08:31Z');
+  expect(heard(stage)).toHaveLength(2);
+  expect(shown((await stage.find('D-1')).nextDueMs)).toBe('2026-12-02T08:30Z');
+});

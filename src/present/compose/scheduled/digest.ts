@@ -13,6 +13,7 @@ import { counted, instantInWords, listed, weekdayAndDay } from '../../../wording
 import { type Passage, type Reply, reply, type Table } from '../../reply.ts';
 import { fullCaution } from '../help.ts';
 import { written } from '../tail.ts';
+import { pauseButton } from './pauseButton.ts';
 
 type AnyDigest = DigestPost | DigestDetail | FreshPost;
 
@@ -151,6 +152,7 @@ export const digestReply = (post: DigestPost): Reply =>
       passages: [...passage('Flags', post.flags), ...refusedPassage(post)],
       quietLine: quietLine(post),
       caution: fullCaution,
+      buttons: [pauseButton(post.id, 'Pause this digest')],
       whole: 'the thread',
     },
   );
@@ -189,5 +191,5 @@ export const digestDetailReply = (post: DigestDetail): Reply =>
 export const digestNowReply = (post: DigestPost): Reply => {
   const now = digestReply(post);
   const { passages } = digestDetailReply({ ...post, kind: 'detail' });
-  return { ...now, passages: [...now.passages, ...passages], whole: 'records' };
+  return { ...now, passages: [...now.passages, ...passages], buttons: [], whole: 'records' };
 };

@@ -4,6 +4,7 @@ import { levelInWords, percent, typedPercent } from '../../../wording/percent.ts
 import { possessive } from '../../../wording/words.ts';
 import { caution, type Reply, reply } from '../../reply.ts';
 import { written } from '../tail.ts';
+import { pauseButton } from './pauseButton.ts';
 
 /** What is needed to say what a watch sees. */
 export type Watching = Pick<WatchPost, 'ticker' | 'tailLevel' | 'confidenceLevel' | 'model'>;
@@ -51,6 +52,7 @@ export const watchReply = (post: WatchPost): Reply => {
     warnings: post.restated ? [restatedWarning] : [],
     quietLine: `${post.id}, ${post.question}${data}`,
     caution,
+    buttons: [pauseButton(post.id, 'Pause this watch')],
   });
 };
 
