@@ -20,6 +20,19 @@ const withoutCounting = (text) =>
     )
     .replace('stryMutAct_9fa48 = isActive;', '');
 
+/** Counting by number into an array, in place of the header's counting by name into one object per test. */
+const countingFast = (text) =>
+  text
+    .replace(
+      'function stryCov_9fa48() {',
+      `function stryCov_9fa48() {
+         const { counts } = globalThis.__stryker__;
+         for (let place = 0; place < arguments.length; place += 1) counts[arguments[place]] += 1;
+         return;`,
+    )
+    .replace('stryCov_9fa48 = cover;', '')
+    .replace(/stryCov_9fa48\(("[^)]*)\)/g, (call) => call.replaceAll('"', ''));
+
 /**
  * The tests and the sources of the working directory, loaded into this process. `load` evaluates every module anew,
  * `originals` in place of the mutated files but for the one named; without a name all are mutated and count.
@@ -32,8 +45,9 @@ export const openEnvironment = async (testFiles) => {
     name: 'one-mutated-file',
     enforce: 'pre',
     transform: (text, id) => {
-      const original = mutated === null ? undefined : originals[id];
+      const original = originals[id];
       if (original === undefined) return null;
+      if (mutated === null) return countingFast(text);
       return id === mutated ? withoutCounting(text) : original;
     },
   };

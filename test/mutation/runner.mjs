@@ -42,6 +42,9 @@ const isDrawn = ({ fileName, location, mutatorName, replacement }) => {
 const leastHitLimit = 1_000;
 const hitFactor = 100;
 
+/** More than all of the core has. */
+const mostMutants = 50_000;
+
 const goneTest = () => {
   throw new Error('the test is no longer declared');
 };
@@ -101,16 +104,25 @@ class InProcessRunner {
     await this.load();
   }
 
+  /** Which mutants were passed since the last look, and how often. */
+  takeCounts() {
+    const { counts } = instrumented();
+    const passed = {};
+    counts.forEach((count, mutant) => {
+      if (count > 0) passed[mutant] = count;
+    });
+    counts.fill(0);
+    return passed;
+  }
+
   async runAll(ids) {
-    const stryker = instrumented();
     const results = [];
     for (const id of ids) {
       const { name, body } = this.tests.get(id);
-      stryker.currentTestId = id;
       const start = process.cpuUsage();
       const failureMessage = await failureOf(body);
       const { user, system } = process.cpuUsage(start);
-      stryker.currentTestId = undefined;
+      this.learned.coverage[id] = this.takeCounts();
       const status = failureMessage === null ? TestStatus.Success : TestStatus.Failed;
       const timeSpentMs = (user + system) / 1000;
       results.push({ id, name, timeSpentMs, status, failureMessage: failureMessage ?? '' });
@@ -123,7 +135,7 @@ class InProcessRunner {
    * that are cheap enough with all files mutated, which counts who passes which mutant.
    */
   async dryRun({ testFiles, files }) {
-    const stryker = instrumented();
+    instrumented().counts = new Float64Array(mostMutants);
     this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
     this.learned.originals = originalsOf(files ?? []);
     this.environment = await openEnvironment(this.learned.testFiles);
@@ -132,15 +144,16 @@ class InProcessRunner {
     const cheap = timed.filter(({ timeSpentMs }) => timeSpentMs <= dearestTest);
     for (const { id, timeSpentMs } of cheap) this.learned.durations[id] = timeSpentMs;
     await this.turnTo(null);
+    const whileLoading = this.takeCounts();
     const counted = await this.runAll(cheap.map(({ id }) => id));
-    const { mutantCoverage } = stryker;
-    this.learned.coverage = mutantCoverage?.perTest ?? {};
+    const mutantCoverage = { static: whileLoading, perTest: this.learned.coverage };
     writeFileSync(learnedFile, JSON.stringify(this.learned));
     const failed = counted.some(({ status }) => status === TestStatus.Failed);
     return { status: DryRunStatus.Complete, tests: failed ? counted : timed, mutantCoverage };
   }
 
   async resume() {
+    instrumented();
     this.learned = JSON.parse(readFileSync(learnedFile, 'utf8'));
     this.environment = await openEnvironment(this.learned.testFiles);
   }
