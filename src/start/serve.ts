@@ -10,7 +10,8 @@ import type { Desk } from '../workspaces/desk.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import { cardsAtTerminal } from '../workspaces/pins/notes.ts';
 import type { Wall } from '../workspaces/pins/ports.ts';
-import { makePlaces, type Places } from '../workspaces/slack/places/places.ts';
+import type { Places } from '../workspaces/slack/places/known.ts';
+import { makePlaces } from '../workspaces/slack/places/places.ts';
 import type { WhenUnsure } from '../workspaces/slack/settings.ts';
 import { terminalTeam } from '../workspaces/subscriptions/managing.ts';
 import { createSurfaces, type Surfaces } from '../workspaces/surfaces/surfaces.ts';
@@ -28,6 +29,7 @@ import { keepTidy, recordsToKeep, versionsOf } from './records/records.ts';
 import type { Reopening } from './records/reopening.ts';
 import { sitAt } from './session.ts';
 import { settingsFor } from './settings.ts';
+import { stateOf } from './storeState.ts';
 import { createSubscriptions, type Subscriptions } from './subscriptions/deskSubscriptions.ts';
 import { deliverInTerminal, runSubscriptions } from './subscriptions/running.ts';
 import { thisTerminal } from './terminal.ts';
@@ -52,12 +54,6 @@ type Serving = {
   readonly subscriptions: Subscriptions;
   readonly desk: Desk;
   readonly standWall: (wall: Wall) => void;
-};
-
-/** A store in trouble stops no answer, so the bot runs; whoever looks after it reads what is wrong. */
-const stateOf = (records: Reopening): string => {
-  const trouble = records.trouble();
-  return trouble === null ? 'running' : `running, but answers are not kept: ${trouble.message}`;
 };
 
 const serveSlack = async (

@@ -6,7 +6,7 @@ import type { News } from '../workspaces/news.ts';
 import type { Permissions } from '../workspaces/permissions.ts';
 import type { Wall } from '../workspaces/pins/ports.ts';
 import type { DurableStore } from '../workspaces/slack/durable/ports.ts';
-import type { Places } from '../workspaces/slack/places/places.ts';
+import type { Places } from '../workspaces/slack/places/known.ts';
 import type { Logger } from '../workspaces/slack/ports.ts';
 import { seenInMemory } from '../workspaces/slack/seen.ts';
 import type { SlackSettings, WhenUnsure } from '../workspaces/slack/settings.ts';

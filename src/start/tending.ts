@@ -4,7 +4,7 @@ import type { Result } from '../terms/result.ts';
 import type { Desk } from '../workspaces/desk.ts';
 import type { News } from '../workspaces/news.ts';
 import { finishCards, takenOff, tellOfChanges } from '../workspaces/pins/notes.ts';
-import type { Places } from '../workspaces/slack/places/places.ts';
+import type { Places } from '../workspaces/slack/places/known.ts';
 import type { Time } from '../workspaces/slack/ports.ts';
 
 /** What it takes to follow what becomes of channels, people and pins. */

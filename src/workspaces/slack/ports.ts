@@ -5,7 +5,7 @@ import type { AskedFrom } from '../../terms/records.ts';
 import type { News } from '../news.ts';
 import type { AskForm } from '../surfaces/askForm.ts';
 import type { DurableStore } from './durable/ports.ts';
-import type { Places } from './places/places.ts';
+import type { Places } from './places/known.ts';
 
 /** Where a question was asked. */
 export type AskedWhere = 'channel' | 'direct' | 'command' | 'terminal';

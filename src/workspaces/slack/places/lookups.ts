@@ -1,15 +1,7 @@
 import { z } from 'zod';
 import type { ChannelFacts, PersonFacts } from '../../access/places.ts';
 import type { Outcome, Wire } from '../wire.ts';
-
-/** What the platform says; null where it does not say it now. */
-export type Lookups = {
-  readonly channel: (channel: string) => Promise<Omit<ChannelFacts, 'guests'> | null>;
-  readonly members: (channel: string) => Promise<readonly string[] | null>;
-  readonly person: (team: string, person: string) => Promise<PersonFacts | null>;
-  /** Everybody of the workspace. */
-  readonly everybody: (team: string) => Promise<ReadonlyMap<string, PersonFacts> | null>;
-};
+import type { Lookups } from './known.ts';
 
 const channelShape = z.object({
   channel: z.object({

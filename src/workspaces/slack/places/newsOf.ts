@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { News } from '../../news.ts';
+import type { Places } from './known.ts';
 import { personFacts, personShape } from './lookups.ts';
-import type { Places } from './places.ts';
 
 export const channelEvents = [
   'channel_archive',

@@ -1,6 +1,6 @@
 import type { PersonFacts } from '../../access/places.ts';
 import type { Time } from '../ports.ts';
-import type { Lookups } from './lookups.ts';
+import type { Lookups } from './known.ts';
 import { remembered } from './remembered.ts';
 
 const hourMs = 3_600_000;

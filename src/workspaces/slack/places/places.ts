@@ -1,9 +1,9 @@
-import type { ChannelFacts, KnownPlaces, PersonFacts } from '../../access/places.ts';
+import type { ChannelFacts } from '../../access/places.ts';
 import { inWords } from '../log.ts';
 import type { Logger, Time } from '../ports.ts';
 import { atMost } from '../wait.ts';
 import { idChanges } from './idChanges.ts';
-import type { Lookups } from './lookups.ts';
+import type { Lookups, Places } from './known.ts';
 import { makePeople } from './people.ts';
 import { remembered } from './remembered.ts';
 
@@ -17,15 +17,6 @@ export const learnLimitMs = 3_000;
 type Known = {
   readonly facts: Omit<ChannelFacts, 'guests'>;
   readonly members: readonly string[] | null;
-};
-
-export type Places = KnownPlaces & {
-  /** From now on there is somebody to ask. */
-  readonly connect: (lookups: Lookups, botUserId: string) => void;
-  /** It has changed: it is looked up before it is relied on again. */
-  readonly forgetChannel: (team: string, channel: string) => void;
-  readonly changePerson: (team: string, person: string, facts: PersonFacts) => void;
-  readonly moved: (team: string, from: string, to: string) => void;
 };
 
 /** What is known of the workspace’s channels and people, kept in memory. */
