@@ -34,13 +34,13 @@ const refuseWith = (found: readonly Problem[], json: boolean): number => {
 const withWish = (question: string, { picture }: Arguments): string =>
   picture === null || /\bas picture\b/i.test(question) ? question : `${question} as picture`;
 
-/** Writes the pictures, the first to the file that was named; where they are is no part of the answer. */
-const save = async (spoken: readonly Spoken[], { picture }: Arguments): Promise<Problem | null> => {
+/** Writes the pictures, the first to the file that was named, and says where they are; a document of JSON is left alone. */
+const save = async (spoken: readonly Spoken[], { picture, json }: Arguments): Promise<Problem | null> => {
   const pictures = spoken.flatMap(({ pictures: some = [] }) => some);
   for (const [place, each] of pictures.entries()) {
     const saved = await savePicture(each, place === 0 ? picture : null);
     if (!saved.ok) return saved.problem;
-    process.stderr.write(`Picture: ${saved.value}\n`);
+    if (!json) print(`\nPicture: ${saved.value}`);
   }
   return null;
 };

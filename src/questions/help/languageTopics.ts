@@ -58,6 +58,23 @@ export const languageTopics: readonly HelpTopic[] = [
     remarks: ['Without a currency the ticker’s own is meant.'],
   },
   {
+    name: 'pictures',
+    words: ['picture', 'chart', 'charts', 'graph', 'plot'],
+    title: 'pictures: as picture after a question',
+    sentence:
+      'The answer comes as always, with a picture below it; the button Picture draws that of an answer that stands already.',
+    forms: [
+      'interval, claim, compare: intervals as bars, with zero and what is claimed marked',
+      'tail: the returns with both fits, the loss side magnified, VaR and ES of each model with their intervals',
+      'shape: each return against the one expected by the bell curve and by the fitted t',
+      'need: the width of the interval against the number of days',
+      'backtest: the returns against the figure of each day, and the count of exceedances against its band',
+      'feed: which days have prices, and where they lack',
+    ],
+    examples: ['interval KELP 60d as picture', 'tail KELP at 99% as picture', 'feed as picture'],
+    remarks: ['What is to be seen is also said in words, for whoever cannot see it.'],
+  },
+  {
     name: 'typing',
     words: ['words', 'grammar', 'language'],
     title: 'typing: what else there is to know',

@@ -1,4 +1,4 @@
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, test } from 'vitest';
@@ -48,6 +48,25 @@ describe('one question from the command line', () => {
         ),
       ),
     );
+  });
+
+  test('a picture is written where it was asked for, and that is said', async () => {
+    const file = join(folder, 'pictures', 'one.png');
+    const { code, stdout } = await run('ask', ['--picture', file, 'interval KELP 60d']);
+    expect(code).toBe(0);
+    expect(stdout).toContain(`Picture: ${file}`);
+    expect([...readFileSync(file).subarray(1, 4)]).toEqual([...Buffer.from('PNG')]);
+  });
+
+  test('a picture that cannot be written is refused, with the answer given', async () => {
+    const { code, stdout, stderr } = await run('ask', [
+      '--picture',
+      join(feed, 'one.png'),
+      'interval KELP 60d',
+    ]);
+    expect(code).toBe(2);
+    expect(stdout).toMatch(/^KELP’s mean daily return/);
+    expect(stderr).toMatch(/^The picture cannot be written to /);
   });
 
   test('the same question gives the same bytes', async () => {

@@ -90,7 +90,7 @@ describe('what is said to who cannot see it', () => {
 
   test('a digest says who exceeded, and who has no figure', () => {
     const { altText } = sheetOf(madeDigest(['KELP', 'TARN', 'BRINE', 'DULSE']));
-    expect(altText).toMatch(/TARN VaR 2\.20%, last return [+−][\d.]+%, which exceeded/);
+    expect(altText).toMatch(/TARN VaR 2\.20%, 1\.98 to 2\.86, last return [+−][\d.]+%, which exceeded/);
     expect(altText).toContain('Without a figure: DULSE.');
   });
 });

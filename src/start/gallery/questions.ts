@@ -1,0 +1,21 @@
+/** What the gallery shows: each verb, each picture, a refusal and help. */
+export const galleryQuestions: readonly string[] = [
+  'interval KELP 60d as picture',
+  'interval LIMPET 250d robust as picture',
+  'interval vol KELP 3m as picture',
+  'interval ratio KELP 1y as picture',
+  'claim KELP 20bp 60d as picture',
+  'need KELP 5bp at 95% as picture',
+  'compare KELP TARN BRINE 60d as picture',
+  'compare KELP before 2026-05-04 as picture',
+  'tail KELP at 99% on 2m USD as picture',
+  'tail KELP over 10d by historical as picture',
+  'tail KELP beyond 2.5% as picture',
+  'shape KELP 2y as picture',
+  'backtest KELP 250d at 97.5% as picture',
+  'feed as picture',
+  'feed KELP as picture',
+  'records',
+  'help',
+  'interval KEPL 60d',
+];
