@@ -1,7 +1,7 @@
 import { closeSync, mkdirSync, openSync, renameSync } from 'node:fs';
 import { dirname } from 'node:path';
 import Database from 'better-sqlite3';
-import { Kysely, SqliteDialect } from 'kysely';
+import { type Driver, Kysely, SqliteDialect } from 'kysely';
 import { type Result, refuse, succeed } from '../terms/result.ts';
 import { type Connection, storeProblem } from './connection.ts';
 import type { Tables } from './database.ts';
@@ -26,6 +26,25 @@ const prepare = (database: Database.Database): void => {
   database.pragma('foreign_keys = ON');
 };
 
+/** A full disk ends a transaction by itself, and to end it again would fail and hide the reason. */
+class Dialect extends SqliteDialect {
+  readonly #database: Database.Database;
+
+  constructor(database: Database.Database) {
+    super({ database });
+    this.#database = database;
+  }
+
+  override createDriver(): Driver {
+    const driver = super.createDriver();
+    const rollBack = driver.rollbackTransaction.bind(driver);
+    driver.rollbackTransaction = async (connection) => {
+      if (this.#database.inTransaction) await rollBack(connection);
+    };
+    return driver;
+  }
+}
+
 /** The copy takes its name once it is whole, so that a copy cut short never replaces the one before. */
 const copyTo = async (database: Database.Database, path: string): Promise<void> => {
   const unfinished = `${path}.new`;
@@ -42,7 +61,7 @@ export const connectSqlite = async (path: string | null): Promise<Result<Connect
     const opened = new Database(path ?? inMemory, { timeout: lockWaitMs });
     database = opened;
     prepare(opened);
-    const db = new Kysely<Tables>({ dialect: new SqliteDialect({ database: opened }) });
+    const db = new Kysely<Tables>({ dialect: new Dialect(opened) });
     await migrate(db, { bytes: 'blob' });
     return succeed({ db, copyTo: (to) => copyTo(opened, to), close: () => db.destroy() });
   } catch (error) {
