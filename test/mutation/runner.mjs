@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { readFileSync, writeFileSync } from 'node:fs';
 import { relative } from 'node:path';
 import { declareFactoryPlugin, PluginKind } from '@stryker-mutator/api/plugin';
@@ -8,6 +7,7 @@ import {
   MutantRunStatus,
   TestStatus,
 } from '@stryker-mutator/api/test-runner';
+import { isDrawn } from './drawn.mjs';
 import { openEnvironment } from './environment.mjs';
 
 /**
@@ -25,18 +25,8 @@ const millisecondsPerMutant = Number(process.env.MUTATION_BUDGET_MS ?? 2000);
 /** Tests above this are left out: what only they would notice counts as survived. */
 const dearestTest = Number(process.env.MUTATION_TEST_MS ?? 400);
 
-/**
- * A share of the mutants to try, for a machine that has no time for all. Which ones follows from their place and
- * text alone, so a greater share holds the smaller one; the others are reported as errors, which no score counts.
- */
-const share = Number(process.env.MUTATION_SHARE ?? 1);
-export const notDrawn = 'not drawn';
-
-const isDrawn = ({ fileName, location, mutatorName, replacement }) => {
-  const place = [fileName.replace(/^.*(?=src\/stats)/, ''), location.start.line, location.start.column];
-  const text = [...place, location.end.line, location.end.column, mutatorName, replacement].join('|');
-  return createHash('sha256').update(text).digest().readUInt32BE() < share * 2 ** 32;
-};
+/** Reported as an error, which no score counts. */
+const notDrawn = 'not drawn';
 
 /** Without mutants each test passes a mutated place a known number of times; this often at least it may. */
 const leastHitLimit = 1_000;
@@ -203,7 +193,9 @@ class InProcessRunner {
 
   /** Most mutants that also act while the tests are loaded fail a test that runs them; only the rest need the loading. */
   async mutantRun(options) {
-    if (!isDrawn(options.activeMutant)) return { status: MutantRunStatus.Error, errorMessage: notDrawn };
+    const path = relative(process.cwd(), options.sandboxFileName);
+    if (!isDrawn(path, options.activeMutant))
+      return { status: MutantRunStatus.Error, errorMessage: notDrawn };
     if (this.environment === null) await this.resume();
     await this.turnTo(options.sandboxFileName);
     const outcome = await this.verdict({ ...options, reloadEnvironment: false });

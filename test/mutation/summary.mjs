@@ -1,5 +1,6 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { betaQuantile } from '../../dist/stats/distributions/beta.js';
+import { isDrawn } from './drawn.mjs';
 import { endlessLoops, equivalents } from './equivalents.mjs';
 
 const reportOf = (name) => `.stryker-tmp/reports/${name}.json`;
@@ -15,8 +16,15 @@ const isAmong = (list, file, line, { mutatorName, replacement }) =>
       inOneLine(known.replacement) === inOneLine(replacement),
   );
 
+const fromZero = ({ start, end }) => ({
+  start: { line: start.line - 1, column: start.column - 1 },
+  end: { line: end.line - 1, column: end.column - 1 },
+});
+
 /** An endless loop is a kill only where a counter saw it turn or the list says so; what merely took too long is not. */
 const outcomeOf = (file, line, mutant) => {
+  if (mutant.status === 'NoCoverage' && !isDrawn(file, { ...mutant, location: fromZero(mutant.location) }))
+    return 'notDrawn';
   if (mutant.status === 'Killed') return 'killed';
   if (mutant.status === 'RuntimeError') return 'notDrawn';
   if (isAmong(equivalents, file, line, mutant)) return 'equivalent';
