@@ -1,32 +1,19 @@
-import type { Answers } from '../answers/answer.ts';
-import { answersReply, jsonReply } from '../present/answerReply.ts';
-import { stalenessInWords } from '../present/compose/feed.ts';
 import { helpReply } from '../present/compose/help.ts';
-import type { Reply } from '../present/reply.ts';
-import type {
-  PinQuestion,
-  Question,
-  ReadQuestion,
-  RecordQuestion,
-  StatisticalQuestion,
-} from '../questions/question.ts';
+import type { PinQuestion, Question, ReadQuestion, RecordQuestion } from '../questions/question.ts';
 import type { ReadOutcome } from '../questions/readMessage.ts';
-import type { Freshness } from '../terms/feedReport.ts';
 import type { PriceSnapshot } from '../terms/prices.ts';
-import { type Result, succeed } from '../terms/result.ts';
+import type { Result } from '../terms/result.ts';
 import { behindDoor, denied } from './admission.ts';
 import { answerFeed } from './answerFeed.ts';
+import { answerStatistical } from './answerStatistical.ts';
 import { type Asking, type Converse, readerOf, refused, type Spoken, said } from './conversation.ts';
 import type { Desk } from './desk.ts';
 import { isMeantFor, readAsked } from './followUp.ts';
-import { pictured } from './pictured.ts';
 import { answerPins } from './pins/answerPins.ts';
 import { answerPress } from './press.ts';
 import { isOfPins, isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
-import { keepAnswer } from './records/keeping.ts';
 import { answerOfSubscriptions } from './subscriptions/answerSubscriptions.ts';
-import { workOut } from './workOut.ts';
 
 export type { Asking, Converse, Pressing, Spoken } from './conversation.ts';
 export type { Desk } from './desk.ts';
@@ -38,37 +25,8 @@ const needsNoPrices = (outcome: ReadOutcome): boolean =>
     isOfRecords(outcome.value.question) ||
     isOfPins(outcome.value.question));
 
-const asWished = ({ wishes }: ReadQuestion, answers: Answers): Reply =>
-  wishes.includes('json') ? jsonReply(answers) : answersReply(answers);
-
-/** Old prices are said before anything else is warned of. It hangs on the hour of asking, so it is no part of the answer. */
-const withStaleness = (given: Reply, freshness: Freshness | null): Reply => {
-  const stale = stalenessInWords(freshness);
-  return stale === null ? given : { ...given, warnings: [stale, ...given.warnings] };
-};
-
 /** One conversation for every workspace: text in, replies out. */
 export const createConverse = (desk: Desk): Converse => {
-  const answerStatistical = async (
-    read: ReadQuestion,
-    question: StatisticalQuestion,
-    snapshot: PriceSnapshot,
-    asking: Asking,
-  ): Promise<Spoken> => {
-    const worked = await workOut(desk, read, question, snapshot, asking.progress);
-    if (!worked.ok) return refused(worked);
-    const { freshness } = desk.feedStatus();
-    const { answers, reply } = await keepAnswer(desk.records, {
-      ...worked.value,
-      question,
-      replyTo: (named) => withStaleness(asWished(read, named), freshness),
-      asking: { ...readerOf(asking), words: asking.text, askedAtMs: desk.clock.nowMs() },
-    });
-    const spoken: Spoken = { reply, outcome: succeed(answers) };
-    if (!read.wishes.includes('picture')) return spoken;
-    return pictured(spoken, await desk.drawing.draw(worked.value.job, answers));
-  };
-
   const answerRecords = async (
     question: RecordQuestion,
     snapshot: Result<PriceSnapshot>,
@@ -96,7 +54,7 @@ export const createConverse = (desk: Desk): Converse => {
     asking: Asking,
   ): Promise<Spoken> => {
     if (isStatistical(question))
-      return live.ok ? answerStatistical(read, question, live.value, asking) : refused(live);
+      return live.ok ? answerStatistical(desk, read, question, live.value, asking) : refused(live);
     if (isOfRecords(question)) return answerRecords(question, live, asking);
     if (isOfSubscriptions(question)) {
       const asker = readerOf(asking);
