@@ -94,6 +94,15 @@ describe('a refit to resampled returns', () => {
     expect(relativeError(again?.omega ?? Number.NaN, plain.fit.omega)).toBeLessThan(1e-8);
   });
 
+  test('is none where the whole search is refused', () => {
+    const refit = startRefits(1000, fitted(simulateGarchReturns(1000, clustered, 5, 3)));
+    // Alpha and beta add up to 0.9995, which a thousand returns often take for more.
+    const nearlyIntegrated = { mu: 0, omega: 1e-7, alpha: 0.3, beta: 0.6995 };
+    const returns = simulateGarchReturns(1000, nearlyIntegrated, 5, 2);
+    expect(codeOf(returns)).toBe('varianceNotStationary');
+    expect(refit(returns)).toBeNull();
+  });
+
   test('ends within a thousandth of a standard error of the whole search, one after another', () => {
     const fit = fitted(simulateGarchReturns(1000, clustered, 5, 3));
     const refit = startRefits(1000, fit);

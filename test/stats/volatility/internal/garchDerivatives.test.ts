@@ -72,3 +72,9 @@ test('the likelihood is minus infinity where the variance overflows', () => {
     garchLogLikelihood(simulateGarchReturns(2000, { mu: 0, omega: 1, alpha: 0, beta: 0 }, 5, 2), explosive),
   ).toBe(Number.NEGATIVE_INFINITY);
 });
+
+test('where it is no number the likelihood is minus infinity, so that no climb goes there', () => {
+  const nowhere = Float64Array.of(Number.NaN, 0, 0.1, 0.1, 0.1);
+  expect(garchLogLikelihood(returns, nowhere)).toBe(Number.NEGATIVE_INFINITY);
+  expect(differentiate(nowhere).value).toBe(Number.NEGATIVE_INFINITY);
+});
