@@ -23,6 +23,8 @@ export type Place = {
   readonly unsettled: () => Promise<number>;
   /** Locks the store against everybody until the returned function is called. */
   readonly lock: () => Promise<() => Promise<void>>;
+  /** Lets go of it, once nobody uses it any more. */
+  readonly leave: () => Promise<void>;
 };
 
 export type MorningPlan = {
@@ -86,6 +88,7 @@ const keepCopy = (plan: object, due: readonly Digest[]) => {
   let child: ChildProcess | null = null;
   let ended = false;
   let ready: Promise<void> = Promise.resolve();
+  let gone: Promise<void> = Promise.resolve();
   const complaints: string[] = [];
   const start = (): void => {
     const running = spawn(process.execPath, [childPath], {
@@ -97,6 +100,7 @@ const keepCopy = (plan: object, due: readonly Digest[]) => {
       if (code !== null && code !== 0) complaints.push(`ended with ${code}`);
       if (!ended) start();
     });
+    gone = new Promise((resolve) => running.once('exit', () => resolve()));
     ready = new Promise((resolve) => {
       running.once('message', () => {
         running.send(due, () => {});
@@ -118,6 +122,7 @@ const keepCopy = (plan: object, due: readonly Digest[]) => {
       ended = true;
       child?.kill('SIGKILL');
     },
+    gone: () => gone,
     complaints,
   };
 };
@@ -246,7 +251,9 @@ export const liveThrough = async (
     return { ...judge(platform, keys, answered), complaints: copies.flatMap((copy) => copy.complaints) };
   } finally {
     for (const copy of copies) copy.end();
+    await Promise.all(copies.map((copy) => copy.gone()));
     await platform.stop();
+    await place.leave();
   }
 };
 

@@ -1,4 +1,4 @@
-import { mkdtempSync } from 'node:fs';
+import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import Database from 'better-sqlite3';
@@ -15,7 +15,8 @@ const tables = ['inbox', 'deliveries'] as const;
 
 /** Records in a new SQLite file. */
 export const sqlitePlace = async (): Promise<Place> => {
-  const path = join(mkdtempSync(join(tmpdir(), 'leadsman-kills-')), 'records.db');
+  const folder = mkdtempSync(join(tmpdir(), 'leadsman-kills-'));
+  const path = join(folder, 'records.db');
   await accepted(await openSqlite(path)).close();
   const query = (text: string): number => {
     const database = new Database(path, { readonly: true });
@@ -35,6 +36,7 @@ export const sqlitePlace = async (): Promise<Place> => {
         database.close();
       };
     },
+    leave: async () => rmSync(folder, { recursive: true, force: true }),
   };
 };
 
@@ -65,5 +67,6 @@ export const postgresPlace = async (server: PostgresServer): Promise<Place> => {
         await client.end();
       };
     },
+    leave: () => watching.end(),
   };
 };
