@@ -22,7 +22,8 @@ export default {
   coverageAnalysis: 'perTest',
   concurrency: 1,
   timeoutMS: 60_000,
-  timeoutFactor: 3,
+  timeoutFactor: 1,
+  dryRunTimeoutMinutes: 30,
   tempDirName: '.stryker-tmp/sandboxes',
   ignorePatterns: [
     '.stryker-tmp',
