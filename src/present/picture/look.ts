@@ -31,6 +31,8 @@ export const chartLook: Config = {
   font: fontFamily,
   background: 'transparent',
   padding: 0,
+  /** A PNG carries no roles; what is to be seen is said in the alt text. */
+  aria: false,
   view: { stroke: null },
   axis: {
     labelFontSize: sizes.label,

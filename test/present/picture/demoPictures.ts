@@ -23,8 +23,9 @@ export const seriesNamed = (ticker: string): PriceSeries => {
   return series;
 };
 
-/** A question about the demonstration prices, worked out. */
-export const worked = (text: string): { readonly job: AnswerJob; readonly answers: Answers } => {
+type Worked = { readonly job: AnswerJob; readonly answers: Answers };
+
+const workOut = (text: string): Worked => {
   const vocabulary = createVocabulary(snapshot.tickers);
   const [read] = readMessage(text, { ...context, vocabulary }).questions;
   if (read === undefined) throw new Error(`nothing was read in ${text}`);
@@ -34,6 +35,15 @@ export const worked = (text: string): { readonly job: AnswerJob; readonly answer
     question.verb === 'compare' && question.between === 'tickers' ? question.tickers : [question.ticker];
   const job = { read: { question, ...more }, series: tickers.map(seriesNamed), policy };
   return { job, answers: accepted(answerQuestion(job)) };
+};
+
+const known = new Map<string, Worked>();
+
+/** A question about the demonstration prices, worked out once. */
+export const worked = (text: string): Worked => {
+  const found = known.get(text) ?? workOut(text);
+  known.set(text, found);
+  return found;
 };
 
 export const pictureAsked = (text: string): PictureData => {

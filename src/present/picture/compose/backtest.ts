@@ -6,7 +6,7 @@ import { levelInWords, percent } from '../../../wording/percent.ts';
 import { counted, possessive } from '../../../wording/words.ts';
 import { backtestReply } from '../../compose/backtest.ts';
 import { windowInWords } from '../../compose/parts.ts';
-import { plotFrame } from '../panels/axes.ts';
+import { percentLabel, plotFrame } from '../panels/axes.ts';
 import { countPanel, pathPanel } from '../panels/backtest.ts';
 import type { Sheet } from '../sheet.ts';
 import { altText, identified } from './parts.ts';
@@ -29,12 +29,15 @@ const worstInWords = ({ exceedances }: BacktestPath): string => {
 export const backtestSheet = (answer: BacktestAnswer, path: BacktestPath): Sheet => {
   const { figures, subject } = answer;
   const level = levelInWords(figures.tailLevel);
-  const frame = plotFrame(['−10%', '100']);
+  const reach = Math.max(
+    ...path.steps.map(({ low, high, valueAtRisk }) => Math.max(-low, high, valueAtRisk ?? 0)),
+  );
+  const frame = plotFrame([percentLabel(reach), '1,000']);
   const last = path.counts.at(-1);
   const judged = figures.models.find((each) => each.ok && each.model === path.model);
   const tally =
     judged?.ok === true
-      ? `${judged.exceedances} exceedances of the ${path.model} figure in ${counted(judged.days, 'day')}; ${threeDigits(judged.expected)} expected.`
+      ? `${counted(judged.exceedances, 'exceedance')} of the ${path.model} figure in ${counted(judged.days, 'day')}; ${threeDigits(judged.expected)} expected.`
       : '';
   return {
     ...identified(answer),

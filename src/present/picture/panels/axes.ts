@@ -20,6 +20,13 @@ export const plotFrame = (labels: readonly string[]): PlotFrame => {
   return { labels: room, plot: sheetWidth - 2 * sheetMargin - room - rightRoom };
 };
 
+/** About as long as the longest label of a percent axis that reaches this far: small values take many decimals. */
+export const percentLabel = (reach: number): string => {
+  const percent = Math.max(1e-12, 100 * reach);
+  const decimals = Math.max(0, Math.ceil(1 - Math.log10(percent)));
+  return `−${percent.toFixed(Math.min(20, decimals))}%`;
+};
+
 /** The axis beside a plot: no line of its own, labels in their fixed room. */
 export const sideAxis = ({ labels }: PlotFrame) => ({
   domain: false,

@@ -18,6 +18,7 @@ const visible = ({ from, to }: Stretch, span: number): Stretch => {
 
 const spanOf = (rows: readonly CoverageRow[]): Domain => {
   const covered = rows.flatMap((row) => row.covered);
+  if (covered.length === 0) return [0, 1];
   return [Math.min(...covered.map(({ from }) => from)), Math.max(...covered.map(({ to }) => to))];
 };
 

@@ -1,6 +1,6 @@
 import { colours, sheetMargin, sheetWidth } from '../look.ts';
 import type { Panel } from '../sheet.ts';
-import { type Domain, signed, within } from './axes.ts';
+import { type Domain, percentLabel, plotFrame, signed, within } from './axes.ts';
 
 export type QuantilePlot = {
   readonly head: string;
@@ -10,14 +10,13 @@ export type QuantilePlot = {
   readonly points: readonly { readonly expected: number; readonly observed: number }[];
 };
 
-const labels = 44;
 const between = 22;
 const plotHeight = 210;
 
 const single = (
   { head, axisTitle, shape, colour, points }: QuantilePlot,
   domain: Domain,
-  width: number,
+  { labels, width }: { readonly labels: number; readonly width: number },
   first: boolean,
 ) => {
   const scale = within(domain);
@@ -61,10 +60,11 @@ const single = (
 
 /** Observed returns against those expected at their rank, one or two plots beside each other on the same scales. */
 export const quantilePanel = (plots: readonly QuantilePlot[], domain: Domain): Panel => {
+  const { labels } = plotFrame([percentLabel(Math.max(-domain[0], domain[1]))]);
   const room = sheetWidth - 2 * sheetMargin - labels - between;
   const width = Math.floor((room - (plots.length - 1) * between) / plots.length);
   return {
-    hconcat: plots.map((plot, place) => single(plot, domain, width, place === 0)),
+    hconcat: plots.map((plot, place) => single(plot, domain, { labels, width }, place === 0)),
     spacing: between,
   };
 };
