@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { openSqlite } from '../../../src/records/openSqlite.ts';
 import { mortalStore } from '../../doubles/mortalStore.ts';
+import { makeTray } from '../../doubles/platform/tray.ts';
 import { accepted } from '../../laws/outcomes.ts';
 import { answeringLater, type BotOptions, settled, spoken, startBot, startBotOn } from './bot.ts';
 
@@ -90,6 +91,44 @@ describe('a question that was not answered before the process ended', () => {
     while (!texts.at(-1)?.includes('failed at this')) texts.push((await stage.platform.posts.next()).text);
     await last.stage.bot.idle();
     expect(texts.filter((text) => text.startsWith('Heard'))).toEqual([]);
+  });
+});
+
+describe('what else was asked before the process ended', () => {
+  it('a slash command is answered through its response address, and gets one line when it is old', async () => {
+    for (const [waitMs, text] of [
+      [leaseAndRoundMs, 'Heard: interval KELP'],
+      [601_000, expect.stringContaining('asked while I was away')],
+    ] as const) {
+      const { conversation, questions } = answeringLater();
+      const first = await startMortal({ conversation });
+      first.stage.platform.command({ channel: 'C0DESK', text: 'interval KELP' });
+      await questions.next();
+      const next = await takeOver(first, waitMs);
+      expect(await next.platform.responses.next()).toMatchObject({ text, responseType: 'ephemeral' });
+      await next.bot.idle();
+      expect(next.platform.responses.all).toHaveLength(1);
+    }
+  });
+
+  it('a press on an answer is answered in its thread', async () => {
+    const pressed = makeTray<null>('presses');
+    const press = () => {
+      pressed.add(null);
+      return new Promise<never>(() => {});
+    };
+    const first = await startMortal({ conversation: { press } });
+    const { platform } = first.stage;
+    const question = platform.mention({ channel: 'C0DESK', text: 'interval KELP' });
+    platform.press(await platform.posts.next(), 'working');
+    await pressed.next();
+    const next = await takeOver(first);
+    expect(await platform.posts.next()).toMatchObject({
+      text: 'Working of: interval KELP',
+      threadTs: question.ts,
+    });
+    await next.bot.idle();
+    expect(platform.posts.all).toHaveLength(2);
   });
 });
 
