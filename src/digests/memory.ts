@@ -8,8 +8,8 @@ export type DigestMemory = {
   readonly vars: Readonly<Record<string, number>>;
   /** Dues left out since the last post. */
   readonly skipped: Skipped | null;
-  /** The post on old prices that waits for new ones, and its thread. */
-  readonly awaiting: { readonly dueMs: InstantMs; readonly ts: string } | null;
+  /** The post on old prices that waits for new ones, and its thread; null for as long as it is not known to be posted. */
+  readonly awaiting: { readonly dueMs: InstantMs; readonly ts: string | null } | null;
 };
 
 /** What a watch remembers from one session to the next. */

@@ -24,6 +24,17 @@ export type Due = {
 export const keyOf = ({ team, id }: Pick<Subscription, 'team' | 'id'>, dueMs: InstantMs): string =>
   `digest:${team}:${id}:${dueMs}`;
 
+/**
+ * Notes before it is posted that it will be on old prices: should the process end in between, whoever takes it over may
+ * have the new prices by then, and would not know that what stands there is old. A fresh line too many is no harm.
+ */
+const noteOld = (parts: RunParts, { subscription, schedule, dueMs }: Due): Promise<Subscription | null> =>
+  change(parts, subscription, (current) => ({
+    ...current,
+    awaitingUntilMs: awaitedUntil(dueMs, schedule.timeZone),
+    memory: JSON.stringify({ ...readDigestMemory(current.memory), awaiting: { dueMs, ts: null } }),
+  }));
+
 /** Notes that it was posted: what it said for the next one, and whether it still waits for prices. */
 const notePosted = (
   parts: RunParts,
@@ -32,9 +43,10 @@ const notePosted = (
   ts: string,
 ): Promise<Subscription | null> => {
   const { dueMs, schedule, calendar } = due;
-  const awaitingUntilMs = post.oldPrices === null ? null : awaitedUntil(dueMs, schedule.timeZone);
   return change(parts, due.subscription, (current) => {
     const memory = readDigestMemory(current.memory);
+    const waits = memory.awaiting?.dueMs === dueMs;
+    const awaitingUntilMs = waits ? awaitedUntil(dueMs, schedule.timeZone) : null;
     return planned(
       {
         ...takenUp(current),
@@ -63,6 +75,7 @@ const say = async (parts: RunParts, due: Due, post: DigestPost): Promise<void> =
   const { team, channel } = subscription;
   const expiresAtMs = dueMs + parts.mostLateMs;
   const saying = { team, channel, urgent: false };
+  if (post.oldPrices !== null) await noteOld(parts, due);
   const outcome = await parts.deliver({ ...saying, key, threadTs: null, expiresAtMs, post });
   if (outcome.kind === 'said') {
     await parts.deliver({

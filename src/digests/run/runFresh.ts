@@ -13,7 +13,7 @@ export const runFresh = async (parts: RunParts, subscription: Subscription): Pro
   const memory = readDigestMemory(subscription.memory);
   const prices = parts.prices();
   const { awaiting } = memory;
-  if (!body.ok || !prices.ok || awaiting === null) return;
+  if (!body.ok || !prices.ok || awaiting === null || awaiting.ts === null) return;
   const calendar = parts.calendars().of(body.value.tickers);
   if (oldPricesOf(prices.value, body.value.tickers, awaiting.dueMs, calendar) !== null) return;
   const key = `${keyOf(subscription, awaiting.dueMs)}:fresh`;
