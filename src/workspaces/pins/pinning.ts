@@ -30,9 +30,13 @@ const nothingHere = refuse(
 const lastAtTerminal = async (desk: Desk, { from }: Asker): Promise<Result<readonly RecordLine[]>> => {
   const lines = await desk.records.store.list({ ticker: null, sinceMs: null }, mostAtTerminal);
   if (!lines.ok) return lines;
-  const here = (line: RecordLine): boolean =>
-    line.from.team === null && line.from.channel === from.channel && line.from.thread === from.thread;
-  return succeed(lines.value.filter(here));
+  const inThread = ({ thread, message }: RecordLine['from']): boolean =>
+    thread === from.thread || (from.thread !== null && message === from.thread);
+  return succeed(
+    lines.value.filter(
+      (line) => line.from.team === null && line.from.channel === from.channel && inThread(line.from),
+    ),
+  );
 };
 
 /** The last result of the discussion. */

@@ -279,6 +279,10 @@ describe('in a terminal', () => {
     expect((await said('pin', nowhere))[0]).toContain('pinned here already');
     expect((await cardsAtTerminal(desk)).passages).toMatchObject([{ lines: [expect.stringContaining(id)] }]);
     expect(accepted(await records.store.pins.standingIn({ team: '', channel: '#desk' }))).toHaveLength(1);
+    const inIts = (thread: string | null, message: string) => ({ ...nowhere, thread, message });
+    await idOf('interval TARN 60d', inIts(null, '3'));
+    expect((await said('pin', inIts('3', '4')))[0]).toContain('TARN’s mean');
+    expect((await said('pin', inIts('9', '10')))[0]).toContain('There is no result in this thread');
     expect(await said('unpin', nowhere)).toEqual([`record: ${id} is no longer pinned here.`]);
   });
 });
