@@ -126,6 +126,84 @@ const groups = [
       ['samples/need.ts', 'if (!deviation.ok)', 'ConditionalExpression', 'false'],
     ],
   },
+  {
+    reason: 'one place further a typed array takes no value, and nothing else is written',
+    mutants: [
+      ['volatility/garch.ts', 'day < values.length', 'EqualityOperator', 'day <= values.length'],
+      ['volatility/internal/variancePath.ts', 'day < h.length', 'EqualityOperator', 'day <= h.length'],
+    ],
+  },
+  {
+    reason: 'an entry of the diagonal is copied onto itself',
+    mutants: [
+      ['volatility/internal/garchDerivatives.ts', 'column < row', 'EqualityOperator', 'column <= row'],
+    ],
+  },
+  {
+    reason: 'a climb from nearby only saves the search, which ends at the same maximum',
+    mutants: [
+      ['volatility/garch.ts', 'if (near?.clustering === true)', 'BlockStatement', '{}'],
+      ['volatility/garch.ts', 'near.beta ?? 0', 'LogicalOperator', 'near.beta && 0'],
+    ],
+  },
+  {
+    reason: 'on the threshold between two formulas that agree there',
+    mutants: [
+      [
+        'volatility/internal/densitySlopes.ts',
+        'inverseNu < productsFrom',
+        'EqualityOperator',
+        'inverseNu <= productsFrom',
+      ],
+      [
+        'distributions/internal/studentQuantile.ts',
+        'const below1',
+        'EqualityOperator',
+        'central <= centralProbability(1, nu)',
+      ],
+    ],
+  },
+  {
+    reason: 'only where Newton’s steps begin, or how many there are; the bracket ends at the same double',
+    mutants: [
+      ['distributions/internal/finishQuantile.ts', 'let x = start', 'ArithmeticOperator', '(low + high) * 2'],
+      ['distributions/internal/finishQuantile.ts', 'let x = start', 'EqualityOperator', 'start >= low'],
+      ['distributions/internal/finishQuantile.ts', 'let x = start', 'EqualityOperator', 'start <= high'],
+      [
+        'distributions/internal/studentQuantile.ts',
+        'slope: (t) => studentDensity',
+        'ArrowFunction',
+        '() => undefined',
+      ],
+      ['distributions/chiSquare.ts', 'const given = p < 1', 'ConditionalExpression', 'true'],
+      ['distributions/chiSquare.ts', 'const given = p < 1', 'EqualityOperator', 'p <= 1'],
+      ['distributions/chiSquare.ts', 'if (given > 0', 'ConditionalExpression', 'true'],
+      [
+        'distributions/chiSquare.ts',
+        'if (given > 0',
+        'EqualityOperator',
+        'given <= Number.POSITIVE_INFINITY',
+      ],
+    ],
+  },
+  {
+    reason: 'where a series stops: the further term is below the last digit',
+    mutants: [
+      [
+        'distributions/internal/studentTail.ts',
+        'if (term < 1e-17 * sum)',
+        'EqualityOperator',
+        'term <= 1e-17 * sum',
+      ],
+      ['distributions/internal/incompleteBeta.ts', 'n < 1_000_000', 'EqualityOperator', 'n <= 1_000_000'],
+      [
+        'distributions/internal/noncentralIntegral.ts',
+        'Math.abs(term) < 1e-18 * sum',
+        'EqualityOperator',
+        'Math.abs(term) <= 1e-18 * sum',
+      ],
+    ],
+  },
 ];
 
 export const equivalents = groups.flatMap(({ reason, mutants }) =>

@@ -92,3 +92,11 @@ describe('the data part of a unit-variance Student log-density', () => {
     });
   });
 });
+
+test('the normal limit: half of q, without a division of zero by zero', () => {
+  // A(q, λ) → q/2 as λ → 0, by definition of the normal density; below λ = 1e-17 a double shows no difference.
+  for (const q of [0, 0.3, 7]) {
+    expect(innovationLoss(q, 0)).toBe(q / 2);
+    expect(innovationLoss(q, 1e-18)).toBe(q / 2);
+  }
+});
