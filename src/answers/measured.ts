@@ -17,15 +17,30 @@ export const nearestProcess = (returns: Float64Array): CoverageProcess =>
     fatTailed: returns.length >= leastCounts.kurtosis && jarqueBera(returns).p < 0.05,
   });
 
+/** From the process under which intervals hold least often to the one under which they hold best. */
+const worstFirst: readonly CoverageProcess[] = [
+  'garchT',
+  'autoregressive',
+  'exponential',
+  'studentT3',
+  'studentT4',
+  'normal',
+];
+
+/** Where two series differ, the one that is harder on an interval is quoted. */
+export const worseProcess = (first: CoverageProcess, second: CoverageProcess): CoverageProcess =>
+  worstFirst.indexOf(first) < worstFirst.indexOf(second) ? first : second;
+
+export type Simulated = { readonly process: CoverageProcess; readonly count: number };
+
 /** An interval of ours whose simulations missed its level by more than three points says so, with the share. */
-export const coverageWarnings = (
+export const coverageWarningsOn = (
   interval: CoveredInterval,
   called: string,
-  returns: Float64Array,
+  { process, count }: Simulated,
   level: Level,
 ): readonly Warning[] => {
-  const process = nearestProcess(returns);
-  const measured = measuredCoverage({ interval, process, count: returns.length, level });
+  const measured = measuredCoverage({ interval, process, count, level });
   if (measured === null || !measured.misses) return [];
   return [
     {
@@ -34,3 +49,12 @@ export const coverageWarnings = (
     },
   ];
 };
+
+/** The same for an interval made from these returns. */
+export const coverageWarnings = (
+  interval: CoveredInterval,
+  called: string,
+  returns: Float64Array,
+  level: Level,
+): readonly Warning[] =>
+  coverageWarningsOn(interval, called, { process: nearestProcess(returns), count: returns.length }, level);

@@ -9,6 +9,7 @@ import { counted, probabilityValue } from '../../wording/words.ts';
 import type { ClaimAnswer, Warning, WorkingStep } from '../answer.ts';
 import { askOne } from '../askOne.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { coverageWarnings } from '../measured.ts';
 import type { AnswerPolicy } from '../policy.ts';
 import { endsText, returnsStep } from '../working.ts';
 import type { ClaimFigures } from './figures.ts';
@@ -88,7 +89,11 @@ const answerOnMean = (asked: Asked, question: ClaimQuestion): Result<ClaimAnswer
       kind: 'claim',
       verb: 'claim',
       figures,
-      warnings: dependenceWarnings(claim),
+      warnings: [
+        ...dependenceWarnings(claim),
+        // The interval of a claim is that of the mean, by the standard error that decides.
+        ...coverageWarnings(`mean.${claim.decidedBy}`, 'this interval of the mean', sample.returns, level),
+      ],
       notes: claim.returnsNeeded === null ? [zeroClaimNote] : [],
       method: claim.decidedBy === 'plain' ? 'one-sample t test' : 't test with the Newey–West standard error',
       sources: [
@@ -138,7 +143,7 @@ const answerOnRatio = (asked: Asked, question: ClaimQuestion): Result<ClaimAnswe
       kind: 'claim',
       verb: 'claim',
       figures,
-      warnings: [],
+      warnings: coverageWarnings('ratio.noncentralT', 'this interval of the ratio', sample.returns, level),
       notes: [
         ...(claim.returnsNeeded === null ? [zeroClaimNote] : []),
         { figure: 'estimate', code: 'nothingDeducted', text: 'Nothing risk-free is deducted from the mean.' },

@@ -9,6 +9,7 @@ import type { Note, Warning, WorkingStep } from '../answer.ts';
 import type { OwnParts } from '../envelope.ts';
 import type { ReturnSample } from '../sample.ts';
 import { endsText, returnsStep } from '../working.ts';
+import { comparisonCoverage } from './coverage.ts';
 import type { CompareFigures } from './figures.ts';
 
 export type Compared = {
@@ -142,7 +143,10 @@ export const comparisonParts = (compared: Compared): OwnParts<'compare', 'compar
   kind: 'compare',
   verb: 'compare',
   figures: figuresOf(compared),
-  warnings: compared.warnings,
+  warnings: [
+    ...comparisonCoverage(compared.comparison, compared.first, compared.second, compared.level),
+    ...compared.warnings,
+  ],
   notes: notesOf(compared),
   method:
     compared.comparison.kind === 'paired' ? 'paired t test on common dates' : 'Welch’s t test of two periods',

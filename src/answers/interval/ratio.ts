@@ -8,6 +8,7 @@ import { workingDigits } from '../../wording/digits.ts';
 import { probabilityValue } from '../../wording/words.ts';
 import type { RatioAnswer, Warning } from '../answer.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { coverageWarnings } from '../measured.ts';
 import { endsText, returnsStep } from '../working.ts';
 import type { RatioFigures } from './figures.ts';
 
@@ -50,7 +51,15 @@ export const answerRatio = (asked: Asked, question: IntervalQuestion): Result<Ra
       kind: 'interval ratio',
       verb: 'interval',
       figures,
-      warnings: warningsFor(sample.returns),
+      warnings: [
+        ...warningsFor(sample.returns),
+        ...coverageWarnings(
+          'ratio.noncentralT',
+          'this interval of the ratio',
+          sample.returns,
+          question.level,
+        ),
+      ],
       notes: [
         { figure: 'ratio', code: 'nothingDeducted', text: 'Nothing risk-free is deducted from the mean.' },
       ],

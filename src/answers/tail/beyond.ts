@@ -1,19 +1,21 @@
 import type { TailQuestion } from '../../questions/question.ts';
+import { measuredCoverage } from '../../stats/coverage/measuredCoverage.ts';
 import { createStreams } from '../../stats/random/xoshiro128.ts';
 import { isoFromDay } from '../../terms/day.ts';
-import { levelFraction } from '../../terms/level.ts';
+import { type Level, levelFraction } from '../../terms/level.ts';
 import type { PriceSeries } from '../../terms/prices.ts';
 import { type Result, succeed } from '../../terms/result.ts';
 import { workingDigits } from '../../wording/digits.ts';
 import { percent } from '../../wording/percent.ts';
 import type { TailBeyondAnswer } from '../answer.ts';
 import { type Asked, enclose } from '../envelope.ts';
+import { coverageWarningsOn, nearestProcess, type Simulated } from '../measured.ts';
 import type { ReturnSample } from '../sample.ts';
 import { endsText, returnsStep } from '../working.ts';
 import type { Position } from './exposure.ts';
 import type { BeyondModelFigures, RefusedModel } from './figures.ts';
 import { refusedModel } from './modelFigures.ts';
-import { modelNotes, modelsOf, refusedAltogether, returnsOfPosition } from './models.ts';
+import { leadingOf, modelNotes, modelsOf, refusedAltogether, returnsOfPosition } from './models.ts';
 import { runBeyond } from './runModels.ts';
 import { adjustmentWarnings } from './warnings.ts';
 
@@ -24,7 +26,20 @@ const daysOf = ({ days }: ReturnSample, returns: Float64Array, threshold: number
 
 type Ran = ReturnType<typeof runBeyond>[number];
 
-const figuresOf = ({ model, result }: Ran): BeyondModelFigures | RefusedModel => {
+/** Chances at which intervals of a chance were simulated; the nearest, on the scale of ratios, is quoted. */
+const simulatedChances = ['0.05', '0.01'] as const;
+
+const coveredAs = ({ model, probability }: Pick<BeyondModelFigures, 'model' | 'probability'>) => {
+  const [larger, smaller] = simulatedChances;
+  const boundary = Math.sqrt(Number(larger) * Number(smaller));
+  return `beyond.${model}.${probability > boundary ? larger : smaller}` as const;
+};
+
+const figuresOf = (
+  { model, result }: Ran,
+  simulated: Simulated,
+  level: Level,
+): BeyondModelFigures | RefusedModel => {
   if (!result.ok) return refusedModel(model, result.problem);
   const { probability, interval, intervalMethod, meanReturnSessions, target } = result.value;
   return {
@@ -36,6 +51,9 @@ const figuresOf = ({ model, result }: Ran): BeyondModelFigures | RefusedModel =>
     intervalMethod,
     meanReturnSessions,
     target,
+    measuredCoverage:
+      measuredCoverage({ interval: coveredAs({ model, probability }), ...simulated, level })?.coverage ??
+      null,
   };
 };
 
@@ -61,6 +79,10 @@ export const answerBeyond = (
   const refused = refusedAltogether(ran);
   if (refused !== null) return refused;
   const days = daysOf(sample, returns, threshold);
+  const { confidence } = question;
+  const simulated = { process: nearestProcess(returns), count: returns.length };
+  const models = ran.map((each) => figuresOf(each, simulated, confidence));
+  const leading = leadingOf(models);
   return succeed(
     enclose(asked, {
       kind: 'tail beyond',
@@ -69,10 +91,20 @@ export const answerBeyond = (
         threshold,
         confidenceLevel: levelFraction(question.confidence),
         position: position.position,
-        models: ran.map(figuresOf),
+        models,
         days,
       },
-      warnings: adjustmentWarnings(series.meaning),
+      warnings: [
+        ...(leading === null
+          ? []
+          : coverageWarningsOn(
+              coveredAs(leading),
+              `this interval of the ${leading.model} chance`,
+              simulated,
+              confidence,
+            )),
+        ...adjustmentWarnings(series.meaning),
+      ],
       notes: modelNotes(ran),
       method: 'chance of a daily loss by each tail model',
       sources: [

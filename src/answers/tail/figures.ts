@@ -58,6 +58,8 @@ export type BeyondModelFigures = {
   readonly upper: number | null;
   readonly intervalMethod: string | null;
   readonly meanReturnSessions: number | null;
+  /** How often an interval like this one held the true chance in simulations; null where that was not measured. */
+  readonly measuredCoverage: number | null;
   readonly target: 'unconditional' | 'nextDay';
 };
 

@@ -1,5 +1,6 @@
 import type { CoverageProcess } from '../../stats/coverage/cell.ts';
 import { measuredCoverage } from '../../stats/coverage/measuredCoverage.ts';
+import { leastCounts } from '../../stats/returns/leastCounts.ts';
 import type { HorizonFigures } from '../../stats/tails/horizon/horizonTail.ts';
 import { type Level, levelFraction } from '../../terms/level.ts';
 import type { ReturnType } from '../../terms/returns.ts';
@@ -54,15 +55,22 @@ export type Quoting = {
   readonly confidence: Level;
 };
 
+/** Where both filters stand side by side each is quoted from the counts at which it stands alone. */
+const countOf = (figures: AnyTailFigures, count: number): number => {
+  if (figures.model !== 'filtered') return count;
+  const { garch } = leastCounts;
+  return figures.parameters.kind === 'ewma' ? Math.min(count, garch - 1) : Math.max(count, garch);
+};
+
 const measuredShare = (
-  model: AnyTailFigures['model'],
+  figures: AnyTailFigures,
   { process, count, tailLevel, confidence }: Quoting,
 ): MeasuredShare => {
   const share = (figure: 'var' | 'es') =>
     measuredCoverage({
-      interval: `tail.${model}.${figure}.${levelFraction(tailLevel)}`,
+      interval: `tail.${figures.model}.${figure}.${levelFraction(tailLevel)}`,
       process,
-      count,
+      count: countOf(figures, count),
       level: confidence,
     })?.coverage ?? null;
   return { var: share('var'), es: share('es') };
@@ -84,7 +92,7 @@ const oneDayFigures = (
   esLower: figures.esInterval?.lower ?? null,
   esUpper: figures.esInterval?.upper ?? null,
   esIntervalMethod: figures.esIntervalMethod,
-  measuredCoverage: measuredShare(figures.model, quoting),
+  measuredCoverage: measuredShare(figures, quoting),
   monteCarloError: null,
   shortcutVar: null,
   varMoney: moneyLoss(figures.var, position, returnType),
