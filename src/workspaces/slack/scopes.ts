@@ -33,6 +33,13 @@ export const featureEvents = {
 
 const features = Object.keys(featureScopes).filter((name): name is Feature => name in featureScopes);
 
+/** What follows where it hangs together in a way that the name of a feature does not tell: what is not known is denied. */
+const consequences: Readonly<Partial<Record<Feature, string>>> = {
+  members:
+    ' Until then only people and channels are answered that permissions.people and sharedChannels name.',
+  channelKind: ' Until then only channels are answered that permissions.sharedChannels names.',
+};
+
 /**
  * The features that the token carries. Each of the others is named in the log with what it lacks. A platform that does
  * not say which scopes the token has leaves every feature on.
@@ -48,7 +55,7 @@ export const featuresOf = (scopes: readonly string[] | null, log: Logger): Reado
     if (missing.length === 0) continue;
     on.delete(feature);
     log.warn(
-      `The feature ${feature} is off: the token lacks ${missing.join(', ')}. Add it to the app and install it again.`,
+      `The feature ${feature} is off: the token lacks ${missing.join(', ')}. Add it to the app and install it again.${consequences[feature] ?? ''}`,
     );
   }
   return on;

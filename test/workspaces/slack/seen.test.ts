@@ -34,6 +34,20 @@ it('a question is recalled while it can be edited, and forgotten later', async (
   expect(await asked.recall('b', '')).toBe(question);
 });
 
+it('a feature without its scopes is off, and what is denied without it is said', () => {
+  const warnings: string[] = [];
+  const log = { info: () => {}, warn: (message: string) => void warnings.push(message), error: () => {} };
+  const scopes = Object.values(featureScopes)
+    .flat()
+    .filter((scope) => scope !== 'groups:read' && scope !== 'pins:read');
+  const on = featuresOf(scopes, log);
+  expect([on.has('channelKind'), on.has('pin'), on.has('members')]).toEqual([false, false, true]);
+  expect(warnings).toEqual([
+    'The feature channelKind is off: the token lacks groups:read. Add it to the app and install it again. Until then only channels are answered that permissions.sharedChannels names.',
+    'The feature pin is off: the token lacks pins:read. Add it to the app and install it again.',
+  ]);
+});
+
 it('every feature stays on where the platform does not say which scopes there are', () => {
   const warnings: string[] = [];
   const log = { info: () => {}, warn: (message: string) => void warnings.push(message), error: () => {} };
