@@ -2,14 +2,9 @@ import { fileURLToPath } from 'node:url';
 import { createServer, createServerModuleRunner } from 'vite';
 import { registry, startRegistry } from './registry.mjs';
 
-/**
- * The header of a mutated file counts which places are passed, and asks for the active mutant through functions
- * that replace themselves. Judging needs no counts, and functions that stay can be inlined.
- */
-const withoutCounting = (text) =>
+/** Asking for the active mutant by a function that stays, so that it can be inlined; the header's replaces itself. */
+const withQuickSwitches = (text) =>
   text
-    .replace('function stryCov_9fa48() {', 'function stryCov_9fa48() { return;')
-    .replace('stryCov_9fa48 = cover;', '')
     .replace(
       'function stryMutAct_9fa48(id) {',
       `function stryMutAct_9fa48(id) {
@@ -20,18 +15,17 @@ const withoutCounting = (text) =>
     )
     .replace('stryMutAct_9fa48 = isActive;', '');
 
-/** Counting by number into an array, in place of the header's counting by name into one object per test. */
-const countingFast = (text) =>
-  text
-    .replace(
-      'function stryCov_9fa48() {',
-      `function stryCov_9fa48() {
-         const { counts } = globalThis.__stryker__;
-         for (let place = 0; place < arguments.length; place += 1) counts[arguments[place]] += 1;
-         return;`,
-    )
-    .replace('stryCov_9fa48 = cover;', '')
-    .replace(/stryCov_9fa48\(("[^)]*)\)/g, (call) => call.replaceAll('"', ''));
+const countingCall = /stryCov_9fa48\(((?:"\d+"(?:, )?)+)\)/g;
+
+/** For judging, which needs no counts. */
+const withoutCounting = (text) => withQuickSwitches(text).replace(countingCall, '0');
+
+/** Counting in place, by number into an array; the header counts by name into one object per test. */
+const countingInPlace = (text) =>
+  `const stryCount = globalThis.__stryker__.counts; ${withQuickSwitches(text).replace(
+    countingCall,
+    (_, mutants) => `(${mutants.replace(/"(\d+)"/g, 'stryCount[$1]++')})`,
+  )}`;
 
 /**
  * The tests and the sources of the working directory, loaded into this process. `load` evaluates every module anew,
@@ -47,7 +41,7 @@ export const openEnvironment = async (testFiles) => {
     transform: (text, id) => {
       const original = originals[id];
       if (original === undefined) return null;
-      if (mutated === null) return countingFast(text);
+      if (mutated === null) return countingInPlace(text);
       return id === mutated ? withoutCounting(text) : original;
     },
   };
