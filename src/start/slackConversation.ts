@@ -1,14 +1,14 @@
 import { z } from 'zod';
 import { toBlocks } from '../present/blocks.ts';
-import { pictureMessage } from '../present/pictureMessage.ts';
 import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
 import { homeView } from '../present/views/homePage.ts';
 import { admission } from '../workspaces/admission.ts';
 import { type Asking, type Spoken, type SpokenPicture, said } from '../workspaces/conversation.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
-import type { Conversation, Press, ShownPicture, SpokenReply } from '../workspaces/slack/ports.ts';
+import type { Conversation, Press, SpokenReply } from '../workspaces/slack/ports.ts';
 import type { Surfaces } from '../workspaces/surfaces/surfaces.ts';
+import { shownPicture } from './pictures/shown.ts';
 
 const examples = ['interval KELP 60d', 'interval vol KELP 3m', 'help'];
 
@@ -25,18 +25,6 @@ const spokenReply = (each: Reply): SpokenReply => ({
   ...toBlocks(each),
   kind: kinds[each.kind],
   private: each.kind === 'refusal',
-});
-
-/** What a picture would show, where it cannot be shown: its own form in text, or its description. */
-const inWords = ({ inText, altText }: SpokenPicture, why: string): Reply =>
-  reply('answer', why, {
-    passages: inText.length > 0 ? inText : [{ head: 'What it would show', lines: [altText] }],
-  });
-
-const shownPicture = (picture: SpokenPicture): ShownPicture => ({
-  ...picture,
-  withFile: (fileId) => pictureMessage(picture, fileId),
-  inWords: (why) => toBlocks(inWords(picture, why)),
 });
 
 const inBlocks = ({ reply: each, pictures = [] }: Spoken): SpokenReply => ({
@@ -71,9 +59,9 @@ const readButton = (actionId: string, value: string | null): Omit<Button, 'label
 /** A private answer can be shown to the whole channel, where it was asked in one. */
 const shareable = (asking: Pick<Asking, 'place' | 'from'>, spoken: Spoken): Spoken => {
   const channel = asking.from?.channel ?? 'D';
-  const [first] = spoken.reply.buttons;
-  if (asking.place !== 'command' || channel.startsWith('D') || first === undefined) return spoken;
-  const { answerId, question } = first;
+  const answer = spoken.reply.buttons.find(({ action }) => action === 'working');
+  if (asking.place !== 'command' || channel.startsWith('D') || answer === undefined) return spoken;
+  const { answerId, question } = answer;
   const share: Button = { action: 'share', label: 'Share with the channel', answerId, question };
   return { ...spoken, reply: { ...spoken.reply, buttons: [share, ...spoken.reply.buttons] } };
 };

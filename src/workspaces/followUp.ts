@@ -31,7 +31,10 @@ export const questionBefore = async (desk: Desk, asking: Asking): Promise<Before
   if (thread === null) return null;
   const found = await desk.records.store.conversations.lastIn(thread, mostLookedAt);
   if (!found.ok) return null;
-  const last = found.value.find((each) => desk.permissions.mayRead(readerOf(asking), each));
+  // a question that was edited does not carry over from what it said before
+  const last = found.value.find(
+    (each) => each.from.message !== asking.from?.message && desk.permissions.mayRead(readerOf(asking), each),
+  );
   if (last === undefined) return null;
   // outside threads a direct conversation goes on for ever, and is not about the same thing for ever
   if (thread.thread === null && desk.clock.nowMs() - last.askedAtMs > listeningMs) return null;

@@ -90,6 +90,13 @@ describe('a follow-up', () => {
     expect(await ask('at 99%', { thread: '1.5', person: 'U2' })).toEqual(['noVerb']);
   });
 
+  test('that was edited does not carry over from what it said before', async () => {
+    const { ask } = await sitDown();
+    await ask('interval KELP 60d');
+    await ask('TARN 90d', { thread: '1.5', message: '7.5' });
+    expect(await ask('at 99%', { thread: '1.5', message: '7.5' })).toEqual(['interval KELP 60d at 99%']);
+  });
+
   test('is refused like any such words where the store is in trouble', async () => {
     const records = { ...(await recordsInMemory({ store: brokenStore })), tell: () => {} };
     const converse = createConverse(deskOn(records, () => live));

@@ -14,6 +14,8 @@ export type RecentAnswer = { readonly id: string; readonly question: string; rea
 
 /** What one person sees at home. */
 export type HomePage = {
+  /** What is said instead of all the rest to who is not answered here. */
+  readonly barred: string | null;
   /** How the prices stand, in a sentence. */
   readonly feed: string;
   readonly stale: string | null;
@@ -105,24 +107,26 @@ const turns = (page: HomePage): readonly object[] => {
 const lines = (all: readonly string[], otherwise: string) =>
   section(all.length === 0 ? otherwise : all.join('\n'));
 
+const homeBlocks = (page: HomePage): readonly object[] => [
+  ...(page.note === null ? [] : [section(page.note), { type: 'divider' }]),
+  header(titles.feed),
+  section(page.stale === null ? page.feed : `${page.feed}\nCaution: ${page.stale}`),
+  header(titles.subscriptions),
+  ...(page.subscriptions.length === 0 ? [section(none)] : page.subscriptions.map(row)),
+  ...turns(page),
+  header(titles.recent),
+  lines(recentInWords(page), nothingAsked),
+  header(titles.ask),
+  section([askLine, ...page.examples].join('\n')),
+  ...page.troubles.map((trouble) => quiet(trouble)),
+];
+
 /** The home page as a view of the workspace: one section with a menu for each digest or watch. */
 export const homeView = (page: HomePage): View => ({
   type: 'home',
   callback_id: homeId,
   private_metadata: String(page.page),
-  blocks: [
-    ...(page.note === null ? [] : [section(page.note), { type: 'divider' }]),
-    header(titles.feed),
-    section(page.stale === null ? page.feed : `${page.feed}\nCaution: ${page.stale}`),
-    header(titles.subscriptions),
-    ...(page.subscriptions.length === 0 ? [section(none)] : page.subscriptions.map(row)),
-    ...turns(page),
-    header(titles.recent),
-    lines(recentInWords(page), nothingAsked),
-    header(titles.ask),
-    section([askLine, ...page.examples].join('\n')),
-    ...page.troubles.map((trouble) => quiet(trouble)),
-  ],
+  blocks: page.barred === null ? homeBlocks(page) : [section(page.barred)],
 });
 
 const passagesOf = (page: HomePage): readonly Passage[] => [
@@ -140,6 +144,9 @@ const passagesOf = (page: HomePage): readonly Passage[] => [
 
 /** The home page as a reply, for a place without one: its menus are buttons. */
 export const homeReply = (page: HomePage): Reply =>
+  page.barred === null ? openReply(page) : reply('refusal', page.barred);
+
+const openReply = (page: HomePage): Reply =>
   reply('help', page.note ?? page.feed, {
     passages: [
       ...(page.note === null ? [] : [{ head: titles.feed, lines: [page.feed] }]),

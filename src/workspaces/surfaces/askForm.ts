@@ -21,7 +21,8 @@ type Asker = Pick<Asking, 'place' | 'from'>;
 export type AskForm = {
   /** From memory alone: a form has to stand within three seconds of the press. */
   readonly view: (values: AskValues) => View;
-  readonly tickers: (typed: string) => readonly ShownOption[];
+  /** Tickers of the feed, for who may ask in the chosen place or directly. */
+  readonly tickers: (askers: readonly Asker[], typed: string) => readonly ShownOption[];
   /** The question that the fields make, where it may be asked in the chosen place. */
   readonly read: (asker: Asker, values: AskValues) => ReadForm;
 };
@@ -100,9 +101,10 @@ export const createAskForm = (desk: Desk): AskForm => {
 
   return {
     view: (values) => askFormView({ verbs, levels, note: noteFor(values) }),
-    tickers: (typed) => {
+    tickers: (askers, typed) => {
       const live = desk.snapshot();
-      const known = live.ok ? live.value.tickers : [];
+      const may = askers.some((asker) => desk.permissions.mayAsk(readerOf(asker), 'interval').ok);
+      const known = live.ok && may ? live.value.tickers : [];
       return tickerOptions(tickersLike(typed, known, platformLimits.select.options));
     },
     read: (asker, values) => {

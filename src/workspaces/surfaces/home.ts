@@ -17,12 +17,31 @@ export type Home = (
   note: string | null,
 ) => Promise<HomePage>;
 
+const nothingHere = 'Nothing is shown here.';
+
+/** The home of somebody who is not answered: it tells nothing of the desk. */
+const closed = (barred: string, timeZone: string): HomePage => ({
+  barred,
+  feed: '',
+  stale: null,
+  subscriptions: [],
+  subscriptionCount: 0,
+  page: 0,
+  recent: [],
+  troubles: [],
+  examples: [],
+  timeZone,
+  note: null,
+});
+
 /** What one person sees at home: how the prices stand, what is posted for them, what they asked. */
 export const createHome =
   (desk: Desk): Home =>
   async (asking, wanted, note) => {
     const asker = readerOf(asking);
     await desk.permissions.learn(asker);
+    const here = desk.permissions.mayAsk(asker, 'help');
+    if (!here.ok) return closed(here.silent ? nothingHere : here.message, desk.timeZone);
     const may = desk.permissions.mayAsk(asker, 'feed');
     const { team, owner } = makerOf(asker);
     const status = desk.feedStatus();
@@ -39,6 +58,7 @@ export const createHome =
     const readable = (asked.ok ? asked.value : []).filter((line) => desk.permissions.mayRead(asker, line));
     const [ticker = 'KELP'] = live.ok ? live.value.tickers : [];
     return {
+      barred: null,
       feed: may.ok ? feedReply(status, desk.timeZone).sentence : may.message,
       stale: may.ok ? stalenessInWords(status.freshness) : null,
       subscriptions: all.slice(page * subscriptionsPerPage, (page + 1) * subscriptionsPerPage),

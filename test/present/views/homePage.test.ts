@@ -16,6 +16,7 @@ const digest = (number: number, more: Partial<SubscriptionInWords> = {}): Subscr
 });
 
 const page = (more: Partial<HomePage> = {}): HomePage => ({
+  barred: null,
   feed: 'The feed holds 8,651 prices of 12 tickers.',
   stale: null,
   subscriptions: [digest(1), digest(2, { state: 'paused', pausedWhy: 'place' })],

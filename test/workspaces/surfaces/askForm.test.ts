@@ -75,9 +75,22 @@ describe('the fields of the form', () => {
   test('cannot be read while there are no prices', () => {
     const none = createAskForm(deskOn(records, () => refuse(problem('feedMissing', 'No file.'))));
     expect(none.read(asker, values({}))).toEqual({ ok: false, faults: { ticker: 'No file.' } });
-    expect(none.tickers('k')).toEqual([]);
+    expect(none.tickers([asker], 'k')).toEqual([]);
     expect(viewFaults(none.view(emptyForm))).toEqual([]);
   });
+});
+
+test('tickers are offered to who may ask in one of the places, and to nobody else', () => {
+  const mayAsk = (asked: { readonly place: string }) =>
+    asked.place === 'direct' ? ({ ok: true } as const) : ({ ok: false, silent: true, message: '' } as const);
+  const barred = createAskForm(
+    deskOn(records, () => live, { permissions: { ...everythingAllowed, mayAsk } }),
+  );
+  expect(barred.tickers([asker], 'k')).toEqual([]);
+  expect(barred.tickers([asker, { place: 'direct' }], 'k').map(({ value }) => value)).toEqual([
+    'KELP',
+    'KELP.ONE',
+  ]);
 });
 
 test('the form keeps the limits, whatever stands in it', () => {

@@ -15,6 +15,9 @@ export type Forming = Speaking & {
   readonly respond: Respond;
 };
 
+/** The platform waits three seconds for an answer about a form; finding out who listens may take most of them. */
+const readyLimitMs = 2_000;
+
 const opening = z.object({ trigger_id: z.string() });
 
 /** Opens the form. Its trigger lives three seconds, so nothing is looked up before. */
@@ -43,6 +46,18 @@ export const checkForm = async ({ wire, conversation, log }: Forming, body: unkn
   log.warn(`A form was not brought up to date: ${outcome.kind}.`);
 };
 
+const typedAhead = z.object({ value: z.string() });
+
+/** What a type-ahead offers, to who may ask in the place chosen so far or in a direct conversation. */
+export const offerTickers = async ({ conversation, time }: Forming, body: unknown) => {
+  const [read, typed] = [formBody.safeParse(body), typedAhead.safeParse(body)];
+  if (!read.success || !typed.success) return [];
+  const { place } = valuesOf(read.data);
+  const askers = [askerOf(read.data, place), { ...askerOf(read.data, null), place: 'direct' as const }];
+  await atMost(time, readyLimitMs, Promise.all(askers.map(conversation.ready)));
+  return conversation.form.tickers(askers, typed.data.value);
+};
+
 const formNote = 'Asked with the form.';
 const noPinNote = 'Asked with the form. The bot is no member here: this message cannot be pinned or changed.';
 
@@ -67,9 +82,6 @@ const answerForm = async (forming: Forming, body: FormBody, question: string): P
     });
   }
 };
-
-/** The platform waits three seconds for the last word on a form; finding out who listens may take most of them. */
-const readyLimitMs = 2_000;
 
 /** What the platform is told of a form that was sent: errors keep it open, null closes it. */
 export type FormVerdict = {

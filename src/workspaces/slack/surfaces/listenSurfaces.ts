@@ -3,7 +3,7 @@ import { askFormId } from '../../../present/views/askForm.ts';
 import type { Self } from '../lookup.ts';
 import { answerPress, type Pressing } from '../press.ts';
 import type { Feature } from '../scopes.ts';
-import { checkForm, type Forming, openForm, submitForm } from './form.ts';
+import { checkForm, type Forming, offerTickers, openForm, submitForm } from './form.ts';
 import { pressedHome, showHome } from './home.ts';
 import { pinChosen, pinShortcutId } from './pinShortcut.ts';
 
@@ -20,8 +20,8 @@ const hearShortcuts = (app: App, surfacing: Surfacing): void => {
     await ack();
     await pinChosen(surfacing, body);
   });
-  app.options<'block_suggestion'>('ticker', async ({ ack, payload }) => {
-    await ack({ options: [...surfacing.conversation.form.tickers(payload.value)] });
+  app.options<'block_suggestion'>('ticker', async ({ ack, body }) => {
+    await ack({ options: [...(await offerTickers(surfacing, body))] });
   });
   app.view({ type: 'view_submission', callback_id: askFormId }, async ({ ack, body }) => {
     await submitForm(surfacing, body, (verdict) => (verdict === null ? ack() : ack(verdict)));
