@@ -13,7 +13,7 @@ import { answerPins } from './pins/answerPins.ts';
 import { answerPress } from './press.ts';
 import { isOfPins, isOfRecords, isOfSubscriptions, isStatistical } from './questionKinds.ts';
 import { answerOfRecords } from './records/answerRecords.ts';
-import { answerOfSubscriptions } from './subscriptions/answerSubscriptions.ts';
+import { spokenOfSubscriptions } from './subscriptions/spokenOfSubscriptions.ts';
 
 export type { Asking, Converse, Pressing, Spoken } from './conversation.ts';
 export type { Desk } from './desk.ts';
@@ -23,7 +23,8 @@ const needsNoPrices = (outcome: ReadOutcome): boolean =>
   outcome.ok &&
   (['help', 'feed'].includes(outcome.value.question.verb) ||
     isOfRecords(outcome.value.question) ||
-    isOfPins(outcome.value.question));
+    isOfPins(outcome.value.question) ||
+    isOfSubscriptions(outcome.value.question));
 
 /** One conversation for every workspace: text in, replies out. */
 export const createConverse = (desk: Desk): Converse => {
@@ -56,11 +57,7 @@ export const createConverse = (desk: Desk): Converse => {
     if (isStatistical(question))
       return live.ok ? answerStatistical(desk, read, question, live.value, asking) : refused(live);
     if (isOfRecords(question)) return answerRecords(question, live, asking);
-    if (isOfSubscriptions(question)) {
-      const asker = readerOf(asking);
-      const done = await answerOfSubscriptions(desk, { question, assumed: read.assumed, asker });
-      return done.ok ? said(done.value) : refused(done);
-    }
+    if (isOfSubscriptions(question)) return spokenOfSubscriptions(desk, read, question, readerOf(asking));
     return question.verb === 'help'
       ? said(helpReply(desk.helpPage(question.topic)))
       : answerFeed(desk, read, question.ticker, live);

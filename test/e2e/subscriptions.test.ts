@@ -44,6 +44,13 @@ describe('a digest', () => {
     expect((await asked(`again ${again}`))[0]?.kind).toBe('record');
   });
 
+  test('is drawn, the figures beside the picture', async () => {
+    const [spoken] = await converse.ask({ text: 'digest now D-1 as picture', place: 'terminal' });
+    expect(spoken?.pictures).toHaveLength(1);
+    expect(spoken?.pictures?.[0]?.altText).toMatch(/KELP VaR/);
+    expect(spoken?.reply.table?.rows).toHaveLength(2);
+  });
+
   test('is changed, paused, taken up, listed and stopped', async () => {
     expect(await sentence('digest change D-1 09:00 mon,thu')).toBe(
       'D-1 is changed. Next post: Monday 2026-11-30 09:00 UTC.',

@@ -13,7 +13,7 @@ export const subscriptionTopics: readonly VerbTopic[] = [
       'DAYS: sessions (default), weekdays, daily, mon,thu, month start, month end',
       'TIME: 08:30, 8.30, 8:30am; ZONE: an IANA time zone, or a city that the desk has named',
       'digest list',
-      'digest now, pause, resume or stop ID',
+      'digest now, pause, resume or stop ID; digest now ID as picture',
       'digest change ID and what is to be another way',
     ],
     examples: [

@@ -4,6 +4,7 @@ import { watchNowInWords } from '../../present/compose/scheduled/watch.ts';
 import type { Reply } from '../../present/reply.ts';
 import type { DigestQuestion, SubscriptionQuestion, WatchQuestion } from '../../questions/question.ts';
 import { type Result, succeed } from '../../terms/result.ts';
+import type { DigestPost } from '../../terms/scheduledPosts.ts';
 import type { Subscription } from '../../terms/subscriptions.ts';
 import type { Asker } from '../permissions.ts';
 import {
@@ -74,12 +75,20 @@ const listed = async (
   return succeed(subscriptionsReply(kind, words(here.value), words(elsewhere), weekdaysAssumed));
 };
 
-const shownNow = async (desk: SubscribingDesk, asker: Asker, id: string): Promise<Result<Reply>> => {
+/** What a digest would post now, for whoever may see it. */
+export const digestFor = async (
+  desk: SubscribingDesk,
+  asker: Asker,
+  id: string,
+): Promise<Result<DigestPost>> => {
   const open = openFor(desk);
   if (!open.ok) return open;
   const found = await findFor(desk, open.value, asker, id, 'see');
-  if (!found.ok) return found;
-  const post = await open.value.digestNow(found.value);
+  return found.ok ? open.value.digestNow(found.value) : found;
+};
+
+const shownNow = async (desk: SubscribingDesk, asker: Asker, id: string): Promise<Result<Reply>> => {
+  const post = await digestFor(desk, asker, id);
   return post.ok ? succeed(digestNowReply(post.value)) : post;
 };
 

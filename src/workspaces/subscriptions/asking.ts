@@ -48,7 +48,7 @@ export const askAndKeep = (desk: AskingDesk, snapshot: PriceSnapshot) => {
     const outcome = await workedOut(question, canonicalText(question));
     if (!outcome.ok) return outcome;
     const { team, channel, owner: person, place, kind, id } = by;
-    const from = place === 'terminal' ? askedFromNowhere : { ...askedFromNowhere, team, channel, person };
+    const from = { ...askedFromNowhere, team: place === 'terminal' ? null : team, channel, person };
     const { answers } = await keepAnswer(desk.records, {
       ...outcome.value,
       question,

@@ -104,6 +104,12 @@ describe('a digest that exists', () => {
   });
 });
 
+test('a digest is shown now as a picture too', () => {
+  const read = questionIn('digest now D-12 as picture');
+  expect(read.question).toEqual({ verb: 'digest', do: 'now', id: 'D-12' });
+  expect(read.wishes).toEqual(['picture']);
+});
+
 describe('a digest that cannot be read', () => {
   test.each([
     ['digest', 'noTicker', 'digest list'],
@@ -128,6 +134,9 @@ describe('a digest that cannot be read', () => {
     ['digest change 09:00', 'missingPart', 'digest list'],
     ['digest pause D-12 D-13', 'repeated', 'digest pause D-12'],
     ['digest pause stop D-12', 'repeated', 'digest pause D-12'],
+    ['digest pause D-12 as picture', 'notForVerb', 'digest pause D-12'],
+    ['digest KELP as picture', 'notForVerb', `digest sessions 08:30 Europe/London KELP ${figure}`],
+    ['digest now D-12 as json', 'notForVerb', 'digest now D-12'],
   ])('%s: %s', (text, code, suggestion) => {
     expect(problemIn(text)).toMatchObject({ code, suggestion });
   });

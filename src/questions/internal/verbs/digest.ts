@@ -3,7 +3,7 @@ import { clockText } from '../../../terms/zonedTime.ts';
 import { limits } from '../../limits.ts';
 import type { DigestChange, DigestFigure, DigestQuestion } from '../../question.ts';
 import { type Attempt, attained, faulty } from '../faults/fault.ts';
-import { firstOf, has, type PieceKind } from '../pieces/piece.ts';
+import { allOf, firstOf, has, type PieceKind } from '../pieces/piece.ts';
 import type { Recogniser } from '../recognisers/recogniser.ts';
 import { asClock, clock } from '../recognisers/schedule/clock.ts';
 import { scheduleDays, scheduleDayWords } from '../recognisers/schedule/days.ts';
@@ -14,7 +14,7 @@ import { settleLevels } from './settle.ts';
 import { idOf, nothingToDo, onlyThese } from './subscriptionId.ts';
 import { takeTailLevel } from './tailLevel.ts';
 import { createTaking, type Taking } from './taking.ts';
-import { missing, type ReadLine, type VerbLine, type VerbReader } from './verbReader.ts';
+import { faultAtPiece, missing, type ReadLine, type VerbLine, type VerbReader } from './verbReader.ts';
 
 const named = { noun: 'digest', letter: 'D' } as const;
 
@@ -110,11 +110,21 @@ const change = (line: VerbLine): Attempt<ReadLine> => {
   });
 };
 
+/** Only what is shown now can be drawn, and nothing of a digest is had as data. */
+const wrongWish = (line: VerbLine, asked: string): Attempt<null> => {
+  const unwanted = allOf(line.pieces, 'wish').find(({ piece }) => asked !== 'now' || piece.wish === 'json');
+  if (unwanted === undefined) return attained(null);
+  const says = 'goes with digest now and a picture alone. Leave it out.';
+  return faulty(faultAtPiece(line, unwanted, { code: 'notForVerb', says, instead: [''] }));
+};
+
 const read = (line: VerbLine): Attempt<ReadLine> => {
   const asked = firstOf(line.pieces, 'doing')?.doing ?? 'add';
+  const wished = wrongWish(line, asked);
+  if (!wished.ok) return wished;
   if (asked === 'add') return add(line);
   if (asked === 'change') return change(line);
-  const kinds: ReadonlySet<PieceKind> = new Set(asked === 'list' ? [] : ['subscriptionId']);
+  const kinds: ReadonlySet<PieceKind> = new Set(asked === 'list' ? [] : ['subscriptionId', 'wish']);
   const alone = onlyThese(line, kinds, `digest ${asked}`);
   if (!alone.ok) return alone;
   if (asked === 'list') return attained({ questions: [{ verb: 'digest', do: 'list' }], assumed: [] });
@@ -125,7 +135,7 @@ const read = (line: VerbLine): Attempt<ReadLine> => {
 
 export const digest: VerbReader = {
   verb: 'digest',
-  takes: new Set<PieceKind>([...changeable, 'doing', 'subscriptionId']),
+  takes: new Set<PieceKind>([...changeable, 'doing', 'subscriptionId', 'wish']),
   tickers: { least: 0, most: limits.tickersPerDigest },
   recognise,
   ownWords: [...languageWords, ...scheduleDayWords, ...doingWords],
