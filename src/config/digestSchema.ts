@@ -31,6 +31,11 @@ export const digests = z.strictObject({
     says: 'a digest that is later than this, because the bot was not running, is left out and the next one says so',
     expects: 'a whole number of hours from 1 to 23',
   }).default(3),
+  picture: described({
+    kind: z.boolean(),
+    says: 'a digest is followed by its picture, in its thread',
+    expects: 'true or false',
+  }).default(false),
   cities: z.record(z.string().trim().min(1), ianaZone).default({}).meta({
     description: 'cities that schedules may name in the place of a time zone',
     expects: 'names, each with an IANA time zone such as Europe/London',

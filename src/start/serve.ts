@@ -31,6 +31,7 @@ import { sitAt } from './session.ts';
 import { settingsFor } from './settings.ts';
 import { stateOf } from './storeState.ts';
 import { createSubscriptions, type Subscriptions } from './subscriptions/deskSubscriptions.ts';
+import { createDigestPictures, type DigestPictures } from './subscriptions/digestPictures.ts';
 import { deliverInTerminal, runSubscriptions } from './subscriptions/running.ts';
 import { thisTerminal } from './terminal.ts';
 import { laterWall } from './wall.ts';
@@ -52,6 +53,7 @@ type Serving = {
   readonly places: Places;
   readonly whenUnsure: WhenUnsure;
   readonly subscriptions: Subscriptions;
+  readonly digestPictures: DigestPictures | null;
   readonly desk: Desk;
   readonly standWall: (wall: Wall) => void;
 };
@@ -78,7 +80,7 @@ const tickersOf = (feed: LiveFeed): readonly string[] => {
 const sittingLength = 8;
 
 const serveTerminal = async (
-  { converse, surfaces, subscriptions, permissions, desk }: Serving,
+  { converse, surfaces, subscriptions, permissions, desk, digestPictures }: Serving,
   asked: Arguments,
 ): Promise<number> => {
   const here = thisTerminal();
@@ -91,7 +93,7 @@ const serveTerminal = async (
   const code = await sitAt(here, asked, async (terminal) => {
     const running = runSubscriptions(subscriptions, {
       team: terminalTeam,
-      deliver: deliverInTerminal(terminal),
+      deliver: deliverInTerminal(terminal, digestPictures),
       placeState: permissions.placeVerdict,
       tell: terminal.write,
     });
@@ -144,6 +146,9 @@ const main = async (): Promise<number> => {
     places,
     whenUnsure: settings.slack.whenUnsure,
     subscriptions,
+    digestPictures: settings.digests.picture
+      ? createDigestPictures({ drawing, snapshot: feed.snapshot, tell: log.error })
+      : null,
     desk,
     standWall,
   };

@@ -15,6 +15,7 @@ import type { Surfaces } from '../workspaces/surfaces/surfaces.ts';
 import { machineTime } from './machineTime.ts';
 import { slackConversation } from './slackConversation.ts';
 import type { Subscriptions } from './subscriptions/deskSubscriptions.ts';
+import type { DigestPictures } from './subscriptions/digestPictures.ts';
 import { deliverInSlack, runSubscriptions } from './subscriptions/running.ts';
 import { type TendingParts, tendWorkspace } from './tending.ts';
 import { wallIn } from './wall.ts';
@@ -53,6 +54,8 @@ export type InSlack = {
   readonly standWall: (wall: Wall) => void;
   readonly whenUnsure: WhenUnsure;
   readonly subscriptions: Subscriptions;
+  /** null where digests go without a picture. */
+  readonly digestPictures: DigestPictures | null;
 };
 
 /** Answers in Slack until the process is told to stop; the problem where it could not begin. */
@@ -63,6 +66,7 @@ export const runSlack = async (
   newId: () => string,
 ): Promise<Problem | null> => {
   const { converse, tickers, surfaces, permissions, places, records, whenUnsure, subscriptions } = serving;
+  const { digestPictures: draw } = serving;
   let hear: (news: News) => Promise<void> = async () => {};
   const started = await startSlack(
     { ...settingsOf(workspace), whenUnsure },
@@ -78,10 +82,10 @@ export const runSlack = async (
     },
   );
   if (!started.ok) return started.problem;
-  const { port, team, deliveries, pinBoard } = started.value;
+  const { port, team, deliveries, showPicture, pinBoard } = started.value;
   const where = {
     team,
-    deliver: deliverInSlack(deliveries),
+    deliver: deliverInSlack(deliveries, draw === null ? null : { draw, show: showPicture }),
     placeState: permissions.placeVerdict,
     tell: log.error,
   };

@@ -3,7 +3,7 @@ import { toBlocks } from '../present/blocks.ts';
 import { type Button, type ButtonAction, buttonActions, type Reply, reply } from '../present/reply.ts';
 import { homeView } from '../present/views/homePage.ts';
 import { admission } from '../workspaces/admission.ts';
-import { type Asking, type Spoken, type SpokenPicture, said } from '../workspaces/conversation.ts';
+import { type Asking, type Spoken, said } from '../workspaces/conversation.ts';
 import type { Converse } from '../workspaces/converse.ts';
 import { everythingAllowed, type Permissions } from '../workspaces/permissions.ts';
 import type { Conversation, Press, SpokenReply } from '../workspaces/slack/ports.ts';

@@ -11,7 +11,7 @@ import { listen } from './listen.ts';
 import { inWords, libraryLog, maskedLog, silentLog } from './log.ts';
 import type { Self } from './lookup.ts';
 import { editPace, makePace, messagePace } from './pace.ts';
-import { makeShow } from './pictures/show.ts';
+import { makeShow, type ShowPicture } from './pictures/show.ts';
 import { makePinBoard, type PinBoard } from './pinBoard.ts';
 import { lookupsOver } from './places/lookups.ts';
 import type { SlackPorts } from './ports.ts';
@@ -36,6 +36,7 @@ export type SlackWorkspace = {
   readonly features: ReadonlySet<Feature>;
   readonly voice: Voice;
   readonly deliveries: Deliveries;
+  readonly showPicture: ShowPicture;
   readonly pinBoard: PinBoard;
   /** The port that requests come in at; null over sockets. */
   readonly port: number | null;
@@ -96,6 +97,15 @@ const open = async (reception: Reception): Promise<Result<null>> => {
   }
 };
 
+/** What the platform's client must not do by itself: it would post twice, and wait where others wait for it. */
+const clientOptionsFor = ({ apiUrl }: SlackSettings) => ({
+  retryConfig: { retries: 0 },
+  rejectRateLimitedCalls: true,
+  timeout: callTimeoutMs,
+  allowAbsoluteUrls: false,
+  ...(apiUrl === null ? {} : { slackApiUrl: apiUrl }),
+});
+
 /** Joins the workspace and answers there until it is stopped. */
 export const startSlack = async (
   settings: SlackSettings,
@@ -105,13 +115,7 @@ export const startSlack = async (
   const { conversation, time, newId, seen, store, places, onNews } = ports;
   const secret = receiving.mode === 'socket' ? receiving.appToken : receiving.signingSecret;
   const log = maskedLog(ports.log, [botToken, secret]);
-  const clientOptions = {
-    retryConfig: { retries: 0 },
-    rejectRateLimitedCalls: true,
-    timeout: callTimeoutMs,
-    allowAbsoluteUrls: false,
-    ...(settings.apiUrl === null ? {} : { slackApiUrl: settings.apiUrl }),
-  };
+  const clientOptions = clientOptionsFor(settings);
   const straight = makeWire(new webApi.WebClient(botToken, { ...clientOptions, logger: silentLog }));
   const identified = await identify(straight);
   if (!identified.ok) return identified;
@@ -168,6 +172,7 @@ export const startSlack = async (
     features,
     voice,
     deliveries,
+    showPicture,
     pinBoard: makePinBoard(wire, time),
     port: reception.port(),
     idle: work.idle,

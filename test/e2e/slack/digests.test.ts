@@ -7,6 +7,7 @@ import { createDesk } from '../../../src/start/desk.ts';
 import { feedOnce } from '../../../src/start/feed.ts';
 import { slackConversation } from '../../../src/start/slackConversation.ts';
 import { createSubscriptions } from '../../../src/start/subscriptions/deskSubscriptions.ts';
+import { createDigestPictures } from '../../../src/start/subscriptions/digestPictures.ts';
 import { deliverInSlack } from '../../../src/start/subscriptions/running.ts';
 import type { Clock } from '../../../src/terms/clock.ts';
 import { createConverse } from '../../../src/workspaces/converse.ts';
@@ -21,7 +22,7 @@ import { startBot } from './bot.ts';
 const minuteMs = 60_000;
 
 /** The whole bot on the demonstration prices; the clock is the platform’s, which begins on a Friday at 15:00 UTC. */
-const startDesk = async () => {
+const startDesk = async (pictured = false) => {
   let now: Clock['nowMs'] = () => Date.UTC(2026, 10, 27, 15);
   const clock = { nowMs: () => now() };
   const store = accepted(await openSqlite(null));
@@ -34,12 +35,15 @@ const startDesk = async () => {
   const stage = await startBot({ store, conversation });
   now = stage.platform.time.nowMs;
   const told: string[] = [];
+  const tell = (message: string) => void told.push(message);
+  const draw = createDigestPictures({ drawing: layingOut, snapshot: parts.snapshot, tell });
+  const pictures = pictured ? { draw, show: stage.bot.showPicture } : null;
   const runnerOf = (holder: string) =>
     createRunner({
       ...subscriptions.ofRun,
       team: stage.bot.team,
       holder,
-      deliver: deliverInSlack(stage.bot.deliveries),
+      deliver: deliverInSlack(stage.bot.deliveries, pictures),
       placeState: everythingAllowed.placeVerdict,
       tell: (message) => told.push(message),
     });
@@ -70,6 +74,23 @@ test('a digest that was asked for is posted once when it is due, its details in 
     await Promise.all(runners.map((runner) => runner.idle()));
   }
   expect(platform.posts.all).toHaveLength(3);
+  expect(told).toEqual([]);
+});
+
+test('a digest that goes with its picture has it in its thread, once', async () => {
+  const { platform, runnerOf, told } = await startDesk(true);
+  platform.mention({ channel: 'C0DESK', text: 'digest weekdays 15:30 KELP TARN' });
+  await platform.posts.next();
+  platform.time.advance(30 * minuteMs);
+  const runners = [runnerOf('first'), runnerOf('second')];
+  await Promise.all(runners.map((runner) => runner.tick()));
+  const head = await platform.posts.next();
+  const shown = await platform.posts.next();
+  expect(shown).toMatchObject({ threadTs: head.ts, blocks: [{ type: 'image' }] });
+  expect(shown.text).toMatch(/^One strip for each of 2 tickers: last returns against the 99% VaR of a day\./);
+  await platform.posts.next();
+  await Promise.all(runners.map((runner) => runner.idle()));
+  expect(platform.posts.all).toHaveLength(4);
   expect(told).toEqual([]);
 });
 

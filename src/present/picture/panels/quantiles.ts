@@ -1,6 +1,6 @@
 import { colours, sheetMargin, sheetWidth } from '../look.ts';
 import type { Panel } from '../sheet.ts';
-import { type Domain, percentLabel, plotFrame, signed, within } from './axes.ts';
+import { type Domain, percentLabel, plotFrame, roomy, signed, within } from './axes.ts';
 
 export type QuantilePlot = {
   readonly head: string;
@@ -20,7 +20,7 @@ const single = (
   first: boolean,
 ) => {
   const scale = within(domain);
-  const axis = { labelExpr: signed('+~%'), tickCount: 4, labelOverlap: 'greedy' as const };
+  const axis = { labelExpr: signed('+~%'), tickCount: 3, ...roomy };
   const side = first
     ? { ...axis, title: null, domain: false, ticks: false, minExtent: labels, maxExtent: labels }
     : { ...axis, title: null, domain: false, ticks: false, labels: false };
