@@ -126,7 +126,8 @@ class InProcessRunner {
    */
   async dryRun({ testFiles, files }) {
     instrumented().counts = new Float64Array(mostMutants);
-    this.learned.testFiles = testFiles.map((file) => relative(process.cwd(), file));
+    const quick = testFiles.filter((file) => !file.endsWith('.slow.test.ts'));
+    this.learned.testFiles = quick.map((file) => relative(process.cwd(), file));
     this.learned.originals = originalsOf(files ?? []);
     this.environment = await openEnvironment(this.learned.testFiles);
     await this.turnTo('');
