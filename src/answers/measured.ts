@@ -3,18 +3,23 @@ import { measuredCoverage } from '../stats/coverage/measuredCoverage.ts';
 import { coverageProcessFor } from '../stats/coverage/process.ts';
 import { robustAutocorrelation } from '../stats/dependence/autocorrelation.ts';
 import { dependenceFoundBelow, volatilityClustering } from '../stats/dependence/clustering.ts';
+import { centralMoments } from '../stats/moments/centralMoments.ts';
 import { jarqueBera } from '../stats/moments/jarqueBera.ts';
 import { leastCounts } from '../stats/returns/leastCounts.ts';
 import { type Level, levelText } from '../terms/level.ts';
 import { percent } from '../wording/percent.ts';
 import type { Warning } from './answer.ts';
 
+/** Differences of two series that move can all be the same, and have no tails then. */
+const haveTails = (returns: Float64Array): boolean =>
+  returns.length >= leastCounts.kurtosis && centralMoments(returns).m2 > 0;
+
 /** Which simulated process comes nearest to these returns: its measured coverage is quoted. */
 export const nearestProcess = (returns: Float64Array): CoverageProcess =>
   coverageProcessFor({
     dependent: robustAutocorrelation(returns).p < dependenceFoundBelow,
     clustered: volatilityClustering(returns).p < dependenceFoundBelow,
-    fatTailed: returns.length >= leastCounts.kurtosis && jarqueBera(returns).p < 0.05,
+    fatTailed: haveTails(returns) && jarqueBera(returns).p < 0.05,
   });
 
 /** From the process under which intervals hold least often to the one under which they hold best. */

@@ -58,7 +58,10 @@ const anyQuestion = fc
     [verb, /compare|records|help/.test(verb) ? '' : `\`${ticker}\``, ...more].join(' '),
   );
 
-describe('a message', () => {
+/** Buttons whose answers follow from the answer alone. */
+const pressed: readonly string[] = ['working', 'more', 'level'];
+
+describe('a message, and what each of its buttons brings up,', () => {
   test('keeps the limits and tells a notification the verdict, the data date and the id', async () => {
     await fc.assert(
       fc.asyncProperty(
@@ -67,9 +70,15 @@ describe('a message', () => {
         async (text, closes) => {
           const series = tickers.map((ticker, index) => seriesOf(ticker, closes[index] ?? []));
           const desk = deskOn(await recordsInMemory(), () => succeed(snapshotOf(series)));
-          for (const { reply, outcome } of await createConverse(desk).ask({ text, place: 'channel' })) {
+          const converse = createConverse(desk);
+          for (const { reply, outcome } of await converse.ask({ text, place: 'channel' })) {
             const message = toBlocks(reply);
             expect(limitFaults(message)).toEqual([]);
+            for (const button of reply.buttons) {
+              if (!pressed.includes(button.action)) continue;
+              for (const shown of await converse.press({ ...button, place: 'channel' }))
+                expect(limitFaults(toBlocks(shown.reply))).toEqual([]);
+            }
             if (outcome?.ok !== true) continue;
             const [{ id, asOf }] = outcome.value;
             expect(message.text).toContain(id);
@@ -79,7 +88,7 @@ describe('a message', () => {
           }
         },
       ),
-      { seed: 21, numRuns: 120 },
+      { seed: 21, numRuns: 80 },
     );
   });
 });

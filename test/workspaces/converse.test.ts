@@ -148,3 +148,21 @@ describe('the button under a reply', () => {
     expect(spoken?.outcome).toMatchObject({ ok: false, problem: { code: 'storeUnavailable' } });
   });
 });
+
+describe('two tickers that move alike', () => {
+  test('are compared without a fault, whatever becomes of it', async () => {
+    const alike = succeed(
+      snapshotOf([
+        seriesOf('KELP', closes),
+        seriesOf('TARN', closes),
+        seriesOf(
+          'FLAT',
+          closes.map((close) => close * 2),
+        ),
+      ]),
+    );
+    const converse = createConverse(deskOn(records, () => alike));
+    for (const text of ['compare KELP TARN', 'compare KELP FLAT', 'compare KELP TARN FLAT'])
+      expect(await say(converse, text)).toHaveLength(1);
+  });
+});
