@@ -18,7 +18,7 @@ const freePort = (): Promise<number> =>
   });
 
 /** How long a busy machine may take to make a server. */
-export const startWithinMs = 60_000;
+export const startWithinMs = 180_000;
 
 /** A real PostgreSQL server of its own, thrown away when it is stopped. */
 export type PostgresServer = {

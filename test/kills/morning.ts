@@ -87,7 +87,8 @@ type Digest = { readonly key: string; readonly channel: string };
 const keepCopy = (plan: object, due: readonly Digest[]) => {
   let child: ChildProcess | null = null;
   let ended = false;
-  let ready: Promise<void> = Promise.resolve();
+  let isUp = false;
+  const waiting: (() => void)[] = [];
   let gone: Promise<void> = Promise.resolve();
   const complaints: string[] = [];
   const start = (): void => {
@@ -101,21 +102,22 @@ const keepCopy = (plan: object, due: readonly Digest[]) => {
       if (!ended) start();
     });
     gone = new Promise((resolve) => running.once('exit', () => resolve()));
-    ready = new Promise((resolve) => {
-      running.once('message', () => {
-        running.send(due, () => {});
-        resolve();
-      });
+    running.once('message', () => {
+      running.send(due, () => {});
+      isUp = true;
+      for (const goOn of waiting.splice(0)) goOn();
     });
     child = running;
   };
   start();
   return {
-    ready: () => ready,
+    /** Resolves once it runs, however often it is started until then. */
+    ready: (): Promise<void> => (isUp ? Promise.resolve() : new Promise((resolve) => waiting.push(resolve))),
     tell: (digests: readonly Digest[]): void => {
       if (child?.connected === true) child.send(digests, () => {});
     },
     kill: (): void => {
+      isUp = false;
       child?.kill('SIGKILL');
     },
     end: (): void => {
