@@ -6,6 +6,7 @@ import { computeInline } from './compute/inline.ts';
 import { createDesk } from './desk.ts';
 import { exitCodes } from './exit.ts';
 import { feedOnce } from './feed.ts';
+import { digestOf } from './gallery/digest.ts';
 import { galleryQuestions } from './gallery/questions.ts';
 import { screenOf } from './gallery/screen.ts';
 import { writeGallery } from './gallery/writeGallery.ts';
@@ -13,6 +14,7 @@ import { drawInline } from './pictures/draw.ts';
 import { versionsOf } from './records/records.ts';
 import { settingsFor } from './settings.ts';
 import { createSubscriptions } from './subscriptions/deskSubscriptions.ts';
+import { createDigestPictures } from './subscriptions/digestPictures.ts';
 
 const refuseWith = (problems: readonly { readonly message: string }[]): number => {
   for (const { message } of problems) process.stderr.write(`${message}\n`);
@@ -34,9 +36,12 @@ const main = async (): Promise<number> => {
   const records = { store: store.value, keeps: true, versions: versionsOf(settings), tell };
   const parts = { settings, clock, ...(await feedOnce(settings, clock)), compute: computeInline(), records };
   const subscriptions = createSubscriptions({ ...parts, store: store.value.subscriptions }).ofDesk;
-  const converse = createConverse(createDesk({ ...parts, drawing: drawInline(), subscriptions }));
+  const drawing = drawInline();
+  const converse = createConverse(createDesk({ ...parts, drawing, subscriptions }));
   const folder = resolve(asked.words[0] ?? 'gallery');
-  const page = await writeGallery(folder, converse, galleryQuestions);
+  const draw = createDigestPictures({ drawing, snapshot: parts.snapshot, tell });
+  const posted = await digestOf(converse, subscriptions, draw);
+  const page = await writeGallery(folder, converse, galleryQuestions, posted);
   await store.value.close();
   process.stdout.write(`${page}\n${await screenOf(page, `${folder}/screen.png`)}\n`);
   return exitCodes.answered;

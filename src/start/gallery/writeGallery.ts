@@ -20,25 +20,31 @@ const writePictures = async (
     }),
   );
 
+/** What is posted without being asked for. */
+export type Posted = { readonly title: string; readonly spoken: Spoken };
+
 /** Asks every question and writes what is said, picture by picture, with a page that shows it all; the page. */
 export const writeGallery = async (
   folder: string,
   converse: Pick<Converse, 'ask'>,
   questions: readonly string[],
+  posted: readonly Posted[] = [],
 ): Promise<string> => {
   await mkdir(folder, { recursive: true });
   const exhibits: Exhibit[] = [];
-  for (const [place, question] of questions.entries()) {
-    const spoken = await converse.ask({ text: question, place: 'channel' });
+  const exhibit = async (question: string, spoken: readonly Spoken[]): Promise<void> => {
     const replies = [];
     for (const each of spoken)
       replies.push({
         text: toText(each.reply, { width: terminalWidth }),
         message: toBlocks(each.reply),
-        pictures: await writePictures(folder, place, each),
+        pictures: await writePictures(folder, exhibits.length, each),
       });
     exhibits.push({ question, replies });
-  }
+  };
+  for (const question of questions)
+    await exhibit(question, await converse.ask({ text: question, place: 'channel' }));
+  for (const { title, spoken } of posted) await exhibit(title, [spoken]);
   const page = join(folder, 'index.html');
   await writeFile(page, galleryPage(exhibits));
   return page;
