@@ -27,6 +27,9 @@ export type SubscriptionParts = {
 /** So many digests are made at the same time: their questions wait for the same threads. */
 const madeAtOnce = 2;
 
+/** Threads take questions in order: what a person asks waits behind at most so many of a digest’s. */
+const questionsAtOnce = 2;
+
 const minuteMs = 60_000;
 
 /** What both a conversation and the run of what is due need, and the conversation’s own part. */
@@ -38,12 +41,13 @@ export type Subscriptions = {
 export const createSubscriptions = (parts: SubscriptionParts): Subscriptions => {
   const { settings, clock, snapshot, compute, records, store } = parts;
   const { waitForPricesMinutes, mostLateHours } = settings.digests;
+  const askInTurn = createInTurn(questionsAtOnce);
   const ofRun = {
     store,
     clock,
     prices: pricesFrom(
       {
-        compute: compute.answer,
+        compute: (job) => askInTurn(() => compute.answer(job)),
         policy: policyOf(settings),
         records,
         clock,
