@@ -32,6 +32,12 @@ const groups = [
         'EqualityOperator',
         'volatilityClustering(returns).p <= dependenceFoundBelow',
       ],
+      [
+        'backtests/dieboldMariano.ts',
+        'robustAutocorrelation(differences).p',
+        'EqualityOperator',
+        'robustAutocorrelation(differences).p <= dependenceFoundBelow',
+      ],
       ['samples/returnsForHalfWidth.ts', 'guess > mostSearched', 'EqualityOperator', 'guess >= mostSearched'],
       ['samples/returnsForPower.ts', 'guess > mostSearched', 'EqualityOperator', 'guess >= mostSearched'],
       [
@@ -202,6 +208,13 @@ const groups = [
         'EqualityOperator',
         'Math.abs(term) <= 1e-18 * sum',
       ],
+    ],
+  },
+  {
+    reason: 'of equal means either may be the best: identical losses have no p, and there is no place null',
+    mutants: [
+      ['backtests/league.ts', 'lowest === null || mean < lowest', 'EqualityOperator', 'mean <= lowest'],
+      ['backtests/league.ts', 'const lowest = best === null', 'ConditionalExpression', 'false'],
     ],
   },
 ];

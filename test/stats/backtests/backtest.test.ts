@@ -111,6 +111,7 @@ describe('days without a figure', () => {
       expect(verdict.firstRefusal?.code).toBe('priceDoesNotMove');
       expect(verdict.forecasts.days).toHaveLength(450);
       expect(verdict.forecasts.days.indexOf(230)).toBe(-1);
+      expect(verdict.standing?.meanQuantileLoss).toBeGreaterThan(0);
     }
     expect(accepted(run(stillQuestion(50))).commonDays).toBe(450);
   });
@@ -148,6 +149,14 @@ describe('refusals', () => {
       'The first day judged needs 250 returns before it, and there are 249. Ask for 1 days fewer, or for a shorter',
     ],
   ] as const)('%j is refused in words', (more, words) => expect(refusalMessage(run(more))).toContain(words));
+
+  test('what is needed is said in numbers as well', () => {
+    const needs = (more: Partial<BacktestQuestion>) => {
+      const outcome = run(more);
+      return outcome.ok ? null : outcome.problem.needs;
+    };
+    expect([needs({ dayCount: 1 }), needs({ firstDay: 249 })]).toEqual([2, 250]);
+  });
 
   test('two days are enough, and as many returns before the first as the window holds', () => {
     const least = { firstDay: 250, dayCount: 2, models: ['normal'] as const, replicates: 9 };

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { coverageTest } from '../../../src/stats/backtests/coverage.ts';
-import { exactIndependenceP } from '../../../src/stats/backtests/exactIndependence.ts';
+import { arrangementClasses, exactIndependenceP } from '../../../src/stats/backtests/exactIndependence.ts';
 import { conditionalCoverageTest, independenceTest } from '../../../src/stats/backtests/independence.ts';
 import { transitionsOf } from '../../../src/stats/backtests/transitions.ts';
 import { relativeError } from '../../laws/relativeError.ts';
@@ -75,4 +75,15 @@ describe('exact independence', () => {
     const atTheEnd = transitionsOf(Uint8Array.of(0, 0, 0, 1));
     expect(relativeError(exactIndependenceP(1, 4, atTheEnd) ?? 0, 1)).toBeLessThan(1e-12);
   });
+});
+
+test('more exceedances than quiet days: three among five lie in three runs in one of ten ways', () => {
+  // By hand: of the 10 placements of 3 in 5 days only E·E·E has three runs; 6 have two, 3 have one.
+  const shareOf = (runs: number) =>
+    arrangementClasses(3, 5)
+      .filter(({ transitions }) => 3 - transitions.n11 === runs)
+      .reduce((sum, { share }) => sum + share, 0);
+  expect(shareOf(3)).toBeCloseTo(0.1, 12);
+  expect(shareOf(2)).toBeCloseTo(0.6, 12);
+  expect(shareOf(1)).toBeCloseTo(0.3, 12);
 });

@@ -69,6 +69,10 @@ describe('standings', () => {
     expect(both[1]?.dieboldMarianoP).toBeCloseTo(2 * alone, 12);
   });
 
+  test('no model has no place', () => {
+    expect(standings([], level('0.975'))).toEqual([]);
+  });
+
   test('identical losses are not tested', () => {
     const [first, second] = standings([right, model(1.96, 2.338)], level('0.975'));
     expect([first?.dieboldMarianoP, second?.dieboldMarianoP]).toEqual([null, null]);
