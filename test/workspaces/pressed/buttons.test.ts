@@ -63,7 +63,7 @@ describe('another level', () => {
   test('is an answer on record like any other, asked where it was pressed', async () => {
     const { press, converse } = await ask('interval KELP');
     await press('At 99%', { person: 'U2' });
-    const [next] = await converse.ask({ text: 'TARN', place: 'channel', from });
+    const [next] = await converse.ask({ text: 'TARN', place: 'channel', from: { ...from, message: '3.5' } });
     expect(next?.outcome).toMatchObject({ ok: true, value: [{ question: 'interval TARN 60d at 99%' }] });
   });
 
