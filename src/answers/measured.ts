@@ -22,6 +22,10 @@ export const nearestProcess = (returns: Float64Array): CoverageProcess =>
     fatTailed: haveTails(returns) && jarqueBera(returns).p < 0.05,
   });
 
+/** The same for an interval of a mean, to which dependence does more than clustering, and which clustering would hide. */
+export const nearestProcessForMean = (returns: Float64Array): CoverageProcess =>
+  robustAutocorrelation(returns).p < dependenceFoundBelow ? 'autoregressive' : nearestProcess(returns);
+
 /** From the process under which intervals hold least often to the one under which they hold best. */
 const worstFirst: readonly CoverageProcess[] = [
   'garchT',

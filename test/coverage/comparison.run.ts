@@ -5,6 +5,12 @@ import { measureSuite, promisedGrid } from './suite.ts';
 measureSuite({
   name: 'comparison',
   procedures: comparisonProcedures,
-  grid: [...promisedGrid, { process: 'autoregressive', counts: [20, 60, 250, 1_000] }],
+  // The share of 1,000 samples has a standard error of 0.0069 at 0.95.
+  grid: [...promisedGrid, { process: 'autoregressive' as const, counts: [20, 60, 250, 1_000] }].map(
+    (row) => ({
+      ...row,
+      replications: 1_000,
+    }),
+  ),
   levels: ['0.95'],
 });

@@ -3,10 +3,11 @@ import { afterAll, describe, test } from 'vitest';
 import type { CoverageCell, CoverageProcess } from '../../src/stats/coverage/cell.ts';
 import { type Procedure, simulateCells } from './simulate.ts';
 
-/** A plan of cells: which processes at which counts. */
+/** A plan of cells: which processes at which counts, and how many samples where the usual number is not affordable. */
 export type Grid = readonly {
   readonly process: CoverageProcess;
   readonly counts: readonly number[];
+  readonly replications?: number;
 }[];
 
 /** The processes and counts at which every printed interval is measured. */
@@ -38,15 +39,13 @@ export type Suite = {
   readonly procedures: readonly Procedure[];
   readonly grid: Grid;
   readonly levels: readonly string[];
-  /** Where a sample is so dear that the usual number is not affordable. */
-  readonly replications?: number;
 };
 
 /** Measures a suite, a test for each process and count so that progress can be seen, and writes its file when all are done. */
 export const measureSuite = (suite: Suite): void => {
-  const { procedures, grid, levels, replications = replicationsPerCell } = suite;
+  const { procedures, grid, levels } = suite;
   describe(`coverage of ${suite.name}`, () => {
-    const settings = grid.flatMap(({ process, counts }) =>
+    const settings = grid.flatMap(({ process, counts, replications = replicationsPerCell }) =>
       counts.map((count) => [process, count, { process, count, replications }] as const),
     );
     const measured: CoverageCell[] = [];

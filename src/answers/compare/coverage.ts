@@ -2,7 +2,7 @@ import type { Comparison } from '../../stats/comparisons/compare.ts';
 import { pairedDifferences } from '../../stats/comparisons/meanDifference.ts';
 import type { Level } from '../../terms/level.ts';
 import type { Warning } from '../answer.ts';
-import { coverageWarningsOn, nearestProcess, worseProcess } from '../measured.ts';
+import { coverageWarningsOn, nearestProcess, nearestProcessForMean, worseProcess } from '../measured.ts';
 import type { ReturnSample } from '../sample.ts';
 
 /**
@@ -18,7 +18,9 @@ export const comparisonCoverage = (
   const both = worseProcess(nearestProcess(first.returns), nearestProcess(second.returns));
   const paired = kind === 'paired';
   const count = paired ? first.returns.length : first.returns.length + second.returns.length;
-  const ofMean = paired ? nearestProcess(pairedDifferences(first.returns, second.returns)) : both;
+  const dependent = [first.returns, second.returns].map(nearestProcessForMean).includes('autoregressive');
+  const ofPeriods = dependent ? 'autoregressive' : both;
+  const ofMean = paired ? nearestProcessForMean(pairedDifferences(first.returns, second.returns)) : ofPeriods;
   const ofRatio = ratio?.method === 'stationary' ? 'garchT' : both;
   return [
     ...coverageWarningsOn(
