@@ -70,10 +70,10 @@ test('where our own reader takes a file, the other reader finds the same in it, 
       const queried = accepted(await readQueriedFiles(files, settings, database));
       expect(await contentOf(plain)).toEqual(await contentOf(queried));
     }),
-    { seed: 20_261_201, numRuns: 200 },
+    { seed: 20_261_201, numRuns: 80 },
   );
-  expect(taken).toBeGreaterThan(70);
-});
+  expect(taken).toBeGreaterThan(20);
+}, 120_000);
 
 test('rows that cross the pieces of a file are whole, in text and in gzip', async () => {
   // 40,000 rows of 20 bytes and more are three pieces of 262,144 bytes and a part

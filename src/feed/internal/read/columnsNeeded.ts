@@ -13,17 +13,26 @@ const present = (columns: readonly SourceColumn[]): string => {
   return `its first row names ${quoted(names)}${more > 0 ? ` and ${more} more` : ''}`;
 };
 
-/** Finds each needed column by its exact name, which must stand there once. `names` maps our word to the file's name. */
+/** What else may be set right: a first row that is one name with a mark in it has another delimiter than was said. */
+const advice = (columns: readonly SourceColumn[], setting: string, otherwise: string): string => {
+  const [only] = columns.length === 1 ? columns : [];
+  if (only !== undefined && /[,;\t|]/.test(only.name))
+    return `Choose the delimiter of the file in the settings, or name its columns under ${setting}.`;
+  return `Correct the file, or name its columns under ${setting}${otherwise}.`;
+};
+
+/** Finds each needed column by its exact name, which must stand there once. `names` maps our word to the file's name; `otherwise` is more advice where one is not there. */
 export const findColumns = <Word extends string>(
   path: string,
   columns: readonly SourceColumn[],
   names: Readonly<Record<Word, string>>,
   setting: string,
+  otherwise = '',
 ): Result<Readonly<Record<Word, SourceColumn>>> => {
   const wanted: string[] = Object.values(names);
   const absent = wanted.filter((name) => columns.every((column) => column.name !== name));
   if (absent.length > 0) {
-    const message = `${path} has no column ${quoted(absent)}; ${present(columns)}. Correct the file, or name its columns under ${setting}.`;
+    const message = `${path} has no column ${quoted(absent)}; ${present(columns)}. ${advice(columns, setting, otherwise)}`;
     return refuse(problem(columns.length === 0 ? 'fileEmpty' : 'columnMissing', message));
   }
   const twice = wanted.find((name) => columns.filter((column) => column.name === name).length > 1);

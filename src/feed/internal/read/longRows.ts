@@ -69,6 +69,12 @@ const addRows = (rows: Rows, collected: Collected, faults: RowFaults): void => {
   }
 };
 
+/** A file with dates but neither tickers nor closes may have a column per ticker. */
+const looksWide = ({ columns }: Source, { columns: names }: FeedSettings): boolean => {
+  const has = (name: string): boolean => columns.some((column) => column.name === name);
+  return has(names.date) && !has(names.ticker) && !has(names.close);
+};
+
 /** Rows of a file with one row per date and ticker. */
 export const readLongRows = async (
   connection: DuckDBConnection,
@@ -83,6 +89,7 @@ export const readLongRows = async (
     source.columns,
     { date, ticker, price: adjustedClose ?? close },
     'feed.columns',
+    looksWide(source, settings) ? ', or set feed.shape to wide' : '',
   );
   if (!found.ok) return { rowCount: 0, refusal: found.problem };
   const extras = makeExtras(path, source, settings, collected, extrasAt, dayAt);
