@@ -1,6 +1,6 @@
 /**
  * The whole structure of a few small pictures, as it was when somebody had looked at them and found them good. Where one
- * is changed on purpose, look at the new picture (npm run gallery), then write it anew with UPDATE_PICTURES=1.
+ * is changed on purpose, look at the new picture (npm run gallery), then write it anew with UPDATE_PICTURES=1 and run npm run format.
  */
 import { readFileSync, writeFileSync } from 'node:fs';
 import { expect, test } from 'vitest';
