@@ -7,11 +7,10 @@ import { toText } from '../../present/text.ts';
 import type { Deliveries } from '../../workspaces/deliveries.ts';
 import type { ShowPicture } from '../../workspaces/slack/pictures/show.ts';
 import type { Terminal } from '../../workspaces/terminal/start.ts';
-import { machineTime } from '../machineTime.ts';
 import { shownPicture } from '../pictures/shown.ts';
 import type { Subscriptions } from './deskSubscriptions.ts';
 import type { DigestPictures } from './digestPictures.ts';
-import { keepRunning } from './loop.ts';
+import { clockTicks, keepRunning } from './loop.ts';
 
 /** Who draws digests for a workspace, and how their pictures are shown there. */
 export type PicturesInSlack = { readonly draw: DigestPictures; readonly show: ShowPicture };
@@ -58,4 +57,4 @@ export type RunningWhere = {
 
 /** Runs what falls due in one workspace until it is stopped. */
 export const runSubscriptions = ({ ofRun }: Subscriptions, where: RunningWhere) =>
-  keepRunning(createRunner({ ...ofRun, ...where, holder: randomUUID() }), machineTime, where.tell);
+  keepRunning(createRunner({ ...ofRun, ...where, holder: randomUUID() }), clockTicks, where.tell);
