@@ -22,14 +22,22 @@ export const exampleSettings = (): Settings => {
   return reading.settings;
 };
 
+const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
+
+/** The prices are read once for all the desks of a test file: nothing writes to them. */
+let feedRead: ReturnType<typeof feedOnce> | null = null;
+const demoFeed = (): ReturnType<typeof feedOnce> => {
+  feedRead ??= feedOnce(exampleSettings(), clock);
+  return feedRead;
+};
+
 /** The desk of the demonstration prices, on the morning after they end. */
 export const demoDesk = async (
   keeps = true,
   more: Pick<DeskParts, 'permissions' | 'wall'> = {},
 ): Promise<Desk> => {
   const settings = exampleSettings();
-  const clock = { nowMs: () => Date.parse('2026-11-28T08:00:00Z') };
-  const feed = await feedOnce(settings, clock);
+  const feed = await demoFeed();
   const records = await recordsInMemory({ keeps });
   const store = accepted(await openSqlite(null)).subscriptions;
   const parts = { settings, clock, ...feed, compute: computeInline(), records, ...more };
