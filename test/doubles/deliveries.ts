@@ -14,7 +14,7 @@ export const notedDeliveries = (): Noted => {
     said,
     deliveries: { say, sayAgain: say },
     memory: {
-      recall: async () => ({ again: false, standing: null, editing: null }),
+      recall: async () => ({ again: false, standing: null, editing: null, replied: false }),
       willEdit: async () => {},
     },
   };

@@ -1,10 +1,13 @@
 import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
+import { withRecordsUrl } from '../../src/config/recordsUrl.ts';
 import { openPostgres } from '../../src/records/openPostgres.ts';
 import type { Store } from '../../src/records/store.ts';
+import { recordsToKeep, recordsToRead } from '../../src/start/records/records.ts';
 import { deliveriesContract } from '../contracts/deliveries.contract.ts';
 import { inboxContract } from '../contracts/inbox.contract.ts';
 import { type PostgresServer, startPostgres, startWithinMs } from '../contracts/postgres.ts';
 import { storeContract } from '../contracts/store.contract.ts';
+import { exampleSettings } from '../e2e/demoDesk.ts';
 import { accepted, refusalCode } from '../laws/outcomes.ts';
 import { answerOf, askingAt } from './madeRecords.ts';
 
@@ -57,6 +60,30 @@ describe('records in PostgreSQL', () => {
       ),
     );
     expect(accepted(await first.verify())).toMatchObject({ answers: 8, askings: 8, faults: [] });
+  });
+
+  test('are kept and read where the environment names the database', async () => {
+    const settings = accepted(withRecordsUrl(exampleSettings(), { LEADSMAN_RECORDS_URL: await addressed() }));
+    const keeping = recordsToKeep(settings);
+    accepted(await keeping.keep(answerOf('R-A'), askingAt(1)));
+    const reading = recordsToRead(settings);
+    expect(accepted(await reading.find('R-A'))?.askings).toHaveLength(1);
+    expect(keeping.trouble()).toBe(null);
+    await keeping.close();
+    await reading.close();
+  });
+
+  test('whose making was interrupted are made to the end by the next start', async () => {
+    const url = await addressed();
+    const schema = /search_path%3D(\w+)/.exec(url)?.[1] ?? '';
+    await server?.query(`create table ${schema}.deliveries (key text)`);
+    expect(refusalCode(await openPostgres(url))).toBe('storeUnavailable');
+    const made = await server?.query(`select max(version) as version from ${schema}.schema_versions`);
+    expect(made).toEqual([{ version: 1 }]);
+    await server?.query(`drop table ${schema}.deliveries`);
+    const store = accepted(await openPostgres(url));
+    opened.push(store);
+    accepted(await store.inbox.release('ann'));
   });
 
   test('cannot be copied to a file, which is said', async () => {

@@ -111,6 +111,8 @@ export type Recalled = {
   readonly standing: { readonly channel: string; readonly ts: string } | null;
   /** The placeholder that was to become the answer, with what it was to say. */
   readonly editing: PostedContent | null;
+  /** The answer was about to be posted, or was: whoever has it in hand sees to it that it is. */
+  readonly replied: boolean;
 };
 
 export type EventMemory = {

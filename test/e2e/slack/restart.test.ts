@@ -150,6 +150,20 @@ describe('an answer that was posted by a process that ended before it could note
     expect(textsOf(platform.posts.all)).toEqual(['Heard: interval KELP']);
   });
 
+  it('gets no line in its place, however much later it is found', async () => {
+    const first = await startMortal();
+    const { platform } = first.stage;
+    platform.mention({ channel: 'C0DESK', text: 'interval KELP' });
+    await platform.posts.next();
+    const next = await takeOver(first, 601_000);
+    await platform.time.timerSet(7_000, 2);
+    await next.bot.idle();
+    platform.time.advance(leaseAndRoundMs);
+    await next.bot.idle();
+    expect(textsOf(platform.posts.all)).toEqual(['Heard: interval KELP']);
+    expect(accepted(await first.whole.inbox.takeOver({ holder: 'x', untilMs: 0 }, 9e15, [], 9))).toEqual([]);
+  });
+
   it('takes the placeholder away that the first has left', async () => {
     const { conversation, questions } = answeringLater();
     const first = await startMortal({ conversation });

@@ -9,7 +9,7 @@ import type { DeliveryStore } from './ports.ts';
 const patienceMs = 30_000;
 const storeRetryMs = 1_000;
 
-const firstTime: Recalled = { again: false, standing: null, editing: null };
+const firstTime: Recalled = { again: false, standing: null, editing: null, replied: false };
 
 /** What an earlier try at an answer has left in the workspace, from the records. */
 export const makeMemory = (
@@ -40,9 +40,11 @@ export const makeMemory = (
       const event = inbox.underWay(key);
       if (event === null || event.tries <= 1) return firstTime;
       const kept = await left([placeholderKey(key), replyKey(key, 0)]);
-      const standing = await standingOf(kept.find((saying) => saying.key === placeholderKey(key)));
+      const placeholder = await standingOf(kept.find((saying) => saying.key === placeholderKey(key)));
       const replied = kept.some((saying) => saying.key === replyKey(key, 0));
-      return { again: true, standing, editing: replied ? null : event.editing };
+      const editing = replied ? null : event.editing;
+      const changed = editing === null ? null : { channel: editing.channel, ts: editing.ts };
+      return { again: true, standing: placeholder ?? changed, editing, replied };
     },
     willEdit: inbox.willEdit,
   };

@@ -2,7 +2,7 @@ import type { App } from '@slack/bolt';
 import type { KeptEvent } from '../../../terms/inbox.ts';
 import type { Delivering } from '../deliver.ts';
 import { makeSend } from '../deliver.ts';
-import type { EventMemory } from '../ports.ts';
+import type { EventMemory, SpokenReply } from '../ports.ts';
 import type { Voice } from '../post.ts';
 import type { Respond } from '../respond.ts';
 import type { Work } from '../work.ts';
@@ -16,7 +16,7 @@ export type DurableDesk = {
   readonly store: DurableStore;
   readonly holder: string;
   readonly delivering: Delivering;
-  readonly voice: Pick<Voice, 'remove'>;
+  readonly voice: Pick<Voice, 'remove' | 'update'>;
   readonly respond: Respond;
   readonly work: Work;
   readonly app: () => App;
@@ -48,14 +48,21 @@ export const makeDurable = ({
     work,
   });
 
-  const takeUp = async (event: KeptEvent): Promise<void> => {
-    const instead = lineInstead(event, time.nowMs());
-    if (instead !== null) {
-      const { standing } = await memory.recall(event.key);
-      await sayLate({ self, time, deliveries: outbox, respond }, event, instead);
-      if (standing !== null) await voice.remove(standing);
+  /** An answer that was about to stand is brought to stand; only where there is none a line is said in its place. */
+  const giveUp = async (event: KeptEvent, line: SpokenReply): Promise<void> => {
+    const { standing, editing, replied } = await memory.recall(event.key);
+    if (editing !== null) {
+      const { content, ...at } = editing;
+      await voice.update(at, content);
       return;
     }
+    if (!replied) await sayLate({ self, time, deliveries: outbox, respond }, event, line);
+    if (standing !== null) await voice.remove(standing);
+  };
+
+  const takeUp = async (event: KeptEvent): Promise<void> => {
+    const instead = lineInstead(event, time.nowMs());
+    if (instead !== null) return giveUp(event, instead);
     // it was acknowledged when it arrived
     await app().processEvent({ body: JSON.parse(event.body), ack: async () => {} });
   };
