@@ -1,11 +1,10 @@
 import { gzipSync } from 'node:zlib';
 import fc from 'fast-check';
 import { afterAll, expect, test } from 'vitest';
-import { makeCollected } from '../../../src/feed/internal/read/collected.ts';
+import { makeCollected, type ReadFiles } from '../../../src/feed/internal/read/collected.ts';
 import { openDatabase } from '../../../src/feed/internal/read/database.ts';
 import { mayBePlain, readPlainFile } from '../../../src/feed/internal/read/plainFile.ts';
 import { readQueriedFiles } from '../../../src/feed/internal/read/queriedFiles.ts';
-import type { ReadFiles } from '../../../src/feed/internal/read/readPriceFiles.ts';
 import { rowsOf } from '../../../src/feed/internal/sortedColumns.ts';
 import { sortRows } from '../../../src/feed/internal/sortRows.ts';
 import { listPriceFiles } from '../../../src/feed/priceFiles.ts';

@@ -1,3 +1,4 @@
+import type { FileReport } from '../../../terms/feedReport.ts';
 import { type Findings, makeFindings } from '../findings.ts';
 import { makeRowStore, type RowStore } from '../rowStore.ts';
 
@@ -19,6 +20,9 @@ export type Collected = RowStore & {
   readonly extrasOf: (tickerNumber: number) => TickerExtras | null;
   readonly findings: Findings;
 };
+
+/** The rows of all files, and a report on each file. */
+export type ReadFiles = { readonly files: readonly FileReport[]; readonly collected: Collected };
 
 export const makeCollected = (): Collected => {
   const names: string[] = [];
@@ -59,7 +63,8 @@ export const wrongName = -2;
 
 /** The number of the ticker that a cell names, or what stands for none. */
 export const numberOfCell = (text: string, { numberOf }: Collected): number => {
-  const name = text.trim();
+  // spaces alone, as everywhere else: a control character beside a name is a fault to be told
+  const name = text.replace(/^ +| +$/g, '');
   if (name === '') return noTicker;
   return isTickerName(name) ? numberOf(name) : wrongName;
 };

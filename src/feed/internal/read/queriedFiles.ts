@@ -5,12 +5,11 @@ import { type Result, refuse, succeed } from '../../../terms/result.ts';
 import type { FileState } from '../../priceFiles.ts';
 import type { FeedSettings } from '../../settings.ts';
 import { acceptFile } from './acceptFile.ts';
-import { type Collected, makeCollected } from './collected.ts';
+import { type Collected, makeCollected, type ReadFiles } from './collected.ts';
 import type { Database } from './database.ts';
 import type { FileKind } from './fileKind.ts';
 import { type FileReading, readLongRows } from './longRows.ts';
 import { readerProblem } from './readerProblem.ts';
-import type { ReadFiles } from './readPriceFiles.ts';
 import { openSource } from './source.ts';
 import { readWideRows } from './wideRows.ts';
 

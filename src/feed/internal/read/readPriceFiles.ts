@@ -2,11 +2,9 @@ import type { FileReport } from '../../../terms/feedReport.ts';
 import { type Result, succeed } from '../../../terms/result.ts';
 import type { FileState } from '../../priceFiles.ts';
 import type { FeedSettings } from '../../settings.ts';
-import { type Collected, makeCollected } from './collected.ts';
+import { makeCollected, type ReadFiles } from './collected.ts';
 import type { Database } from './database.ts';
 import { mayBePlain, readPlainFile } from './plainFile.ts';
-
-export type ReadFiles = { readonly files: readonly FileReport[]; readonly collected: Collected };
 
 /** All rows of all files where every file is plain; null where one is not. */
 const readPlainFiles = async (
