@@ -69,6 +69,16 @@ describe('standings', () => {
     expect(both[1]?.dieboldMarianoP).toBeCloseTo(2 * alone, 12);
   });
 
+  test('a model without a joint loss is not the best of models whose joint losses are above zero', () => {
+    // Losses in hundredths are a hundred times as large, and the logarithm of ES above zero.
+    const large = losses.map((loss) => 100 * loss);
+    const none = model(-1, 0, large);
+    const [, good, low] = standings([none, model(196, 233.8, large), model(50, 80, large)], level('0.975'));
+    expect(good?.meanJointLoss).toBeGreaterThan(0);
+    expect(good?.dieboldMarianoP).toBeNull();
+    expect(low?.dieboldMarianoP).toBeLessThan(0.01);
+  });
+
   test('no model has no place', () => {
     expect(standings([], level('0.975'))).toEqual([]);
   });

@@ -48,7 +48,7 @@ describe('the least that can be tested', () => {
       [1, 2, 4, 9],
       [1.588235294117647, 0.25437353970150745],
     ],
-  ])('%j against %j', (first, second, [statistic, p]) => {
+  ] as const)('%j against %j', (first, second, [statistic, p]) => {
     const actual = brownForsytheTest([first, second]);
     // Small whole numbers lose nothing on the way; SciPy's F is good to about 13 digits.
     expect(relativeError(actual?.statistic ?? 0, statistic)).toBeLessThan(1e-12);

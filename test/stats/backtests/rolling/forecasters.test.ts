@@ -16,7 +16,7 @@ import { filterByEwma } from '../../../../src/stats/volatility/ewma.ts';
 import { fitGarch, processOf } from '../../../../src/stats/volatility/garch.ts';
 import { filterByGarch } from '../../../../src/stats/volatility/garchPath.ts';
 import { ceilingOfCount, expectedBeyond, tailFraction } from '../../../../src/terms/level.ts';
-import { accepted, refusalCode } from '../../../laws/outcomes.ts';
+import { accepted, refusalCode, refusalMessage } from '../../../laws/outcomes.ts';
 import { relativeError } from '../../../laws/relativeError.ts';
 import { indexReturns } from '../../indexWindows.ts';
 import { level } from '../../levels.ts';
@@ -156,6 +156,21 @@ describe.each(Object.entries(starters))('%s', (_, start) => {
     expect(forecasts[0]?.refused).toBe('priceDoesNotMove');
     expect(forecasts[10]?.refused).toBe('priceDoesNotMove');
   });
+});
+
+test.each(['historical', 'normal', 'student', 'filtered', 'peaks'] as const)(
+  'the forecaster of %s says so',
+  (model) => {
+    expect(accepted(starters[model](spanOf())).model).toBe(model);
+  },
+);
+
+test.each([
+  ['normal', 19, 'A normal tail figure needs at least 20 returns'],
+  ['student', 19, 'A Student fit needs at least 20 returns'],
+  ['peaks', 249, 'A tail fitted to the largest losses needs at least 250 returns'],
+] as const)('the refusal of %s names the figure', (model, estimationReturns, words) => {
+  expect(refusalMessage(starters[model](spanOf({ estimationReturns })))).toContain(words);
 });
 
 describe('windows too short for the model', () => {
