@@ -246,7 +246,11 @@ export const liveThrough = async (
     }
     const acknowledged = acknowledgedOf(asked);
     const untilMs = Date.now() + withinMs;
-    const isDone = async () => (await place.unsettled()) === 0 && platform.posts.all.length >= digestCount;
+    const isPosted = (id: string) =>
+      platform.posts.all.some(({ metadata }) => metadata?.event_payload['id'] === id);
+    // a digest that the copies were just told of is not in the store yet
+    const isDone = async () =>
+      digests.every(({ key }) => isPosted(deliveryIdOf(key))) && (await place.unsettled()) === 0;
     while (!(await isDone()) && Date.now() < untilMs) await pause(200);
     const keys = digests.map(({ key }) => key);
     const answered = asked.filter(({ ts }) => acknowledged.has(ts));
