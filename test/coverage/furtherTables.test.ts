@@ -23,14 +23,17 @@ test.each([
   ['beyond.historical.0.01', 'studentT4', 20, '0.95'],
   ['deviation.bonett', 'garchT', 20, '0.9'],
   ['mean.plain', 'normal', 20, '0.99'],
-] as const)('the table holds what the simulation of %s gives today: %s returns, %i at %s', (...asked) => {
-  const cell = cellOf(...asked);
-  const [name, process, count, level, , replications] = cell;
-  const procedure = procedures.find((one) => one.name === name);
-  if (procedure === undefined) throw new Error(`no procedure ${name}`);
-  // Exact: the streams are seeded by the cell itself.
-  expect(simulateCell({ procedure, process, count, level, replications })).toEqual(cell);
-});
+] as const)(
+  'the table holds what the simulation of %s gives today: %s returns, %i at %s',
+  (asked, made, at, text) => {
+    const cell = cellOf(asked, made, at, text);
+    const [name, process, count, level, , replications] = cell;
+    const procedure = procedures.find((one) => one.name === name);
+    if (procedure === undefined) throw new Error(`no procedure ${name}`);
+    // Exact: the streams are seeded by the cell itself.
+    expect(simulateCell({ procedure, process, count, level, replications })).toEqual(cell);
+  },
+);
 
 /** Four standard errors of a share at its level. */
 const allowance = (level: number, replications: number): number =>
