@@ -261,6 +261,21 @@ describe('a record', () => {
     },
   );
 
+  test('that is not kept is not worked out anew under a button where its verb may not be asked', async () => {
+    const converse = createConverse(
+      deskOn({ ...records, keeps: false }, () => live, {
+        permissions: createPermissions(confined, places, { nowMs: () => morningMs }),
+      }),
+    );
+    const codeIn = async (where: string) => {
+      const pressed = { action: 'working', answerId: 'R-0000000000', question: 'tail KELP 60d' } as const;
+      const [spoken] = await converse.press({ ...pressed, ...putBy('U1ADA', where) });
+      return spoken?.outcome?.ok === false ? spoken.outcome.problem.code : spoken?.reply.kind;
+    };
+    expect(await codeIn('C1DESK')).toBe('unknownRecord');
+    expect(await codeIn('C1RISK')).not.toBe('unknownRecord');
+  });
+
   test('that may not be read costs the store as many look-ups as one that does not exist', async () => {
     const counted: string[] = [];
     const store = {
