@@ -38,7 +38,7 @@ export default {
     'test/questions',
   ],
   reporters: ['clear-text', 'json'],
-  jsonReporter: { fileName: `.stryker-tmp/reports/${part?.name ?? 'mutation'}.json` },
+  jsonReporter: { fileName: `.stryker-tmp/reports/${named?.name ?? 'piece'}.json` },
   clearTextReporter: { allowColor: false, logTests: false, reportTests: false, reportScoreTable: true },
   warnings: { slow: false },
   thresholds: { high: 90, low: 85, break: null },
