@@ -89,25 +89,18 @@ const seek = async (time: Time, look: () => Promise<Found>): Promise<Found> => {
 const stamp = (body: Readonly<Record<string, unknown>>): string =>
   typeof body['ts'] === 'string' ? body['ts'] : '';
 
-type Attempt = (Outcome | { readonly kind: 'over' | 'taken' }) & { readonly startedMs: number };
+type Failing = (to: Destination, code: string, details?: readonly string[]) => Sent;
 
-/**
- * Posts a message once, whatever happens to the answers. The delivery id in its metadata tells whether a post whose
- * answer was lost has arrived; it is posted again only once it is known not to have.
- */
-export const makeSend = (desk: Delivering) => {
-  const { time, log } = desk;
-
-  const posted = (outcome: Extract<Outcome, { kind: 'done' }>): Sent => {
-    if (outcome.warnings.includes('invalid_metadata_schema'))
-      log.error('The platform dropped the delivery id of a post: a lost answer could not be cleared up.');
-    return { kind: 'said', ts: stamp(outcome.body) };
-  };
-
-  const failed = (to: Destination, code: string, details: readonly string[] = []): Sent => {
-    log.error(`A message to ${to.channel} was not delivered: ${[code, ...details].join('; ')}.`);
+const failingWith =
+  ({ error }: Logger): Failing =>
+  (to, code, details = []) => {
+    error(`A message to ${to.channel} was not delivered: ${[code, ...details].join('; ')}.`);
     return { kind: 'refused', code };
   };
+
+/** Finds out what became of attempts whose answer is lost, or that others have made. */
+const makeLookBack = (desk: Delivering, failed: Failing) => {
+  const { time, log } = desk;
 
   /** What is done where nobody can know: the settings say which of the two risks is taken. */
   const asSettingsSay = (to: Destination, reason: string): Sent | null => {
@@ -136,6 +129,26 @@ export const makeSend = (desk: Delivering) => {
     if (earlier.kind === 'none' || !desk.canLookUp) return null;
     const found = await find(to, sending);
     return found.kind === 'found' ? { kind: 'said', ts: found.ts } : null;
+  };
+
+  return { clearUp, lookBefore };
+};
+
+type Attempt = (Outcome | { readonly kind: 'over' | 'taken' }) & { readonly startedMs: number };
+
+/**
+ * Posts a message once, whatever happens to the answers. The delivery id in its metadata tells whether a post whose
+ * answer was lost has arrived; it is posted again only once it is known not to have.
+ */
+export const makeSend = (desk: Delivering) => {
+  const { time, log } = desk;
+  const failed = failingWith(log);
+  const { clearUp, lookBefore } = makeLookBack(desk, failed);
+
+  const posted = (outcome: Extract<Outcome, { kind: 'done' }>): Sent => {
+    if (outcome.warnings.includes('invalid_metadata_schema'))
+      log.error('The platform dropped the delivery id of a post: a lost answer could not be cleared up.');
+    return { kind: 'said', ts: stamp(outcome.body) };
   };
 
   const isOver = ({ expiresAtMs }: Sending): boolean => expiresAtMs !== null && time.nowMs() > expiresAtMs;

@@ -37,12 +37,17 @@ export type OutboxDesk = {
 export const deliveryIdOf = (key: string): string =>
   createHash('sha256').update(`leadsman ${key}`).digest('hex').slice(0, 32);
 
-export const makeOutbox = (desk: OutboxDesk): Outbox => {
-  const { store, holder, time, log, work } = desk;
-  const underWay = new Map<string, Promise<SayingOutcome>>();
+const earlierOf = (kept: KeptSaying | null, again: boolean): Earlier => {
+  if (kept === null || (again && kept.firstAttemptMs === null)) return { kind: 'possible' };
+  return kept.unsure ? { kind: 'unsure', attemptedMs: kept.lastAttemptMs ?? 0 } : { kind: 'none' };
+};
 
-  /** Tries until the store does it; null where somebody waits and the store has used up the patience. */
-  const insist = async <T>(urgent: boolean, ask: () => Promise<Result<T>>): Promise<T | null> => {
+type Insist = <T>(urgent: boolean, ask: () => Promise<Result<T>>) => Promise<T | null>;
+
+/** Tries until the store does it; null where somebody waits and the store has used up the patience. */
+const insisting =
+  (time: Time, holding: Pick<Holding, 'note' | 'failingSinceMs'>): Insist =>
+  async (urgent, ask) => {
     for (;;) {
       const done = holding.note(await ask());
       if (done.ok) return done.value;
@@ -52,10 +57,9 @@ export const makeOutbox = (desk: OutboxDesk): Outbox => {
     }
   };
 
-  const earlierOf = (kept: KeptSaying | null, again: boolean): Earlier => {
-    if (kept === null || (again && kept.firstAttemptMs === null)) return { kind: 'possible' };
-    return kept.unsure ? { kind: 'unsure', attemptedMs: kept.lastAttemptMs ?? 0 } : { kind: 'none' };
-  };
+export const makeOutbox = (desk: OutboxDesk): Outbox => {
+  const { store, holder, time, log, work } = desk;
+  const underWay = new Map<string, Promise<SayingOutcome>>();
 
   const sendingOf = (saying: Saying, kept: KeptSaying | null, again: boolean): Sending => ({
     deliveryId: kept?.deliveryId ?? deliveryIdOf(saying.key),
@@ -123,6 +127,7 @@ export const makeOutbox = (desk: OutboxDesk): Outbox => {
   };
 
   const holding = makeHolding(holder, store, time, takeUp);
+  const insist = insisting(time, holding);
 
   return {
     say: (saying) => sayOnce(saying, false),
