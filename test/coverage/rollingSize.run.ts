@@ -1,6 +1,6 @@
 import { writeFileSync } from 'node:fs';
 import { describe, test } from 'vitest';
-import type { RollingSizeCell } from '../../src/stats/coverage/rollingSize.ts';
+import type { RollingSizeCell } from '../../src/stats/coverage/rollingSizeCell.ts';
 import { measureSize, type SizeProcess } from '../stats/backtests/rollingSize.ts';
 import { level } from '../stats/levels.ts';
 import { literal } from './suite.ts';
@@ -14,7 +14,7 @@ const rounded = (value: number, places: number): number => Number(value.toFixed(
 
 const sourceOf = (cells: readonly RollingSizeCell[]): string =>
   [
-    "import type { RollingSizeCell } from '../rollingSize.ts';",
+    "import type { RollingSizeCell } from '../rollingSizeCell.ts';",
     '',
     '/** Written by `npm run coverage-table`; not to be edited. */',
     'export const rollingSizeMeasured: readonly RollingSizeCell[] = [',

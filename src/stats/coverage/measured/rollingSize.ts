@@ -1,4 +1,4 @@
-import type { RollingSizeCell } from '../rollingSize.ts';
+import type { RollingSizeCell } from '../rollingSizeCell.ts';
 
 /** Written by `npm run coverage-table`; not to be edited. */
 export const rollingSizeMeasured: readonly RollingSizeCell[] = [
