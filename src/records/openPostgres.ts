@@ -46,8 +46,9 @@ export const connectPostgres = async (url: string): Promise<Result<Connection>> 
     query_timeout: 2 * statementWithinMs,
     types: readTypes,
   });
-  // an idle connection that breaks is replaced at the next use
+  // a connection that breaks is replaced at the next use; where a statement was under way, that fails and says why
   pool.on('error', () => {});
+  pool.on('connect', (client) => client.on('error', () => {}));
   const db = new Kysely<Tables>({ dialect: new PostgresDialect({ pool }) });
   try {
     await migrateAlone(db);

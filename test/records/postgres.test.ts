@@ -106,7 +106,9 @@ describe('records in PostgreSQL', () => {
     accepted(await store.keep(answerOf('R-A'), askingAt(1)));
     const others = 'pid <> pg_backend_pid() and datname is not null';
     await server?.query(`select pg_terminate_backend(pid) from pg_stat_activity where ${others}`);
-    const next = await store.find('R-A');
-    expect(accepted(next.ok ? next : await store.find('R-A'))?.askings).toHaveLength(1);
+    // each use that meets a broken connection fails and gives it up
+    let found = await store.find('R-A');
+    for (let tried = 0; tried < 8 && !found.ok; tried += 1) found = await store.find('R-A');
+    expect(accepted(found)?.askings).toHaveLength(1);
   });
 });
