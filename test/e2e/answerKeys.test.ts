@@ -176,13 +176,14 @@ describe('every documented key', () => {
     );
   });
 
-  test('a ticker’s prices come with a small picture where it is asked for', async () => {
-    const heads = async (text: string) =>
-      (await converse.ask({ text, place: 'terminal' })).flatMap(({ reply }) =>
-        reply.passages.map(({ head }) => head),
-      );
-    expect(await heads('feed KELP as picture')).toContain('Closes, oldest first');
-    expect(await heads('feed KELP')).not.toContain('Closes, oldest first');
+  test('a ticker’s prices come with a picture where it is asked for, and with what stands for it in text', async () => {
+    const pictures = async (text: string) =>
+      (await converse.ask({ text, place: 'terminal' })).flatMap((spoken) => spoken.pictures ?? []);
+    const [picture, ...others] = await pictures('feed KELP as picture');
+    expect(picture?.inText.map(({ head }) => head)).toEqual(['Closes, oldest first']);
+    expect(picture?.altText).toContain('KELP');
+    expect(others).toEqual([]);
+    expect(await pictures('feed KELP')).toEqual([]);
   });
 
   test.each([
