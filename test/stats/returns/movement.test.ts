@@ -4,6 +4,7 @@ import { doesNotMove } from '../../../src/stats/returns/movement.ts';
 
 describe('doesNotMove', () => {
   test.each([
+    ['nothing at all', [], true],
     ['zeros', [0, 0, 0], true],
     ['one return', [0.01], true],
     ['the same growth up to rounding', [0.01, 0.01 + 1e-15], true],
@@ -24,11 +25,19 @@ describe('refusals', () => {
     expect(refusal?.problem.message).toBe(
       'A bootstrap interval needs at least 10 returns, and there are 9. Ask for a window of 10 days or more.',
     );
+    expect(refuseTooFew(1, 10, 'A mean')?.problem.message).toContain('and there is 1. Ask');
     expect(refuseTooFew(10, 10, 'A bootstrap interval')).toBeNull();
   });
 
   test('a price that stands still is refused in words', () => {
-    expect(refuseStill([0, 0], 'A mean')?.problem.code).toBe('priceDoesNotMove');
+    expect(refuseStill([0, 0], 'A mean')?.problem).toMatchObject({
+      code: 'priceDoesNotMove',
+      message:
+        'A mean needs returns that differ, and all 2 are zero: the price does not move. Check the feed, or ask for a longer window.',
+    });
+    expect(refuseStill([0.01, 0.01, 0.01], 'A mean')?.problem.message).toContain(
+      'all 3 are the same, 0.01: the price',
+    );
     expect(refuseStill([0, 0.01], 'A mean')).toBeNull();
   });
 
